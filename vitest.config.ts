@@ -1,0 +1,40 @@
+import react from '@vitejs/plugin-react';
+import { defineConfig } from 'vitest/config';
+
+// Three kinds of test: plain ones in Node, components in a stand-in for the browser's page, and the
+// built app in a real browser. The last runs after the others, one file at a time.
+export default defineConfig({
+  test: {
+    projects: [
+      {
+        test: {
+          name: 'unit',
+          include: ['test/**/*.test.ts'],
+          exclude: ['test/**/*.e2e.test.ts'],
+          environment: 'node',
+          testTimeout: 30_000,
+        },
+      },
+      {
+        plugins: [react()],
+        test: {
+          name: 'ui',
+          include: ['test/**/*.test.tsx'],
+          environment: 'happy-dom',
+          benchmark: { include: [] },
+        },
+      },
+      {
+        test: {
+          name: 'e2e',
+          include: ['test/**/*.e2e.test.ts'],
+          fileParallelism: false,
+          sequence: { groupOrder: 1 },
+          testTimeout: 60_000,
+          hookTimeout: 60_000,
+          benchmark: { include: [] },
+        },
+      },
+    ],
+  },
+});

@@ -1,0 +1,73 @@
+// A weather table after reading: hourly typed arrays in SI on one time axis, with every repair and
+// assumption beside it.
+//
+// Time axis: index h covers the hour h:00 to h+1:00 of local standard time (a fixed offset from UTC,
+// no daylight saving), counted from 1 January 00:00. Readers shift their file's stamps to it.
+
+/** Where the weather was taken, and the clock it is written in. */
+export interface Site {
+  readonly name: string;
+  /** North positive, -90 to 90. */
+  readonly latitudeDeg: number;
+  /** East positive, -180 to 180. */
+  readonly longitudeDeg: number;
+  readonly elevationM: number;
+  /** Local standard time minus UTC, -12 to 14. */
+  readonly utcOffsetH: number;
+}
+
+/**
+ * What one value of a column says about its hour: the mean over it, or a reading at one moment,
+ * `at` = 0 at its start, 0.5 in its middle, 1 at its end.
+ */
+export type Stands = { readonly kind: 'mean' } | { readonly kind: 'reading'; readonly at: number };
+
+/** One column: value of hour h is `values[h]`, always finite. */
+export interface WeatherColumn {
+  readonly values: Float64Array;
+  readonly stands: Stands;
+  /** Whether the file held it, or it was computed from other columns, or a default was taken. */
+  readonly origin: 'read' | 'derived' | 'assumed';
+}
+
+/** Something that was mended or assumed, for the results and the report. */
+export interface WeatherNote {
+  readonly kind: 'repair' | 'assumption';
+  /** What was done, with counts and rows, as a sentence. */
+  readonly text: string;
+  /** How many hourly values it touched. */
+  readonly count: number;
+}
+
+export interface WeatherYear {
+  readonly site: Site;
+  /** Data-set form the file was recognised as, for example "TMY3". */
+  readonly form: string;
+  /** The calendar that weekdays follow. */
+  readonly year: number;
+  /** 8760, or 8784 in a leap year that the file really holds. */
+  readonly hours: number;
+  /** The year each hour was taken from (a typical year is stitched from several): the sun follows it. */
+  readonly sourceYear: Int16Array;
+  readonly dryBulbC: WeatherColumn;
+  readonly dewPointC: WeatherColumn;
+  /** Share, 0 to 1. */
+  readonly relativeHumidity: WeatherColumn;
+  readonly pressurePa: WeatherColumn;
+  readonly windMPerS: WeatherColumn;
+  /** Direction the wind comes from, clockwise from north. */
+  readonly windFromDeg: WeatherColumn;
+  readonly ghiWPerM2: WeatherColumn;
+  readonly dniWPerM2: WeatherColumn;
+  readonly dhiWPerM2: WeatherColumn;
+  /** Absent where the file has none; then the sky's temperature comes from the columns below. */
+  readonly horizontalInfraredWPerM2?: WeatherColumn;
+  /** Share of the sky, 0 to 1. */
+  readonly skyCover?: WeatherColumn;
+  readonly opaqueSkyCover?: WeatherColumn;
+  /** Height of the cloud base; `Infinity` where the sky is unlimited. */
+  readonly ceilingM?: WeatherColumn;
+  /** Ground reflectance, 0 to 1. */
+  readonly albedo?: WeatherColumn;
+  readonly notes: readonly WeatherNote[];
+}
