@@ -1,0 +1,4 @@
+// The front door of the physics: all that other folders may import.
+export * from './inside-film.ts';
+export * from './outside-film.ts';
+export * from './wind-at-height.ts';
