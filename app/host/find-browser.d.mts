@@ -1,0 +1,4 @@
+export function findBrowser(
+  env?: Readonly<Record<string, string | undefined>>,
+  platform?: NodeJS.Platform,
+): string | null;
