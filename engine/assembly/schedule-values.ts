@@ -1,0 +1,79 @@
+// A schedule of the project, or a constant, as one value a step.
+import {
+  type Building,
+  type Profile,
+  profileOf,
+  type Schedule,
+  type Scheduled,
+  scheduleOf,
+} from '../building/index.ts';
+import type { StepClock } from './step-clock.ts';
+
+/** Where in the step the profile is read: set-points hold at its end, shares count by its middle. */
+type At = 'middle' | 'end';
+
+/** Value of the schedule with this id in every step. */
+export function scheduleValues(
+  building: Building,
+  id: string,
+  clock: StepClock,
+  at: At = 'middle',
+): Float64Array {
+  const schedule = scheduleOf(building, id);
+  const holidays = new Set(building.calendar.holidays);
+  const ofDay = clock.monthDay.map((monthDay, d) =>
+    profileOf(building, profileOfDay(schedule, monthDay, clock.weekday[d], holidays)),
+  );
+  const values = new Float64Array(clock.count);
+  const intoStepH = ((at === 'middle' ? 0.5 : 1) * clock.stepS) / 3600;
+  for (let k = 0; k < clock.count; k++)
+    values[k] = profileValue(ofDay[clock.day[k]], clock.hourOfDay[k] + intoStepH, at);
+  return values;
+}
+
+/** The same for a field that may hold a number instead. */
+export function scheduledValues(
+  building: Building,
+  value: Scheduled,
+  clock: StepClock,
+  at: At = 'middle',
+): Float64Array {
+  return typeof value === 'number'
+    ? new Float64Array(clock.count).fill(value)
+    : scheduleValues(building, value.schedule, clock, at);
+}
+
+function profileOfDay(
+  schedule: Schedule,
+  monthDay: string,
+  weekday: number,
+  holidays: ReadonlySet<string>,
+): string {
+  const period = schedule.periods.find(({ from, to }) =>
+    from <= to ? from <= monthDay && monthDay <= to : monthDay >= from || monthDay <= to,
+  );
+  const week = period ?? schedule;
+  if (holidays.has(monthDay) && week.holiday !== undefined) return week.holiday;
+  if (weekday === 6 && week.saturday !== undefined) return week.saturday;
+  if (weekday === 7 && week.sunday !== undefined) return week.sunday;
+  return week.profile;
+}
+
+/** Value of a day's profile; at a jump `end` takes the value before it, `middle` the one after. */
+function profileValue(profile: Profile, hour: number, at: At): number {
+  if (profile.kind === 'hours') {
+    const h = at === 'end' ? Math.ceil(hour - 1e-9) - 1 : Math.floor(hour + 1e-9);
+    return profile.values[Math.min(23, Math.max(0, h))];
+  }
+  const { points } = profile;
+  let before = -1;
+  for (let i = 0; i < points.length; i++) {
+    const passed = at === 'end' ? points[i].atH < hour - 1e-9 : points[i].atH <= hour + 1e-9;
+    if (passed) before = i;
+  }
+  if (before < 0) return points[0].value;
+  if (before === points.length - 1) return points[before].value;
+  const a = points[before];
+  const b = points[before + 1];
+  return a.value + ((b.value - a.value) * (hour - a.atH)) / (b.atH - a.atH);
+}

@@ -1,0 +1,24 @@
+// The front door: the building as data, its parser, and looking things up in it.
+export { type Box, boxFaceAreasM2, boxFaceOf } from './box-face.ts';
+export {
+  constructionOf,
+  glazingOf,
+  materialOf,
+  profileOf,
+  roomOf,
+  scheduleOf,
+  surfaceOf,
+} from './find.ts';
+export { parseProject, parseProjectDocument } from './parse-project.ts';
+export type { Construction, Glazing, Layer, Material, Pane, PaneGlazing } from './schema-fabric.ts';
+export { type Building, type Physics, projectSchema } from './schema-project.ts';
+export type {
+  Boundary,
+  Heating,
+  Opening,
+  Rectangle,
+  Room,
+  Scheduled,
+  Surface,
+} from './schema-room.ts';
+export type { Calendar, Profile, Schedule } from './schema-use.ts';

@@ -1,0 +1,74 @@
+// The whole project file: one JSON document, checked by one schema.
+import { z } from 'zod';
+import { constructionSchema, glazingSchema, materialSchema } from './schema-fabric.ts';
+import { airExchangeSchema, airPathSchema, roomSchema } from './schema-room.ts';
+import { calendarSchema, profileSchema, scheduleSchema } from './schema-use.ts';
+import { between, id, share, text } from './schema-values.ts';
+
+/** Which published method computes what; the defaults are the first of each list. */
+const physicsSchema = z.strictObject({
+  conduction: z.enum(['fine', 'coarse']).default('fine'),
+  insideConvection: z.enum(['walton', 'alamdari-hammond', 'iso-6946']).default('walton'),
+  outsideConvection: z.enum(['yazdanian-klems', 'iso-6946', 'mcadams']).default('yazdanian-klems'),
+  insideLongWave: z.enum(['grey-enclosure', 'mean-radiant-node']).default('grey-enclosure'),
+  outsideLongWave: z.enum(['low-sky-at-air', 'unmixed-sky']).default('low-sky-at-air'),
+  diffuseSky: z.enum(['perez', 'hay-davies', 'isotropic']).default('perez'),
+  beamInside: z.enum(['floor', 'patch']).default('floor'),
+});
+
+const siteSchema = z.strictObject({
+  /** Land around the building, for the wind at the height of a face. */
+  terrain: z.enum(['water', 'open', 'suburban', 'city']).default('open'),
+  groundReflectance: share.default(0.2),
+});
+
+const weatherSourceSchema = z.strictObject({
+  /** Relative to the project file. */
+  file: z.string().min(1),
+  /** Of the bytes that were read when the project was made. */
+  sha256: z
+    .string()
+    .regex(/^[0-9a-f]{64}$/, '64 hexadecimal digits')
+    .optional(),
+  /** Where the table does not say. */
+  site: z
+    .strictObject({
+      name: text.default(''),
+      latitudeDeg: between(-90, 90),
+      longitudeDeg: between(-180, 180),
+      elevationM: between(-500, 9000),
+      utcOffsetH: between(-12, 14),
+    })
+    .optional(),
+});
+
+/** A named list of changes to the base: at `path` in this document the value becomes `value`. */
+const optionSchema = z.strictObject({
+  id,
+  name: text,
+  changes: z.array(z.strictObject({ path: z.string().min(1), value: z.json() })),
+});
+
+export const projectSchema = z.strictObject({
+  format: z.literal('inglenook-project'),
+  version: z.literal(1),
+  name: text,
+  notes: text.default(''),
+  weather: weatherSourceSchema.optional(),
+  site: siteSchema.prefault({}),
+  calendar: calendarSchema.prefault({}),
+  physics: physicsSchema.prefault({}),
+  materials: z.array(materialSchema).default([]),
+  constructions: z.array(constructionSchema).default([]),
+  glazings: z.array(glazingSchema).default([]),
+  profiles: z.array(profileSchema).default([]),
+  schedules: z.array(scheduleSchema).default([]),
+  rooms: z.array(roomSchema).min(1),
+  airPaths: z.array(airPathSchema).default([]),
+  airExchanges: z.array(airExchangeSchema).default([]),
+  options: z.array(optionSchema).default([]),
+});
+
+/** The project with every default filled in. */
+export type Building = z.infer<typeof projectSchema>;
+export type Physics = Building['physics'];

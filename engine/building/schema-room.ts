@@ -1,0 +1,150 @@
+// One room: faces, openings, masses, use, air and plant.
+import { z } from 'zod';
+import { between, id, positive, scheduled, share, temperatureC, text } from './schema-values.ts';
+
+/** Lower left corner and size on the wall as seen from inside, or on the floor seen from above. */
+const rectangleSchema = z.strictObject({
+  leftM: z.number().gte(0),
+  bottomM: z.number().gte(0),
+  widthM: positive(200),
+  heightM: positive(200),
+});
+
+const openingSchema = z.strictObject({
+  id,
+  name: text.optional(),
+  glazing: id,
+  areaM2: positive(1000),
+  /** Place on the face; its size must give `areaM2`. Used for view factors, shading and the sun's patch. */
+  rectangle: rectangleSchema.optional(),
+});
+
+const boundarySchema = z.discriminatedUnion('kind', [
+  z.strictObject({ kind: z.literal('outdoors') }),
+  /** Temperature under the construction: constant, or twelve monthly means. */
+  z.strictObject({
+    kind: z.literal('ground'),
+    temperatureC: z.union([temperatureC, z.array(temperatureC).length(12)]),
+  }),
+  /** The other room lists the same partition and names this surface. */
+  z.strictObject({ kind: z.literal('room'), room: id, surface: id }),
+  z.strictObject({ kind: z.literal('fixed'), temperatureC: scheduled(temperatureC) }),
+  z.strictObject({ kind: z.literal('adiabatic') }),
+]);
+
+const surfaceSchema = z.strictObject({
+  id,
+  name: text.optional(),
+  construction: id,
+  /** The layers run the other way round: from this room to the other. Partitions only. */
+  reversed: z.boolean().default(false),
+  /** Gross: openings included. */
+  areaM2: positive(1e5),
+  /** Of the outward normal: 0 a roof, 90 a wall, 180 a floor. */
+  tiltDeg: between(0, 180),
+  /** Outward normal, clockwise from north; of no account when flat. */
+  azimuthDeg: between(0, 360).default(0),
+  /** Height of its middle above the ground outside, for the wind; left out: 1.35 m for walls, room height for roofs. */
+  heightAboveGroundM: between(0, 500).optional(),
+  boundary: boundarySchema,
+  openings: z.array(openingSchema).default([]),
+});
+
+/** Furniture and the like: a capacity that follows the air through its own surface. */
+const internalMassSchema = z.strictObject({
+  id,
+  name: text.optional(),
+  capacityJPerK: positive(1e10),
+  areaM2: positive(1e5),
+});
+
+const gainSchema = z.strictObject({
+  id,
+  name: text.optional(),
+  kind: z.enum(['people', 'lighting', 'equipment']),
+  /** Sensible heat at schedule value 1. */
+  powerW: between(0, 1e6),
+  /** Multiplies the power; left out: always on. */
+  schedule: id.optional(),
+  radiantShare: share.default(0.5),
+});
+
+const heatingSchema = z.strictObject({
+  setPointC: scheduled(temperatureC),
+  /** Left out: without limit. */
+  maxW: between(0, 1e7).optional(),
+  /** The rest reaches the room's surfaces as radiation, by area. */
+  convectiveShare: share.default(1),
+  sensor: z.enum(['air', 'operative']).default('air'),
+  /** 0: ideal control to the set-point. */
+  bandK: between(0, 10).default(0),
+});
+
+const comfortSchema = z.strictObject({
+  bandLowC: scheduled(temperatureC),
+  bandHighC: scheduled(temperatureC),
+  /** Occupied where the value is above 0; left out: every hour. */
+  occupied: id.optional(),
+});
+
+const ventilationSchema = z.strictObject({
+  id,
+  name: text.optional(),
+  /** Outdoor air brought in and the same taken out. */
+  flowM3PerS: between(0, 1000),
+  schedule: id.optional(),
+  /** Sensible effectiveness. */
+  heatRecovery: share.default(0),
+});
+
+export const roomSchema = z.strictObject({
+  id,
+  name: text,
+  floorAreaM2: positive(1e5),
+  volumeM3: positive(1e6),
+  /**
+   * Inside size where the room is a box: `lengthM` runs along the face that looks towards
+   * `frontAzimuthDeg`. Then view factors are exact.
+   */
+  box: z
+    .strictObject({
+      lengthM: positive(300),
+      depthM: positive(300),
+      heightM: positive(100),
+      frontAzimuthDeg: between(0, 360),
+    })
+    .optional(),
+  surfaces: z.array(surfaceSchema).min(1),
+  internalMasses: z.array(internalMassSchema).default([]),
+  gains: z.array(gainSchema).default([]),
+  infiltration: z
+    .strictObject({ airChangesPerH: between(0, 100), schedule: id.optional() })
+    .default({ airChangesPerH: 0 }),
+  ventilation: z.array(ventilationSchema).default([]),
+  heating: heatingSchema.optional(),
+  cooling: heatingSchema.optional(),
+  comfort: comfortSchema.optional(),
+});
+
+/** Air that moves one way between rooms, or from or to `outdoors`. In and out balance in every room. */
+export const airPathSchema = z.strictObject({
+  from: id,
+  to: id,
+  flowM3PerS: positive(1000),
+  schedule: id.optional(),
+});
+
+/** Air that two rooms swap through an open door, the same flow each way. */
+export const airExchangeSchema = z.strictObject({
+  rooms: z.tuple([id, id]),
+  flowM3PerS: positive(1000),
+  schedule: id.optional(),
+});
+
+export type Room = z.infer<typeof roomSchema>;
+export type Surface = Room['surfaces'][number];
+export type Opening = Surface['openings'][number];
+export type Boundary = Surface['boundary'];
+export type Rectangle = z.infer<typeof rectangleSchema>;
+export type Heating = NonNullable<Room['heating']>;
+export type Scheduled = Heating['setPointC'];
