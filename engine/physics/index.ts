@@ -1,6 +1,7 @@
 // The front door of the physics: all that other folders may import.
 
 export * from './approximate-view-factors.ts';
+export * from './close-exchange.ts';
 export * from './conduction-mesh.ts';
 export * from './dense.ts';
 export * from './inside-film.ts';
