@@ -1,8 +1,22 @@
 // Climate and sun: the front door of this folder. Reads weather tables, finds the sun, brings
 // radiation onto planes; knows no building.
+export * from './air/atmosphere.ts';
+export * from './air/moist-air.ts';
+export * from './calendar.ts';
 export * from './fault.ts';
+export * from './sky/air-mass.ts';
+export * from './sky/clear-sky.ts';
+export * from './sky/diffuse-split.ts';
+export * from './sky/hourly-sky.ts';
+export * from './sky/perez.ts';
+export * from './sky/simple-skies.ts';
+export * from './sky/sky-temperature.ts';
+export * from './steps/plane.ts';
+export * from './steps/steps.ts';
+export * from './steps/sun-track.ts';
 export * from './sun/ephemeris.ts';
 export * from './sun/events.ts';
 export * from './sun/handbook.ts';
 export * from './sun/position.ts';
+export * from './time/civil-clock.ts';
 export * from './weather-year.ts';
