@@ -122,14 +122,14 @@ describe('the clear double glazing of the fabric cases', () => {
   test('the pane has the normal transmittance that was asked for', () => {
     expect(paneShares(pane, 1, 'parallel').transmittance).toBeCloseTo(0.834, 12);
   });
-  test('looking the table up between degrees errs by less than 3e-4', () => {
+  test('looking the table up between degrees errs by less than 4e-4', () => {
     for (let deg = 0.5; deg < 90; deg += 0.5) {
       const exact = beamShares([pane, pane], cosine(deg));
       expect(Math.abs(beamTransmittance(table, cosine(deg)) - exact.transmittance)).toBeLessThan(
-        3e-4,
+        4e-4,
       );
       expect(Math.abs(beamAbsorptance(table, 1, cosine(deg)) - exact.absorptance[1])).toBeLessThan(
-        3e-4,
+        4e-4,
       );
     }
     expect(beamTransmittance(table, -0.3)).toBe(0);
