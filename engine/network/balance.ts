@@ -1,0 +1,189 @@
+// The whole network's heat balance, added up apart from the equations that were solved: what crosses
+// the boundary, what sources and plants give, and what the capacities took up.
+
+import type { Stage } from './stage.ts';
+
+export interface Balance {
+  /** Constant links with one end at a boundary. */
+  readonly inside: Int32Array;
+  readonly outside: Int32Array;
+  readonly conductanceWPerK: Float64Array;
+  /** State-dependent and driven links with one end at a boundary; +1 where `to` is inside. */
+  readonly law: Int32Array;
+  readonly lawSign: Float64Array;
+  readonly driven: Int32Array;
+  readonly drivenSign: Float64Array;
+  readonly directedFrom: number;
+  /** Enclosure members at boundaries: member, enclosure row, and the members it exchanges with. */
+  readonly member: Int32Array;
+  /** Total and absolute factors of the sources into unknown nodes, by series. */
+  readonly sourceSeries: Int32Array;
+  readonly sourceSum: Float64Array;
+  readonly sourceAbs: Float64Array;
+  readonly unitShare: Float64Array;
+  /** Capacity of each slot that stores [J/K]. */
+  readonly storing: Int32Array;
+  readonly capacityJPerK: Float64Array;
+  /** Running sums of a step [W]. */
+  inW: number;
+  throughputW: number;
+}
+
+export function compileBalance(stage: Stage): Balance {
+  const { layout, laws, driven, enclosures } = stage;
+  const { network, rows, firstChain, slotOfNode } = layout;
+  const isFixed = (slot: number) => slot >= rows && slot < firstChain;
+  const crossing: [number, number, number][] = [];
+  for (const group of network.links) {
+    if (group.law !== 'constant') continue;
+    for (let k = 0; k < group.from.length; k++) {
+      const a = slotOfNode[group.from[k]];
+      const b = slotOfNode[group.to[k]];
+      if (isFixed(a) === isFixed(b)) continue;
+      crossing.push(
+        isFixed(a) ? [b, a, group.conductanceWPerK[k]] : [a, b, group.conductanceWPerK[k]],
+      );
+    }
+  }
+  const over = (from: Int32Array, to: Int32Array, count: number) => {
+    const list: number[] = [];
+    for (let l = 0; l < count; l++) if (isFixed(from[l]) !== isFixed(to[l])) list.push(l);
+    return Int32Array.from(list);
+  };
+  const law = over(laws.from, laws.to, laws.count);
+  const scaled = over(driven.from, driven.to, driven.directedOffset);
+  const members: number[] = [];
+  enclosures.slot.forEach((slot, m) => {
+    if (isFixed(slot)) members.push(m);
+  });
+  const sums = new Map<number, [number, number]>();
+  const { sources } = network;
+  for (let k = 0; k < sources.node.length; k++) {
+    if (isFixed(slotOfNode[sources.node[k]])) continue;
+    const [sum, abs] = sums.get(sources.series[k]) ?? [0, 0];
+    sums.set(sources.series[k], [sum + sources.factor[k], abs + Math.abs(sources.factor[k])]);
+  }
+  const storing: number[] = [];
+  const capacity: number[] = [];
+  layout.nodeOfSlot.forEach((node, slot) => {
+    if (node < 0 || isFixed(slot) || network.capacityJPerK[node] === 0) return;
+    storing.push(slot);
+    capacity.push(network.capacityJPerK[node]);
+  });
+  return {
+    inside: Int32Array.from(crossing, (c) => c[0]),
+    outside: Int32Array.from(crossing, (c) => c[1]),
+    conductanceWPerK: Float64Array.from(crossing, (c) => c[2]),
+    law,
+    lawSign: Float64Array.from(law, (l) => (isFixed(laws.from[l]) ? 1 : -1)),
+    driven: scaled,
+    drivenSign: Float64Array.from(scaled, (l) => (isFixed(driven.from[l]) ? 1 : -1)),
+    directedFrom: driven.directedOffset,
+    member: Int32Array.from(members),
+    sourceSeries: Int32Array.from(sums.keys()),
+    sourceSum: Float64Array.from(sums.values(), (s) => s[0]),
+    sourceAbs: Float64Array.from(sums.values(), (s) => s[1]),
+    unitShare: Float64Array.from(layout.units, (unit) =>
+      unit.deliveryNodes.reduce(
+        (sum, v, i) => (isFixed(slotOfNode[v]) ? sum : sum + unit.deliveryShares[i]),
+        0,
+      ),
+    ),
+    storing: Int32Array.from(storing),
+    capacityJPerK: Float64Array.from(capacity),
+    inW: 0,
+    throughputW: 0,
+  };
+}
+
+/** Adds the external flows of a stage that counts with `weight` in its step. */
+export function addStageFlows(
+  balance: Balance,
+  stage: Stage,
+  x: Float64Array,
+  series: Float64Array,
+  weight: number,
+): void {
+  let sum = 0;
+  let through = 0;
+  const { inside, outside, conductanceWPerK, law, lawSign, sourceSeries } = balance;
+  for (let k = 0; k < inside.length; k++) {
+    const q = conductanceWPerK[k] * (x[outside[k]] - x[inside[k]]);
+    sum += q;
+    through += Math.abs(q);
+  }
+  const { laws, slopeFrom, slopeTo, rest, driven, units } = stage;
+  for (let k = 0; k < law.length; k++) {
+    const l = law[k];
+    const q = slopeFrom[l] * x[laws.from[l]] - slopeTo[l] * x[laws.to[l]] + rest[l];
+    sum += lawSign[k] * q;
+    through += Math.abs(q);
+  }
+  for (let k = 0; k < balance.driven.length; k++) {
+    const l = balance.driven[k];
+    const q = driven.conductanceWPerK[l] * (x[driven.from[l]] - x[driven.to[l]]);
+    sum += balance.drivenSign[k] * q;
+    through += Math.abs(q);
+  }
+  const { firstChain, rows } = stage.layout;
+  for (let l = balance.directedFrom; l < driven.count; l++) {
+    const a = driven.from[l];
+    const b = driven.to[l];
+    if (b >= rows && b < firstChain) continue; // a boundary does not feel it
+    const q = driven.conductanceWPerK[l] * (x[a] - x[b]);
+    sum += q;
+    if (a >= rows && a < firstChain) through += Math.abs(q);
+  }
+  for (let k = 0; k < balance.member.length; k++) {
+    const q = memberGainW(stage, balance.member[k], x);
+    sum -= q;
+    through += Math.abs(q);
+  }
+  for (let k = 0; k < sourceSeries.length; k++) {
+    const v = series[sourceSeries[k]];
+    sum += balance.sourceSum[k] * v;
+    through += balance.sourceAbs[k] * Math.abs(v);
+  }
+  for (let u = 0; u < units.count; u++) {
+    const q = balance.unitShare[u] * x[units.row[u]];
+    sum += q;
+    through += Math.abs(q);
+  }
+  balance.inW += weight * sum;
+  balance.throughputW += weight * through;
+}
+
+/** Net radiation that an enclosure member gains [W], from the linearised emissions. */
+function memberGainW(stage: Stage, m: number, x: Float64Array): number {
+  const { start, slot, row, exchangeM2, slope, rest } = stage.enclosures;
+  let e = 0;
+  while (start[e + 1] <= m) e++;
+  const own = slope[m] * x[slot[m]] + rest[m];
+  let q = 0;
+  for (let j = start[e]; j < start[e + 1]; j++) {
+    q += exchangeM2[row[m] + j - start[e]] * (slope[j] * x[slot[j]] + rest[j] - own);
+  }
+  return q;
+}
+
+/** Closes a step: imbalance over throughput (or over what was stored, where that is more). Resets the sums. */
+export function closeStep(
+  balance: Balance,
+  start: Float64Array,
+  end: Float64Array,
+  stepS: number,
+): number {
+  const { storing, capacityJPerK } = balance;
+  let stored = 0;
+  let moved = 0;
+  for (let i = 0; i < storing.length; i++) {
+    const q = capacityJPerK[i] * (end[storing[i]] - start[storing[i]]);
+    stored += q;
+    moved += Math.abs(q);
+  }
+  const imbalance = Math.abs(balance.inW - stored / stepS);
+  const through = Math.max(balance.throughputW, moved / stepS);
+  balance.inW = 0;
+  balance.throughputW = 0;
+  return through > 0 ? imbalance / through : 0;
+}

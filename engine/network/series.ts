@@ -1,0 +1,48 @@
+// Drivers at a moment. A series either holds one value over a step or runs straight between the
+// step's ends; the solver asks for it at the two stage times of a step, or for its mean over a span.
+
+import type { Problem, Series } from './problem.ts';
+
+/** Value of a series `share` of the way through step `step` (0 at its start, 1 at its end). */
+export function seriesAt(series: Series, step: number, share: number): number {
+  const { values } = series;
+  if (series.hold === 'step') return values[step];
+  return values[step] + share * (values[step + 1] - values[step]);
+}
+
+/** All series at `share` of step `step`, written into `out`, one entry a series. */
+export function readSeries(
+  all: readonly Series[],
+  step: number,
+  share: number,
+  out: Float64Array,
+): void {
+  for (let i = 0; i < all.length; i++) {
+    const { values, hold } = all[i];
+    const v = values[step];
+    out[i] = hold === 'step' ? v : v + share * (values[step + 1] - v);
+  }
+}
+
+/**
+ * Time mean of a series over steps `from` to `to` (exclusive). Infinite values (a set-point that
+ * switches a plant off) are left out where finite ones exist.
+ */
+export function seriesMean(series: Series, from: number, to: number): number {
+  let sum = 0;
+  let count = 0;
+  let infinite = NaN;
+  for (let k = from; k < to; k++) {
+    const v = seriesAt(series, k, 0.5); // the middle of a straight line is its mean
+    if (Number.isFinite(v)) {
+      sum += v;
+      count++;
+    } else infinite = v;
+  }
+  return count > 0 ? sum / count : infinite;
+}
+
+/** Means of all series over the first `steps` steps. */
+export function seriesMeans(problem: Problem, steps: number): Float64Array {
+  return Float64Array.from(problem.series, (s) => seriesMean(s, 0, steps));
+}

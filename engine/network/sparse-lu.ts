@@ -1,0 +1,122 @@
+// Sparse LU of a matrix with a symmetric, fixed pattern, row by row (up-looking), without pivoting:
+// the nodes' part is an M-matrix, and plant rows come after the nodes that give them a pivot.
+// Row i depends on earlier rows only, so a change in row r asks for rows r… to be factored again.
+
+import type { Order } from './ordering.ts';
+
+export interface SparseLu {
+  readonly size: number;
+  /** Entries of row i: `rowStart[i]` to `rowStart[i + 1] − 1`, columns ascending. */
+  readonly rowStart: Int32Array;
+  readonly column: Int32Array;
+  readonly diagonal: Int32Array;
+  /** L (unit diagonal, below) and U (from the diagonal) in the pattern of the matrix. */
+  readonly values: Float64Array;
+  readonly inverse: Float64Array;
+  readonly work: Float64Array;
+}
+
+/** The pattern that the elimination order fills. */
+export function createLu(order: Order): SparseLu {
+  const n = order.upper.length;
+  const lower: number[][] = Array.from({ length: n }, () => []);
+  order.upper.forEach((columns, i) => {
+    for (const j of columns) lower[j].push(i);
+  });
+  const rowStart = new Int32Array(n + 1);
+  for (let i = 0; i < n; i++) {
+    rowStart[i + 1] = rowStart[i] + lower[i].length + 1 + order.upper[i].length;
+  }
+  const column = new Int32Array(rowStart[n]);
+  const diagonal = new Int32Array(n);
+  for (let i = 0; i < n; i++) {
+    column.set(lower[i], rowStart[i]);
+    diagonal[i] = rowStart[i] + lower[i].length;
+    column[diagonal[i]] = i;
+    column.set(order.upper[i], diagonal[i] + 1);
+  }
+  return {
+    size: n,
+    rowStart,
+    column,
+    diagonal,
+    values: new Float64Array(rowStart[n]),
+    inverse: new Float64Array(n),
+    work: new Float64Array(n),
+  };
+}
+
+/** Index of entry (row, col) in the pattern; both must be coupled. */
+export function entryOf(lu: SparseLu, row: number, col: number): number {
+  let low = lu.rowStart[row];
+  let high = lu.rowStart[row + 1] - 1;
+  while (low <= high) {
+    const mid = (low + high) >> 1;
+    if (lu.column[mid] === col) return mid;
+    if (lu.column[mid] < col) low = mid + 1;
+    else high = mid - 1;
+  }
+  throw new Error(`entry ${row}, ${col} is outside the pattern`);
+}
+
+/**
+ * Factors rows `from`… of `a` (same pattern). Gives the first row whose pivot vanished against the
+ * row's own size, or −1.
+ */
+export function factorFrom(lu: SparseLu, a: Float64Array, from: number): number {
+  const { size, rowStart, column, diagonal, values, inverse, work } = lu;
+  for (let i = from; i < size; i++) {
+    const begin = rowStart[i];
+    const end = rowStart[i + 1];
+    const diag = diagonal[i];
+    for (let p = begin; p < end; p++) work[column[p]] = a[p];
+    let scale = Math.abs(work[i]);
+    for (let p = begin; p < diag; p++) {
+      const k = column[p];
+      const w = work[k];
+      if (w === 0) {
+        values[p] = 0;
+        continue;
+      }
+      const l = w * inverse[k];
+      values[p] = l;
+      const before = work[i];
+      const kEnd = rowStart[k + 1];
+      for (let q = diagonal[k] + 1; q < kEnd; q++) work[column[q]] -= l * values[q];
+      scale += Math.abs(work[i] - before);
+    }
+    for (let p = diag; p < end; p++) values[p] = work[column[p]];
+    const pivot = values[diag];
+    if (!(Math.abs(pivot) > 1e-14 * scale)) return i;
+    inverse[i] = 1 / pivot;
+  }
+  return -1;
+}
+
+/** Forward substitution of rows `from` to `to` − 1, in place. */
+export function solveForward(lu: SparseLu, b: Float64Array, from: number, to: number): void {
+  const { rowStart, column, diagonal, values } = lu;
+  for (let i = from; i < to; i++) {
+    let sum = b[i];
+    const diag = diagonal[i];
+    for (let p = rowStart[i]; p < diag; p++) sum -= values[p] * b[column[p]];
+    b[i] = sum;
+  }
+}
+
+/** Backward substitution of rows `to` − 1 down to `from`; rows from `to` on must be in `x` already. */
+export function solveBackward(
+  lu: SparseLu,
+  b: Float64Array,
+  x: Float64Array,
+  from: number,
+  to: number,
+): void {
+  const { rowStart, column, diagonal, values, inverse } = lu;
+  for (let i = to - 1; i >= from; i--) {
+    let sum = b[i];
+    const end = rowStart[i + 1];
+    for (let p = diagonal[i] + 1; p < end; p++) sum -= values[p] * x[column[p]];
+    x[i] = sum * inverse[i];
+  }
+}
