@@ -18,7 +18,7 @@ export interface GlazingAngles {
 
 const radPerDeg = Math.PI / 180;
 
-/** Tables a stack of panes, outermost first. Straight between degrees it is true to 4e-4. */
+/** Tables a stack of panes, outermost first. Straight between degrees it is true to 4e-4 up to 80°. */
 export function glazingAngles(panes: readonly PaneOptics[]): GlazingAngles {
   const paneCount = panes.length;
   const transmittance = new Float64Array(91);
