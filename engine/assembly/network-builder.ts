@@ -34,6 +34,9 @@ interface Rows {
 
 const rows = (): Rows => ({ from: [], to: [], about: [] });
 
+/** Keeps a film from vanishing where face and air are equally warm: a tenth at 0 K, 0.002 % at 0.1 K. */
+const softeningK2 = 1e-6;
+
 /** Order of the link groups in the network that is built. */
 const group = { constant: 0, scaled: 1, buoyant: 2, mixed: 3, radiant: 4, function: 5 } as const;
 
@@ -240,7 +243,7 @@ export class NetworkBuilder {
         warmerFrom: f64(this.buoyant.warmer),
         coolerFrom: f64(this.buoyant.cooler),
         exponent: 1 / 3,
-        softeningK2: 0,
+        softeningK2,
         baseSeries: new Int32Array(this.buoyant.from.length).fill(-1),
         baseWPerK: new Float64Array(this.buoyant.from.length),
       },

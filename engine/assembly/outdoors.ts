@@ -13,12 +13,16 @@ import type { NetworkBuilder } from './network-builder.ts';
 
 /** What faces need to know of the outside; each series is computed once and shared. */
 export interface Outdoors {
+  /** Steps in the year. */
+  readonly count: number;
   readonly airNode: number;
   readonly skyNode: number;
   /** Wind-driven film of a face, as a series of W/m²K; the whole film where `hasNaturalTerm` is false. */
   filmSeries(face: { heightM: number; tiltDeg: number; azimuthDeg: number }): number;
   readonly hasNaturalTerm: boolean;
   sunOn(tiltDeg: number, azimuthDeg: number): PlaneIrradiance;
+  /** All sunlight on a plane, as a series of W/m². */
+  sunSeries(tiltDeg: number, azimuthDeg: number): number;
 }
 
 export function outdoors(
@@ -45,6 +49,7 @@ export function outdoors(
   );
   const films = new Map<string, number>();
   const planes = new Map<string, PlaneIrradiance>();
+  const sunlight = new Map<string, number>();
   const terrain = terrains[building.site.terrain];
 
   function film(heightM: number, tiltDeg: number, azimuthDeg: number): Float64Array {
@@ -63,7 +68,24 @@ export function outdoors(
     return values;
   }
 
+  function sunOn(tiltDeg: number, azimuthDeg: number): PlaneIrradiance {
+    const key = `${tiltDeg} ${azimuthDeg}`;
+    let plane = planes.get(key);
+    if (!plane) {
+      plane = planeIrradiance(steps, {
+        tiltDeg,
+        azimuthDeg,
+        groundReflectance: building.site.groundReflectance,
+        skyModel: building.physics.diffuseSky,
+        circumsolarAsBeam: true,
+      });
+      planes.set(key, plane);
+    }
+    return plane;
+  }
+
   return {
+    count: steps.count,
     airNode,
     skyNode,
     hasNaturalTerm: method === 'yazdanian-klems',
@@ -79,19 +101,22 @@ export function outdoors(
       films.set(key, series);
       return series;
     },
-    sunOn(tiltDeg, azimuthDeg) {
+    sunOn,
+    sunSeries(tiltDeg, azimuthDeg) {
       const key = `${tiltDeg} ${azimuthDeg}`;
-      let plane = planes.get(key);
-      if (!plane) {
-        plane = planeIrradiance(steps, {
-          tiltDeg,
-          azimuthDeg,
-          groundReflectance: building.site.groundReflectance,
-          skyModel: building.physics.diffuseSky,
-        });
-        planes.set(key, plane);
-      }
-      return plane;
+      const known = sunlight.get(key);
+      if (known !== undefined) return known;
+      const sun = sunOn(tiltDeg, azimuthDeg);
+      const total = sun.beamWPerM2.map(
+        (beam, k) => beam + sun.isotropicWPerM2[k] + sun.horizonWPerM2[k] + sun.groundWPerM2[k],
+      );
+      const series = builder.series(
+        `sun on tilt ${tiltDeg}°, azimuth ${azimuthDeg}°`,
+        'step',
+        total,
+      );
+      sunlight.set(key, series);
+      return series;
     },
   };
 }

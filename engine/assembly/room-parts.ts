@@ -46,6 +46,13 @@ export interface RoomMeters {
   readonly storage: number;
 }
 
+/** The comfort band hour by hour. */
+export interface ComfortHours {
+  readonly bandLowC: Float64Array;
+  readonly bandHighC: Float64Array;
+  readonly occupied: Uint8Array;
+}
+
 /** A room as node and meter numbers: findings map results back through it. */
 export interface RoomParts {
   readonly room: Room;
@@ -53,4 +60,8 @@ export interface RoomParts {
   readonly massNodes: readonly number[];
   readonly faces: readonly Face[];
   readonly meters: RoomMeters;
+  readonly comfort: ComfortHours | null;
+  /** Set-point in each hour, or null without heater or chiller. */
+  readonly heatSetC: Float64Array | null;
+  readonly coolSetC: Float64Array | null;
 }

@@ -1,10 +1,10 @@
-// Which face of a room's box a surface lies on. Faces: 0 front, 1 right, 2 back, 3 left (seen from
-// outside going clockwise in plan from the front: azimuth + 0°, 90°, 180°, 270°), 4 floor, 5 ceiling.
+// Which face of a room's box a surface lies on. Faces in plan, clockwise from the front by azimuth:
+// 0 front, 1 left (as seen when looking at the front from outside), 2 back, 3 right; 4 floor, 5 ceiling.
 import type { Room, Surface } from './schema-room.ts';
 
 export type Box = NonNullable<Room['box']>;
 
-/** Areas in the order front, right, back, left, floor, ceiling [m²]. */
+/** Areas in the order front, left, back, right, floor, ceiling [m²]. */
 export function boxFaceAreasM2(box: Box): number[] {
   const { lengthM, depthM, heightM } = box;
   const front = lengthM * heightM;

@@ -182,7 +182,7 @@ function boxFaults(room: Room, path: string, add: Add) {
   if (held.some((area, face) => Math.abs(area - areas[face]) > areaToleranceShare * areas[face]))
     add(
       `${path}.box`,
-      `faces (front, right, back, left, floor, ceiling) of ${areas.map(round).join(', ')} m²`,
+      `faces (front, left, back, right, floor, ceiling) of ${areas.map(round).join(', ')} m²`,
       `the surfaces' ${held.map(round).join(', ')} m²`,
       'The surfaces on each face add up to that face; correct the areas or leave out the box.',
     );

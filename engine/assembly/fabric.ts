@@ -1,0 +1,220 @@
+// Opaque surfaces as chains of nodes: layers cut into cells, films and radiation at the outer face.
+import {
+  type Building,
+  type Construction,
+  constructionOf,
+  materialOf,
+  type Room,
+  type Surface,
+} from '../building/index.ts';
+import {
+  type ConductionMesh,
+  type Layer,
+  meshConstruction,
+  roughnessFactor,
+  thirdPowerFilm,
+} from '../physics/index.ts';
+import type { NetworkBuilder, Provenance } from './network-builder.ts';
+import type { Outdoors } from './outdoors.ts';
+
+/** How fine the chains are cut. */
+export interface Fineness {
+  readonly stepS: number;
+  /** Multiplies the cells; 2 for the accuracy check. */
+  readonly refine: number;
+}
+
+/** The chain of one surface, outer to inner face. */
+export interface Chain {
+  readonly outerNode: number;
+  readonly innerNode: number;
+}
+
+/** Layers of a construction in the terms of the physics, outside to inside. */
+export function physicsLayers(building: Building, construction: Construction): Layer[] {
+  return construction.layers.map((layer) => {
+    if (!('material' in layer))
+      return { kind: 'resistance', resistanceM2KPerW: layer.resistanceM2KPerW };
+    const { conductivityWPerMK, densityKgPerM3, specificHeatJPerKgK } = materialOf(
+      building,
+      layer.material,
+    );
+    return {
+      kind: 'solid',
+      thicknessM: layer.thicknessM,
+      conductivityWPerMK,
+      densityKgPerM3,
+      specificHeatJPerKgK,
+    };
+  });
+}
+
+/** Area of a surface without its openings [m²]. */
+export function netAreaM2(surface: Surface): number {
+  return surface.areaM2 - surface.openings.reduce((sum, opening) => sum + opening.areaM2, 0);
+}
+
+/** Height of a face's middle above the ground outside, given or by the custom stated in the schema [m]. */
+export function faceHeightM(room: Room, surface: Surface): number {
+  if (surface.heightAboveGroundM !== undefined) return surface.heightAboveGroundM;
+  const roomHeightM = room.box?.heightM ?? room.volumeM3 / room.floorAreaM2;
+  return surface.tiltDeg < 45 ? roomHeightM : roomHeightM / 2;
+}
+
+/** Adds the chain of one surface, from its outer to its inner face. */
+export function addChain(
+  building: Building,
+  room: Room,
+  surface: Surface,
+  fineness: Fineness,
+  builder: NetworkBuilder,
+): Chain {
+  const construction = constructionOf(building, surface.construction);
+  const layers = physicsLayers(building, construction);
+  if (surface.reversed) layers.reverse();
+  const mesh = meshConstruction(layers, { kind: building.physics.conduction, ...fineness });
+  const areaM2 = netAreaM2(surface);
+  const name = `${room.id}/${surface.id}`;
+  const about = (what: string, inputs: Provenance['inputs']): Provenance => ({
+    name,
+    room: room.id,
+    surface: surface.id,
+    what,
+    method: 'one-dimensional conduction, finite volumes',
+    inputs,
+  });
+  const last = mesh.capacityJPerM2K.length - 1;
+  let outerNode = -1;
+  let node = -1;
+  for (let i = 0; i <= last; i++) {
+    const place = i === 0 ? 'outer face' : i === last ? 'inner face' : `node ${i}`;
+    const next = builder.node(
+      {
+        ...about(`${place} of ${construction.name}`, {
+          areaM2,
+          capacityJPerM2K: mesh.capacityJPerM2K[i],
+        }),
+        name: `${name}/${place}`,
+      },
+      mesh.capacityJPerM2K[i] * areaM2,
+    );
+    if (i === 0) outerNode = next;
+    else
+      builder.constantLink(
+        node,
+        next,
+        mesh.conductanceWPerM2K[i - 1] * areaM2,
+        about(layerText(building, construction, mesh, i - 1, surface.reversed), {
+          areaM2,
+          conductanceWPerM2K: mesh.conductanceWPerM2K[i - 1],
+        }),
+      );
+    node = next;
+  }
+  return { outerNode, innerNode: node };
+}
+
+/** Which layer a link of the mesh lies in. */
+function layerText(
+  building: Building,
+  construction: Construction,
+  mesh: ConductionMesh,
+  link: number,
+  reversed: boolean,
+): string {
+  const middle = (mesh.nodeResistanceM2KPerW[link] + mesh.nodeResistanceM2KPerW[link + 1]) / 2;
+  const edges = mesh.interfaceResistanceM2KPerW;
+  let index = 0;
+  while (index < construction.layers.length - 1 && edges[index + 1] <= middle) index++;
+  const layer = construction.layers[reversed ? construction.layers.length - 1 - index : index];
+  return 'material' in layer
+    ? `conduction, ${materialOf(building, layer.material).name} ${layer.thicknessM} m`
+    : `conduction, ${layer.name}`;
+}
+
+/** What the outer side of a face is, for films and radiation. */
+export interface OuterFace {
+  readonly node: number;
+  readonly areaM2: number;
+  readonly tiltDeg: number;
+  readonly azimuthDeg: number;
+  readonly heightM: number;
+  readonly emissivity: number;
+  readonly roughness: number;
+  readonly about: Omit<Provenance, 'what' | 'method' | 'inputs'>;
+}
+
+/** Film, and radiation to sky, air and ground, at a face outdoors. */
+export function addOuterExchange(
+  building: Building,
+  face: OuterFace,
+  outside: Outdoors,
+  builder: NetworkBuilder,
+): void {
+  const { node, areaM2, tiltDeg, azimuthDeg, heightM, emissivity, roughness } = face;
+  const series = outside.filmSeries({ heightM, tiltDeg, azimuthDeg });
+  const filmAbout: Provenance = {
+    ...face.about,
+    what: 'outside film',
+    method: outsideFilmMethod[building.physics.outsideConvection],
+    inputs: { areaM2, heightM, tiltDeg, azimuthDeg, roughness },
+  };
+  if (outside.hasNaturalTerm) {
+    const natural = thirdPowerFilm(tiltDeg);
+    builder.mixedFilmLink(
+      node,
+      outside.airNode,
+      { areaM2, warmerFrom: natural.warmerFace, coolerFrom: natural.coolerFace, roughness, series },
+      filmAbout,
+    );
+  } else builder.scaledLink(node, outside.airNode, areaM2, series, filmAbout);
+  const skyView = (1 + Math.cos((tiltDeg * Math.PI) / 180)) / 2;
+  // Walton 1983: the sky near the horizon is seen through so much air that it counts at air temperature.
+  const coldShare = building.physics.outsideLongWave === 'low-sky-at-air' ? Math.sqrt(skyView) : 1;
+  const toSkyM2 = areaM2 * emissivity * skyView * coldShare;
+  const toAirM2 = areaM2 * emissivity - toSkyM2;
+  const about = (what: string): Provenance => ({
+    ...face.about,
+    what,
+    method:
+      'grey face to black surroundings by tilt view factor; low sky at air temperature (Walton 1983)',
+    inputs: { areaM2, emissivity, skyViewFactor: skyView, coldShare },
+  });
+  if (toSkyM2 > 0)
+    builder.radiantLink(node, outside.skyNode, toSkyM2, about('radiation to the sky'));
+  if (toAirM2 > 0)
+    builder.radiantLink(
+      node,
+      outside.airNode,
+      toAirM2,
+      about('radiation to ground and low sky at air temperature'),
+    );
+}
+
+const outsideFilmMethod = {
+  'yazdanian-klems':
+    'Yazdanian & Klems 1994 wind term, joined with natural convection (Walton 1983)',
+  'iso-6946': 'ISO 6946, 4 + 4·v',
+  mcadams: 'McAdams 1954, rough plate',
+};
+
+/** Sunlight absorbed by an opaque face outdoors, as a source at its node. */
+export function addOuterSun(
+  construction: Construction,
+  face: OuterFace,
+  outside: Outdoors,
+  builder: NetworkBuilder,
+): void {
+  if (construction.outsideSolarAbsorptance === 0) return;
+  builder.source(
+    face.node,
+    construction.outsideSolarAbsorptance * face.areaM2,
+    outside.sunSeries(face.tiltDeg, face.azimuthDeg),
+    `sun absorbed outside, ${face.about.name}`,
+  );
+}
+
+/** Factor of the construction's roughness class on the wind's share of the film. */
+export function roughnessOf(construction: Construction): number {
+  return roughnessFactor[construction.outsideRoughness];
+}

@@ -1,0 +1,4 @@
+// The front door: building and weather in, a network problem with provenance out.
+export { type Assembly, type AssemblyOptions, assemble } from './assemble.ts';
+export type { Provenance } from './network-builder.ts';
+export type { Face, RoomMeters, RoomParts } from './room-parts.ts';

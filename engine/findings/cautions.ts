@@ -1,0 +1,31 @@
+// Where a result could hurt someone, the words that go with it.
+import type { RoomFindings } from './simulation.ts';
+
+const frostC = 5; // pipes in the coldest corner are colder than the air; common practice, no source
+const heatStressC = 32; // operative; common practice, no source
+
+/** One sentence a danger, naming the rooms; screens and reports show all of them. */
+export function cautions(rooms: readonly RoomFindings[]): string[] {
+  const named = (list: readonly RoomFindings[]) => list.map((room) => room.name).join(', ');
+  const list: string[] = [];
+  const cold = rooms.filter((room) => room.airTemperatureC.min < frostC);
+  if (cold.length > 0)
+    list.push(
+      `Frost: the air falls below ${frostC} °C in ${named(cold)}. Pipes there can freeze; have frost protection designed by a licensed practitioner.`,
+    );
+  const hot = rooms.filter((room) => room.operativeTemperatureC.max > heatStressC);
+  if (hot.length > 0)
+    list.push(
+      `Heat: the operative temperature passes ${heatStressC} °C in ${named(hot)}. For infants, the old and the ill this is a danger to health; check against local rules on overheating.`,
+    );
+  const short = rooms.filter((room) => room.hoursHeatingShort > 0);
+  if (short.length > 0)
+    list.push(
+      `Heating too small: at full power the set-point is missed in ${named(short)}. Sizes follow local codes and a licensed practitioner's design, most of all for vulnerable people.`,
+    );
+  return list;
+}
+
+/** What stands under every result. */
+export const standingCaution =
+  'Results are estimates for design decisions. Frost, heat stress, heater size, damp and combustion air are matters of local codes and licensed practice.';

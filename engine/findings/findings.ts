@@ -1,0 +1,271 @@
+// Run → figures. Everything here is arithmetic on the run's hourly records.
+
+import type { WeatherYear } from '../../weather/index.ts';
+import type { Assembly } from '../assembly/index.ts';
+import type { Run } from '../network/index.ts';
+import { cautions } from './cautions.ts';
+import { bandFindings } from './comfort-band.ts';
+import { hourName, monthOfHour } from './hour-name.ts';
+import { roomHours } from './room-hours.ts';
+import type {
+  BalanceKWh,
+  Extremes,
+  Findings,
+  RoomFindings,
+  RoomHours,
+  Simulation,
+  SpaceFindings,
+} from './simulation.ts';
+
+const balanceLines = [
+  'solar',
+  'gains',
+  'heating',
+  'cooling',
+  'opaque',
+  'glazing',
+  'ground',
+  'infiltration',
+  'ventilation',
+  'rooms',
+] as const;
+
+/** Figures and hours of a finished run. */
+export function simulationOf(
+  assembly: Assembly,
+  weather: WeatherYear,
+  run: Run,
+  timings: Findings['timings'],
+): Simulation {
+  const rooms = assembly.rooms.map((parts) => roomHours(run, parts));
+  const year = assembly.building.calendar.year ?? weather.year;
+  const figures = rooms.map((hours, r) =>
+    roomFindings(
+      hours,
+      year,
+      assembly.rooms[r].room.heating?.maxW,
+      assembly.rooms[r].room.cooling?.maxW,
+      assembly,
+      r,
+    ),
+  );
+  const building = wholeFindings(rooms, figures, year);
+  const worstRoom = Math.max(
+    0,
+    ...figures.map(({ balanceKWh }) => Math.abs(balanceKWh.residual) / throughput(balanceKWh)),
+  );
+  const { quality } = run;
+  const findings: Findings = {
+    project: assembly.building.name,
+    weather: {
+      place: weather.site.name,
+      form: weather.form,
+      hours: weather.hours,
+      repairs: weather.notes,
+    },
+    stepMinutes: run.problem.stepS / 60,
+    rooms: figures,
+    building,
+    assumptions: assembly.assumptions,
+    cautions: cautions(figures),
+    quality: {
+      relativeBalanceResidual: Math.max(quality.relativeBalanceResidual, worstRoom),
+      unconvergedSteps: quality.unconvergedSteps,
+      warmUpDays: (quality.warmUpSteps * run.problem.stepS) / 86_400,
+      warmUpDriftK: quality.warmUpDriftK,
+      nodes: run.problem.network.nodeNames.length,
+    },
+    timings,
+  };
+  return { findings, hours: run.records, year, outdoorC: outdoorHours(assembly, run), rooms };
+}
+
+function outdoorHours(assembly: Assembly, run: Run): Float64Array {
+  const { recordNodes } = run.problem;
+  const at = recordNodes.indexOf(assembly.outdoorNode);
+  return Float64Array.from(
+    { length: run.records },
+    (_, h) => run.meanC[h * recordNodes.length + at],
+  );
+}
+
+function roomFindings(
+  hours: RoomHours,
+  year: number,
+  maxHeatingW: number | undefined,
+  maxCoolingW: number | undefined,
+  assembly: Assembly,
+  r: number,
+): RoomFindings {
+  return {
+    id: hours.id,
+    name: hours.name,
+    ...spaceEnergy([hours], year),
+    floorAreaM2: hours.floorAreaM2,
+    airTemperatureC: extremes(hours.airC, year),
+    operativeTemperatureC: extremes(hours.operativeC, year),
+    ...bandFindings(hours, year),
+    hoursHeatingShort: hoursShort(
+      hours.heatingW,
+      maxHeatingW,
+      hours.airC,
+      assembly.rooms[r].heatSetC,
+      1,
+    ),
+    hoursCoolingShort: hoursShort(
+      hours.coolingW,
+      maxCoolingW,
+      hours.airC,
+      assembly.rooms[r].coolSetC,
+      -1,
+    ),
+  };
+}
+
+/** Hours at full power with the set-point missed by more than 0.2 K. */
+function hoursShort(
+  powerW: Float64Array,
+  maxW: number | undefined,
+  airC: Float64Array,
+  setC: Float64Array | null,
+  sign: 1 | -1,
+): number {
+  if (maxW === undefined || setC === null) return 0;
+  let count = 0;
+  for (let h = 0; h < powerW.length; h++)
+    if (powerW[h] >= maxW * (1 - 1e-6) && sign * (setC[h] - airC[h]) > 0.2) count++;
+  return count;
+}
+
+type Energy = Pick<
+  SpaceFindings,
+  | 'heatingKWh'
+  | 'coolingKWh'
+  | 'peakHeatingW'
+  | 'peakHeatingAt'
+  | 'peakCoolingW'
+  | 'peakCoolingAt'
+  | 'heatingByMonthKWh'
+  | 'coolingByMonthKWh'
+  | 'balanceKWh'
+>;
+
+/** Energies and coincident peaks of one room or several together. */
+function spaceEnergy(rooms: readonly RoomHours[], year: number): Energy {
+  const heatingW = together(rooms, (room) => room.heatingW);
+  const coolingW = together(rooms, (room) => room.coolingW);
+  const heating = peak(heatingW, year);
+  const cooling = peak(coolingW, year);
+  const line = (name: keyof RoomHours['flowsW']) =>
+    rooms.reduce((sum, room) => sum + kWh(room.flowsW[name]), 0);
+  const lines = Object.fromEntries(balanceLines.map((name) => [name, line(name)])) as Record<
+    (typeof balanceLines)[number],
+    number
+  >;
+  const storage = line('storage');
+  const into = balanceLines.reduce((sum, name) => sum + lines[name], 0);
+  return {
+    heatingKWh: kWh(heatingW),
+    coolingKWh: kWh(coolingW),
+    peakHeatingW: heating.value,
+    peakHeatingAt: heating.at,
+    peakCoolingW: cooling.value,
+    peakCoolingAt: cooling.at,
+    heatingByMonthKWh: byMonthKWh(heatingW),
+    coolingByMonthKWh: byMonthKWh(coolingW),
+    balanceKWh: { ...lines, storage, residual: into - storage },
+  };
+}
+
+function wholeFindings(
+  rooms: readonly RoomHours[],
+  figures: readonly RoomFindings[],
+  year: number,
+): SpaceFindings {
+  const sum = (of: (one: RoomFindings) => number) =>
+    figures.reduce((total, one) => total + of(one), 0);
+  const floorAreaM2 = sum((one) => one.floorAreaM2);
+  return {
+    ...spaceEnergy(rooms, year),
+    floorAreaM2,
+    airTemperatureC: wholeExtremes(figures, (one) => one.airTemperatureC, floorAreaM2),
+    operativeTemperatureC: wholeExtremes(figures, (one) => one.operativeTemperatureC, floorAreaM2),
+    occupiedHours: sum((one) => one.occupiedHours),
+    hoursBelowBand: sum((one) => one.hoursBelowBand),
+    hoursAboveBand: sum((one) => one.hoursAboveBand),
+    degreeHoursBelow: sum((one) => one.degreeHoursBelow),
+    degreeHoursAbove: sum((one) => one.degreeHoursAbove),
+  };
+}
+
+/** Coldest and hottest of all rooms, and the mean weighted by floor area. */
+function wholeExtremes(
+  figures: readonly RoomFindings[],
+  of: (one: RoomFindings) => Extremes,
+  floorAreaM2: number,
+): Extremes {
+  const coldest = figures.reduce((a, b) => (of(b).min < of(a).min ? b : a));
+  const hottest = figures.reduce((a, b) => (of(b).max > of(a).max ? b : a));
+  return {
+    min: of(coldest).min,
+    minAt: of(coldest).minAt,
+    max: of(hottest).max,
+    maxAt: of(hottest).maxAt,
+    mean: figures.reduce((sum, one) => sum + (of(one).mean * one.floorAreaM2) / floorAreaM2, 0),
+  };
+}
+
+function together(
+  rooms: readonly RoomHours[],
+  of: (room: RoomHours) => Float64Array,
+): Float64Array {
+  const total = new Float64Array(of(rooms[0]).length);
+  for (const room of rooms) {
+    const values = of(room);
+    for (let h = 0; h < total.length; h++) total[h] += values[h];
+  }
+  return total;
+}
+
+function peak(values: Float64Array, year: number): { value: number; at: string } {
+  let best = 0;
+  let hour = -1;
+  for (let h = 0; h < values.length; h++) if (values[h] > best) [best, hour] = [values[h], h];
+  return { value: best, at: hour < 0 ? '' : hourName(hour, values.length, year) };
+}
+
+function extremes(values: Float64Array, year: number): Extremes {
+  let low = 0;
+  let high = 0;
+  let sum = 0;
+  for (let h = 0; h < values.length; h++) {
+    if (values[h] < values[low]) low = h;
+    if (values[h] > values[high]) high = h;
+    sum += values[h];
+  }
+  return {
+    min: values[low],
+    minAt: hourName(low, values.length, year),
+    max: values[high],
+    maxAt: hourName(high, values.length, year),
+    mean: sum / values.length,
+  };
+}
+
+/** Sum of hourly means in W, as kWh. */
+function kWh(values: Float64Array): number {
+  let sum = 0;
+  for (let h = 0; h < values.length; h++) sum += values[h];
+  return sum / 1000;
+}
+
+function byMonthKWh(values: Float64Array): number[] {
+  const months = new Array<number>(12).fill(0);
+  for (let h = 0; h < values.length; h++) months[monthOfHour(h, values.length)] += values[h] / 1000;
+  return months;
+}
+
+function throughput(balance: BalanceKWh): number {
+  const total = balanceLines.reduce((sum, name) => sum + Math.abs(balance[name]), 0);
+  return Math.max(total, 1e-9);
+}

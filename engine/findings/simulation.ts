@@ -1,0 +1,139 @@
+// What one run of a building gives: findings as figures, and the hours behind them.
+import type { WeatherNote } from '../../weather/index.ts';
+
+/** Highest, lowest and mean over the year, with the start of the hour in local standard time. */
+export interface Extremes {
+  readonly min: number;
+  readonly max: number;
+  readonly mean: number;
+  readonly minAt: string;
+  readonly maxAt: string;
+}
+
+/**
+ * Heat over the year [kWh]. All lines but the last two are heat into the room (cooling and losses are
+ * negative); `storage` is what air and masses took up; `residual` is what does not add up.
+ */
+export interface BalanceKWh {
+  readonly solar: number;
+  readonly gains: number;
+  readonly heating: number;
+  readonly cooling: number;
+  readonly opaque: number;
+  readonly glazing: number;
+  readonly ground: number;
+  readonly infiltration: number;
+  readonly ventilation: number;
+  readonly rooms: number;
+  readonly storage: number;
+  readonly residual: number;
+}
+
+/** Seven days from `from` (YYYY-MM-DD) with the most degree hours outside the band. */
+export interface WorstWeek {
+  readonly from: string;
+  readonly firstHour: number;
+  readonly degreeHours: number;
+}
+
+/** Figures of one room, or of the whole building. */
+export interface SpaceFindings {
+  readonly floorAreaM2: number;
+  readonly heatingKWh: number;
+  readonly coolingKWh: number;
+  /** Greatest hourly mean; `…At` is the start of that hour, empty where there was none. */
+  readonly peakHeatingW: number;
+  readonly peakHeatingAt: string;
+  readonly peakCoolingW: number;
+  readonly peakCoolingAt: string;
+  readonly airTemperatureC: Extremes;
+  readonly operativeTemperatureC: Extremes;
+  readonly occupiedHours: number;
+  readonly hoursBelowBand: number;
+  readonly hoursAboveBand: number;
+  readonly degreeHoursBelow: number;
+  readonly degreeHoursAbove: number;
+  readonly heatingByMonthKWh: readonly number[];
+  readonly coolingByMonthKWh: readonly number[];
+  readonly balanceKWh: BalanceKWh;
+}
+
+export interface RoomFindings extends SpaceFindings {
+  readonly id: string;
+  readonly name: string;
+  readonly worstWeekBelow: WorstWeek | null;
+  readonly worstWeekAbove: WorstWeek | null;
+  /** Hours in which the heater (chiller) gave all it had and the set-point was missed by more than 0.2 K. */
+  readonly hoursHeatingShort: number;
+  readonly hoursCoolingShort: number;
+}
+
+export interface RunQuality {
+  /** Largest imbalance in any step of the network, or over the year in any room, over the throughput. */
+  readonly relativeBalanceResidual: number;
+  readonly unconvergedSteps: number;
+  readonly warmUpDays: number;
+  readonly warmUpDriftK: number;
+  readonly nodes: number;
+}
+
+/** Everything `simulate --json` prints. */
+export interface Findings {
+  readonly project: string;
+  readonly weather: {
+    readonly place: string;
+    readonly form: string;
+    readonly hours: number;
+    readonly repairs: readonly WeatherNote[];
+  };
+  readonly stepMinutes: number;
+  readonly rooms: readonly RoomFindings[];
+  readonly building: SpaceFindings;
+  readonly assumptions: readonly string[];
+  readonly cautions: readonly string[];
+  readonly quality: RunQuality;
+  readonly timings: {
+    readonly readMs: number;
+    readonly assembleMs: number;
+    readonly runMs: number;
+  };
+}
+
+/** Mean heat into the room in each hour [W]; `cooling` is negative, `storage` positive when taken up. */
+export type HourlyFlows = Readonly<Record<Exclude<keyof BalanceKWh, 'residual'>, Float64Array>>;
+
+/** One value an hour. Band limits are NaN where nobody is there to judge. */
+export interface RoomHours {
+  readonly id: string;
+  readonly name: string;
+  readonly floorAreaM2: number;
+  readonly airC: Float64Array;
+  readonly meanRadiantC: Float64Array;
+  readonly operativeC: Float64Array;
+  /** Both 0 or more. */
+  readonly heatingW: Float64Array;
+  readonly coolingW: Float64Array;
+  readonly bandLowC: Float64Array;
+  readonly bandHighC: Float64Array;
+  readonly occupied: Uint8Array;
+  readonly flowsW: HourlyFlows;
+}
+
+export interface Simulation {
+  readonly findings: Findings;
+  readonly hours: number;
+  /** Year whose calendar the hours are laid on. */
+  readonly year: number;
+  readonly outdoorC: Float64Array;
+  readonly rooms: readonly RoomHours[];
+}
+
+/** The buffers of a simulation, to hand over to another thread without copying. */
+export function transferables(simulation: Simulation): ArrayBuffer[] {
+  const arrays: ArrayBufferView[] = [simulation.outdoorC];
+  for (const room of simulation.rooms) {
+    for (const value of Object.values(room)) if (ArrayBuffer.isView(value)) arrays.push(value);
+    arrays.push(...Object.values(room.flowsW));
+  }
+  return [...new Set(arrays.map((array) => array.buffer))].filter((b) => b instanceof ArrayBuffer);
+}

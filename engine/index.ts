@@ -1,0 +1,11 @@
+// The front door of the engine: all that the app may import.
+export * from './assembly/index.ts';
+export {
+  type Building,
+  parseProject,
+  parseProjectDocument,
+  projectSchema,
+} from './building/index.ts';
+export * from './findings/index.ts';
+export * from './network/index.ts';
+export { type Progress, type SimulationOptions, simulate } from './simulate.ts';
