@@ -1,0 +1,61 @@
+import type { Building } from '../../engine/index.ts';
+import type { Fault } from '../../weather/index.ts';
+import type { Command } from './command.ts';
+import { openProject, weatherFor } from './inputs.ts';
+import { InputFaults } from './stop.ts';
+
+const counted = (count: number, one: string, many = `${one}s`) =>
+  `${count} ${count === 1 ? one : many}`;
+
+function contents({ rooms, constructions, glazings, schedules }: Building): string {
+  const surfaces = rooms.reduce((sum, room) => sum + room.surfaces.length, 0);
+  return [
+    counted(rooms.length, 'room'),
+    counted(surfaces, 'surface'),
+    counted(constructions.length, 'construction'),
+    counted(glazings.length, 'glazing'),
+    counted(schedules.length, 'schedule'),
+  ].join(', ');
+}
+
+/** What was found, good or bad; the weather is looked at only where the project itself is sound. */
+async function look(file: string) {
+  try {
+    const project = await openProject(file);
+    const lines = [`${project.building.name}: ${contents(project.building)}.`];
+    if (!project.building.weather) {
+      return { faults: [], notes: ['The project names no weather table yet.'], lines };
+    }
+    const weather = await weatherFor(project, null);
+    const { site, form, hours, notes } = weather.year;
+    lines.push(`Weather: ${site.name} (${form}), ${hours} hours.`);
+    return { faults: [], notes: [...weather.notes, ...notes.map((note) => note.text)], lines };
+  } catch (error) {
+    if (!(error instanceof InputFaults)) throw error;
+    return { faults: error.faults, notes: [], lines: [] };
+  }
+}
+
+export const checkCommand: Command = {
+  name: 'check',
+  operand: 'PROJECT',
+  summary:
+    'Looks for everything wrong in a project and its weather, with where and how to mend it.',
+  options: { json: { help: 'one JSON document on standard output' } },
+  examples: ['inglenook check house.inglenook.json', 'inglenook check house.inglenook.json --json'],
+  async run(operand, given, terminal) {
+    const { faults, notes, lines } = await look(operand);
+    if (given.json) {
+      const document: { ok: boolean; faults: readonly Fault[]; notes: readonly string[] } = {
+        ok: faults.length === 0,
+        faults,
+        notes,
+      };
+      terminal.print(JSON.stringify(document, null, 2));
+      if (faults.length > 0) throw new InputFaults([]); // told on standard output already
+      return;
+    }
+    if (faults.length > 0) throw new InputFaults(faults);
+    terminal.print([...lines, ...notes.map((note) => `Note: ${note}`), 'No faults.'].join('\n'));
+  },
+};

@@ -1,0 +1,85 @@
+// The network behind a project, as data: every node and link with where it comes from.
+
+import type { Assembly, Provenance } from '../../engine/index.ts';
+import { linkSizeWPerK } from './link-size.ts';
+
+export interface NodeEntry extends Provenance {
+  readonly index: number;
+  readonly capacityJPerK: number;
+  readonly isBoundary: boolean;
+  /** Capacity over the sum of the conductances at it; the network's own modes are slower and faster. */
+  readonly ownTimeConstantH: number | null;
+}
+
+export interface LinkEntry extends Provenance {
+  readonly law: string;
+  readonly from: string;
+  readonly to: string;
+  readonly sizeWPerK: number;
+}
+
+export interface NetworkDocument {
+  readonly project: string;
+  readonly nodes: readonly NodeEntry[];
+  readonly links: readonly LinkEntry[];
+  /** Air that carries heat one way: the node at its end feels it. */
+  readonly directed: readonly LinkEntry[];
+  readonly enclosures: readonly { readonly name: string; readonly nodes: readonly string[] }[];
+  readonly sources: readonly { readonly name: string; readonly node: string }[];
+  readonly plants: readonly { readonly name: string; readonly kind: string }[];
+}
+
+export function networkDocument({ building, problem, provenance }: Assembly): NetworkDocument {
+  const { network } = problem;
+  const { nodeNames } = network;
+  const sumWPerK = new Float64Array(nodeNames.length);
+  const links = network.links.flatMap((group, g) =>
+    Array.from(group.from, (from, k): LinkEntry => {
+      const to = group.to[k];
+      const sizeWPerK = linkSizeWPerK(problem, group, k);
+      sumWPerK[from] += sizeWPerK;
+      sumWPerK[to] += sizeWPerK;
+      const ends = { from: nodeNames[from], to: nodeNames[to] };
+      return { ...provenance.links[g][k], law: group.law, ...ends, sizeWPerK };
+    }),
+  );
+  const { directed } = network;
+  const flows = Array.from(directed.from, (from, k): LinkEntry => {
+    const to = directed.to[k];
+    sumWPerK[to] += directed.rateWPerK[k];
+    return {
+      ...provenance.directed[k],
+      law: 'directed',
+      from: nodeNames[from],
+      to: nodeNames[to],
+      sizeWPerK: directed.rateWPerK[k],
+    };
+  });
+  const nodes = nodeNames.map((_, index): NodeEntry => {
+    const isBoundary = network.boundarySeries[index] >= 0;
+    const capacityJPerK = isBoundary ? 0 : network.capacityJPerK[index];
+    const hasTime = capacityJPerK > 0 && sumWPerK[index] > 0;
+    return {
+      ...provenance.nodes[index],
+      index,
+      capacityJPerK,
+      isBoundary,
+      ownTimeConstantH: hasTime ? capacityJPerK / sumWPerK[index] / 3600 : null,
+    };
+  });
+  return {
+    project: building.name,
+    nodes,
+    links,
+    directed: flows,
+    enclosures: network.enclosures.map((one) => ({
+      name: one.name,
+      nodes: Array.from(one.nodes, (node) => nodeNames[node]),
+    })),
+    sources: Array.from(network.sources.node, (node, k) => ({
+      name: provenance.sources[k],
+      node: nodeNames[node],
+    })),
+    plants: network.plants.map(({ name, kind }) => ({ name, kind })),
+  };
+}

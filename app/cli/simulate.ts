@@ -1,0 +1,91 @@
+import { type Findings, type Simulation, simulate } from '../../engine/index.ts';
+import { writeFolderWhole } from '../disk/index.ts';
+import { type Accuracy, accuracyOf, accuracyText } from './accuracy.ts';
+import { textOf } from './arguments.ts';
+import type { Command } from './command.ts';
+import { findingsText } from './findings-text.ts';
+import { resultFiles } from './hourly-csv.ts';
+import { type OpenProject, type OpenWeather, openProject, weatherFor } from './inputs.ts';
+import { need, WrongUsage } from './stop.ts';
+import type { Terminal } from './terminal.ts';
+
+const stepsMinutes = [1, 2, 3, 4, 5, 6, 10, 12, 15, 20, 30, 60];
+
+function stepOf(text: string | null): number {
+  if (text === null) return 15;
+  const step = Number(text);
+  if (stepsMinutes.includes(step)) return step;
+  throw new WrongUsage(
+    `simulate: --step: found "${text}", expected minutes that divide the hour: ${stepsMinutes.join(', ')}.`,
+  );
+}
+
+interface Fineness {
+  readonly stepMinutes: number;
+  readonly refine: number;
+}
+
+function run(
+  { building }: OpenProject,
+  { year }: OpenWeather,
+  fineness: Fineness,
+  readMs: number,
+  terminal: Terminal,
+): Simulation {
+  const steps = simulate(building, year, { ...fineness, readMs, nowMs: () => performance.now() });
+  let step = steps.next();
+  while (!step.done) {
+    terminal.progress(step.value.done, step.value.what);
+    step = steps.next();
+  }
+  terminal.endProgress();
+  return step.value;
+}
+
+export const simulateCommand: Command = {
+  name: 'simulate',
+  operand: 'PROJECT',
+  summary: 'Runs the year: energy, peaks and hours outside the comfort band, room by room.',
+  options: {
+    weather: { value: 'FILE', help: "a weather table instead of the project's" },
+    step: { value: 'MIN', help: 'step in minutes, a divisor of 60; 15 without it' },
+    json: { help: 'one JSON document on standard output' },
+    out: { value: 'DIR', help: 'also write findings.json and the hours of each room (CSV) there' },
+    'check-accuracy': { help: 'run again with half the step and twice the nodes; show the change' },
+    progress: { help: 'tell how far it is even where standard error is no terminal' },
+  },
+  examples: [
+    'inglenook simulate house.inglenook.json',
+    'inglenook simulate house.inglenook.json --weather cold-year.csv --json > cold.json',
+    'inglenook simulate house.inglenook.json --out results --check-accuracy',
+  ],
+  async run(operand, given, terminal) {
+    const stepMinutes = stepOf(textOf(given, 'step'));
+    const started = performance.now();
+    const project = await openProject(operand);
+    const weather = await weatherFor(project, textOf(given, 'weather'));
+    const readMs = performance.now() - started;
+
+    const simulation = run(project, weather, { stepMinutes, refine: 1 }, readMs, terminal);
+    const assumptions = [...weather.notes, ...simulation.findings.assumptions];
+    const findings: Findings = { ...simulation.findings, assumptions };
+    let accuracy: Accuracy | null = null;
+    if (given['check-accuracy']) {
+      const fineness = { stepMinutes: stepMinutes / 2, refine: 2 };
+      const finer = run(project, weather, fineness, 0, terminal);
+      accuracy = accuracyOf(findings, finer.findings);
+    }
+    const document = accuracy ? { ...findings, accuracy } : findings;
+
+    const folder = textOf(given, 'out');
+    if (folder !== null) {
+      need(await writeFolderWhole(folder, resultFiles(simulation, document)));
+      terminal.note(
+        `Written to ${folder}: findings.json and ${simulation.rooms.length} room file(s).`,
+      );
+    }
+    if (given.json) return terminal.print(JSON.stringify(document, null, 2));
+    terminal.print(findingsText(findings));
+    if (accuracy) terminal.print(`\n${accuracyText(findings, accuracy)}`);
+  },
+};
