@@ -6,8 +6,24 @@ import { type LinkGroup, type Problem, seriesMean } from '../../engine/index.ts'
 const stefanBoltzmannWPerM2K4 = 5.670374419e-8; // CODATA 2018, exact in the SI of 2019
 const referenceK = 293.15;
 
-export function linkSizeWPerK(problem: Problem, group: LinkGroup, k: number): number {
-  const mean = (series: number) => (series < 0 ? 0 : seriesMean(problem.series[series]));
+/** The year's mean of a series by its index (0 for none), computed when it is first asked for. */
+export function yearMeans(problem: Problem): (series: number) => number {
+  const means = new Map<number, number>();
+  return (series) => {
+    if (series < 0) return 0;
+    const known = means.get(series);
+    if (known !== undefined) return known;
+    const mean = seriesMean(problem.series[series], 0, problem.stepCount);
+    means.set(series, mean);
+    return mean;
+  };
+}
+
+export function linkSizeWPerK(
+  group: LinkGroup,
+  k: number,
+  mean: (series: number) => number,
+): number {
   switch (group.law) {
     case 'constant':
       return group.conductanceWPerK[k];

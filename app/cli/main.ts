@@ -1,7 +1,7 @@
 // The command line's entry, built to dist/cli.js.
 
 import { faultText } from '../../weather/index.ts';
-import { version } from '../host/version.ts';
+import { version } from '../version.ts';
 import { readArguments } from './arguments.ts';
 import { checkCommand } from './check.ts';
 import { commandHelp, generalHelp } from './help.ts';

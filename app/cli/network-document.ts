@@ -1,7 +1,7 @@
 // The network behind a project, as data: every node and link with where it comes from.
 
 import type { Assembly, Provenance } from '../../engine/index.ts';
-import { linkSizeWPerK } from './link-size.ts';
+import { linkSizeWPerK, yearMeans } from './link-size.ts';
 
 export interface NodeEntry extends Provenance {
   readonly index: number;
@@ -32,11 +32,12 @@ export interface NetworkDocument {
 export function networkDocument({ building, problem, provenance }: Assembly): NetworkDocument {
   const { network } = problem;
   const { nodeNames } = network;
+  const mean = yearMeans(problem);
   const sumWPerK = new Float64Array(nodeNames.length);
   const links = network.links.flatMap((group, g) =>
     Array.from(group.from, (from, k): LinkEntry => {
       const to = group.to[k];
-      const sizeWPerK = linkSizeWPerK(problem, group, k);
+      const sizeWPerK = linkSizeWPerK(group, k, mean);
       sumWPerK[from] += sizeWPerK;
       sumWPerK[to] += sizeWPerK;
       const ends = { from: nodeNames[from], to: nodeNames[to] };
@@ -46,13 +47,15 @@ export function networkDocument({ building, problem, provenance }: Assembly): Ne
   const { directed } = network;
   const flows = Array.from(directed.from, (from, k): LinkEntry => {
     const to = directed.to[k];
-    sumWPerK[to] += directed.rateWPerK[k];
+    const scale = directed.series[k] < 0 ? 1 : mean(directed.series[k]);
+    const sizeWPerK = directed.rateWPerK[k] * scale;
+    sumWPerK[to] += sizeWPerK;
     return {
       ...provenance.directed[k],
       law: 'directed',
       from: nodeNames[from],
       to: nodeNames[to],
-      sizeWPerK: directed.rateWPerK[k],
+      sizeWPerK,
     };
   });
   const nodes = nodeNames.map((_, index): NodeEntry => {

@@ -121,7 +121,7 @@ export const weatherCommand: Command = {
   summary:
     'Shows what was read from a weather table: place, columns, months, repairs, assumptions.',
   options: { json: { help: 'one JSON document on standard output' } },
-  examples: ['inglenook weather denver.csv', 'inglenook weather denver.csv --json'],
+  examples: ['inglenook weather year.csv', 'inglenook weather year.csv --json'],
   async run(operand, given, terminal) {
     const { file, sha256, year, notes } = await openWeather(operand);
     for (const note of notes) terminal.note(note);

@@ -11,7 +11,7 @@ import { makeHandlers } from './handlers.ts';
 import { startLoopback } from './loopback/loopback.ts';
 import { dataFolder } from './recent.ts';
 import { type StartOptions, startHelp, startOptions } from './start-options.ts';
-import { version } from './version.ts';
+import { version } from '../version.ts';
 
 // This file is built to dist/start.js: everything is found from there.
 const dist = fileURLToPath(new URL('.', import.meta.url));

@@ -1,3 +1,0 @@
-import manifest from '../../package.json' with { type: 'json' };
-
-export const version: string = manifest.version;
