@@ -8,4 +8,5 @@ export {
 } from './building/index.ts';
 export * from './findings/index.ts';
 export * from './network/index.ts';
+export * from './nodal/index.ts';
 export { type Progress, type SimulationOptions, simulate } from './simulate.ts';

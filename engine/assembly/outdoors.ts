@@ -1,5 +1,10 @@
 // The world outside as boundary nodes and series: air, sky, wind at each face, sun on each plane.
-import { type PlaneIrradiance, planeIrradiance, type WeatherSteps } from '../../weather/index.ts';
+import {
+  type PlaneIrradiance,
+  planeIrradiance,
+  type SunTrack,
+  type WeatherSteps,
+} from '../../weather/index.ts';
 import type { Building } from '../building/index.ts';
 import {
   forcedFilmWPerM2K,
@@ -17,6 +22,7 @@ export interface Outdoors {
   readonly count: number;
   readonly airNode: number;
   readonly skyNode: number;
+  readonly sun: SunTrack;
   /** Wind-driven film of a face, as a series of W/m²K; the whole film where `hasNaturalTerm` is false. */
   filmSeries(face: { heightM: number; tiltDeg: number; azimuthDeg: number }): number;
   readonly hasNaturalTerm: boolean;
@@ -88,6 +94,7 @@ export function outdoors(
     count: steps.count,
     airNode,
     skyNode,
+    sun: steps.sun,
     hasNaturalTerm: method === 'yazdanian-klems',
     filmSeries({ heightM, tiltDeg, azimuthDeg }) {
       const key = `${heightM} ${tiltDeg} ${azimuthDeg}`;

@@ -1,9 +1,9 @@
 // Sunlight through the windows of a room: how much comes in each step, where it is absorbed in the
 // end, and what the panes keep.
 
-import { inverse, Matrix } from 'ml-matrix';
 import type { Building, Room } from '../building/index.ts';
-import { beamAbsorptance, beamTransmittance } from '../physics/index.ts';
+import { beamAbsorptance, beamTransmittance, lightMatrix } from '../physics/index.ts';
+import { addBeam } from './beam-inside.ts';
 import type { FaceViews } from './enclosure.ts';
 import type { NetworkBuilder } from './network-builder.ts';
 import type { Outdoors } from './outdoors.ts';
@@ -32,33 +32,33 @@ interface Transmitted {
 export function addRoomSun(task: SunTask): void {
   const { room, faces, windows, builder, meters } = task;
   if (windows.length === 0) return;
-  const incidence = lightInside(faces, task.views);
-  const onFacesW = faces.map(() => new Float64Array(task.outside.count));
+  const firstW = faces.map(() => new Float64Array(task.outside.count));
   for (const window of windows) {
     const light = transmitted(window, task);
-    const windowFace = faces.indexOf(window.face);
-    const beamTo = incidence(beamTargets(faces));
-    const diffuseTo = incidence(viewTargets(task.views, windowFace));
-    faces.forEach((_, f) => {
-      const into = onFacesW[f];
-      for (let k = 0; k < into.length; k++)
-        into[k] += beamTo[f] * light.beamW[k] + diffuseTo[f] * light.diffuseW[k];
+    addBeam(task.building, room, faces, window, light.beamW, task.outside.sun, firstW);
+    viewShares(task.views, faces.indexOf(window.face)).forEach((share, f) => {
+      addScaled(share, light.diffuseW, firstW[f]);
     });
     addPaneSun(window, task);
   }
+  const totalW = followed(faces, task.views, firstW);
   faces.forEach((face, f) => {
     const name = `${face.name} light from inside`;
     if (face.opening === undefined) {
       if (face.light.absorbed === 0) return;
-      const series = builder.series(name, 'step', onFacesW[f]);
-      const ref = builder.source(face.node, face.light.absorbed, series, name);
+      const ref = builder.source(
+        face.node,
+        face.light.absorbed,
+        builder.series(name, 'step', totalW[f]),
+        name,
+      );
       builder.count(meters.solar, 1, ref);
       builder.count(task.faceMeter(face), -1, ref);
       return;
     }
     const window = windows.find((one) => one.face === face);
     if (!window) throw new Error(`no window behind the face ${face.name} of ${room.id}`);
-    const series = builder.series(name, 'step', onFacesW[f]);
+    const series = builder.series(name, 'step', totalW[f]);
     window.paneNodes.forEach((nodes, p) => {
       const share = window.optics.diffuseFromInside.absorptance[p];
       for (const node of nodes) builder.source(node, share / 2, series, name);
@@ -67,44 +67,31 @@ export function addRoomSun(task: SunTask): void {
 }
 
 /**
- * Light that meets each face in the end, all reflections followed, per watt that first goes to the
- * faces in the shares given. What faces absorb and glass lets out is this times their shares.
+ * Light that meets each face in the end, all reflections followed, from what meets them first. What
+ * faces absorb and glass lets out is this times their shares.
  */
-function lightInside(
+function followed(
   faces: readonly Face[],
   views: FaceViews,
-): (first: Float64Array) => Float64Array {
+  firstW: readonly Float64Array[],
+): Float64Array[] {
   const n = faces.length;
-  const reflectance = Float64Array.from(
-    faces,
-    ({ light }) => 1 - light.absorbed - light.transmitted,
-  );
-  // H_i = E_i + Σj ρ_j·F_ji·H_j, so H = (I − R)⁻¹·E with R_ij = ρ_j·F_ji.
-  const system = Matrix.eye(n, n);
-  for (let i = 0; i < n; i++)
-    for (let j = 0; j < n; j++)
-      system.set(
-        i,
-        j,
-        system.get(i, j) - (reflectance[j] * views.exchangeM2[j * n + i]) / views.areaM2[j],
-      );
-  const matrix = inverse(system);
-  return (first) => Float64Array.from(matrix.mmul(Matrix.columnVector(first)).to1DArray());
+  const reflectance = faces.map(({ light }) => 1 - light.absorbed - light.transmitted);
+  const matrix = lightMatrix(views.areaM2, views.exchangeM2, reflectance);
+  return faces.map((_, i) => {
+    const total = new Float64Array(firstW[i].length);
+    for (let j = 0; j < n; j++) addScaled(matrix[i * n + j], firstW[j], total);
+    return total;
+  });
 }
 
-/** The beam falls on the floor, or on all opaque faces where there is none. */
-function beamTargets(faces: readonly Face[]): Float64Array {
-  const isFloor = (face: Face) => face.tiltDeg > 135 && face.opening === undefined;
-  const anyFloor = faces.some(isFloor);
-  const weight = faces.map((face) =>
-    (anyFloor ? isFloor(face) : face.opening === undefined) ? face.areaM2 : 0,
-  );
-  const total = weight.reduce((sum, w) => sum + w, 0);
-  return Float64Array.from(weight, (w) => w / total);
+function addScaled(factor: number, values: Float64Array, into: Float64Array): void {
+  if (factor === 0) return;
+  for (let k = 0; k < into.length; k++) into[k] += factor * values[k];
 }
 
 /** Diffuse light spreads as the window sees the faces. */
-function viewTargets(views: FaceViews, windowFace: number): Float64Array {
+function viewShares(views: FaceViews, windowFace: number): Float64Array {
   const n = views.areaM2.length;
   return Float64Array.from(
     { length: n },

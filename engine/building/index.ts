@@ -11,6 +11,7 @@ export {
 } from './find.ts';
 export { parseProject, parseProjectDocument } from './parse-project.ts';
 export type { Construction, Glazing, Layer, Material, Pane, PaneGlazing } from './schema-fabric.ts';
+export { schemaFaults } from './schema-faults.ts';
 export { type Building, type Physics, projectSchema } from './schema-project.ts';
 export type {
   Boundary,

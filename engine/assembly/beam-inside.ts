@@ -1,0 +1,87 @@
+// Where the beam through a window lands: on the floor, or on its geometric patch.
+import type { SunTrack } from '../../weather/index.ts';
+import type { Building, Room } from '../building/index.ts';
+import { boxFaces, faceRectangle, patchScratch, patchShare, sunTravel } from '../physics/index.ts';
+import { boxFaceName, onBox, physicsBox } from './enclosure.ts';
+import type { Face } from './room-parts.ts';
+import type { WindowParts } from './window.ts';
+
+/**
+ * Adds the beam of one window to the light that meets each face first.
+ *
+ * The patch needs a box and the window's rectangle; without them the beam falls on the floor.
+ * @param beamW transmitted beam in each step [W]
+ * @param firstW light that meets face f first in step k, `firstW[f][k]`, added to [W]
+ */
+export function addBeam(
+  building: Building,
+  room: Room,
+  faces: readonly Face[],
+  window: WindowParts,
+  beamW: Float64Array,
+  sun: SunTrack,
+  firstW: readonly Float64Array[],
+): void {
+  if (building.physics.beamInside === 'patch' && room.box && window.opening.rectangle) {
+    addPatch(room.box, faces, window, beamW, sun, firstW);
+    return;
+  }
+  floorShares(faces).forEach((share, f) => {
+    if (share === 0) return;
+    for (let k = 0; k < beamW.length; k++) firstW[f][k] += share * beamW[k];
+  });
+}
+
+/** The floor by area, or all opaque faces where there is none. */
+function floorShares(faces: readonly Face[]): Float64Array {
+  const isFloor = (face: Face) => face.tiltDeg > 135 && face.opening === undefined;
+  const anyFloor = faces.some(isFloor);
+  const weight = faces.map((face) =>
+    (anyFloor ? isFloor(face) : face.opening === undefined) ? face.areaM2 : 0,
+  );
+  const total = weight.reduce((sum, w) => sum + w, 0);
+  return Float64Array.from(weight, (w) => w / total);
+}
+
+function addPatch(
+  roomBox: NonNullable<Room['box']>,
+  faces: readonly Face[],
+  window: WindowParts,
+  beamW: Float64Array,
+  sun: SunTrack,
+  firstW: readonly Float64Array[],
+): void {
+  const box = physicsBox(roomBox);
+  const rectangle = window.opening.rectangle;
+  if (!rectangle) return;
+  const opening = onBox(roomBox, boxFaceName(roomBox, window.face), rectangle);
+  const names = faces.map((face) => boxFaceName(roomBox, face));
+  const placed = faces.map((face, f) =>
+    face.rectangle ? onBox(roomBox, names[f], face.rectangle) : null,
+  );
+  // Faces without a rectangle share by area what meets their box face outside all rectangles.
+  const freeM2 = boxFaces.map((name) =>
+    faces.reduce((sum, face, f) => sum + (names[f] === name && !placed[f] ? face.areaM2 : 0), 0),
+  );
+  const whole = boxFaces.map((name) => faceRectangle(box, name));
+  const scratch = patchScratch();
+  const share = new Float64Array(faces.length);
+  const rest = new Float64Array(boxFaces.length);
+  for (let k = 0; k < beamW.length; k++) {
+    if (beamW[k] === 0) continue;
+    const travel = sunTravel(roomBox.frontAzimuthDeg, sun.azimuthDeg[k], sun.altitudeDeg[k]);
+    for (let b = 0; b < boxFaces.length; b++)
+      rest[b] = patchShare(box, opening, travel, whole[b], scratch);
+    for (let f = 0; f < faces.length; f++) {
+      const target = placed[f];
+      if (!target) continue;
+      share[f] = patchShare(box, opening, travel, target, scratch);
+      rest[boxFaces.indexOf(names[f])] -= share[f];
+    }
+    for (let f = 0; f < faces.length; f++) {
+      const b = boxFaces.indexOf(names[f]);
+      if (!placed[f]) share[f] = freeM2[b] > 0 ? (rest[b] * faces[f].areaM2) / freeM2[b] : 0;
+      firstW[f][k] += share[f] * beamW[k];
+    }
+  }
+}

@@ -1,0 +1,227 @@
+// Outside walls and doors, from outside to inside. Old build-ups first.
+import { air, construction, mm } from './construction-row.ts';
+import type { LibraryConstruction } from './types.ts';
+
+const render = { sun: 0.4, rough: 'medium rough' } as const;
+const brick = { sun: 0.7, rough: 'rough' } as const;
+const boards = { sun: 0.6, rough: 'medium smooth' } as const;
+const sheet = { sun: 0.5, rough: 'smooth' } as const;
+
+export const wallConstructions: readonly LibraryConstruction[] = [
+  construction(
+    'wall',
+    'wall-brick-solid-240',
+    'Solid brick 24 cm, plastered',
+    [1.7, 2.2],
+    [mm('plaster-cement-sand', 20), mm('brick-solid', 240), mm('plaster-lime-sand', 15)],
+    render,
+  ),
+  construction(
+    'wall',
+    'wall-brick-solid-365',
+    'Solid brick 36.5 cm, plastered',
+    [1.3, 1.7],
+    [mm('plaster-cement-sand', 20), mm('brick-solid', 365), mm('plaster-lime-sand', 15)],
+    render,
+  ),
+  construction(
+    'wall',
+    'wall-stone-500',
+    'Sandstone 50 cm, plastered inside',
+    [1.9, 2.7],
+    [mm('stone-sandstone', 500), mm('plaster-lime-sand', 20)],
+    { sun: 0.65, rough: 'rough' },
+  ),
+  construction(
+    'wall',
+    'wall-cavity-empty',
+    'Brick cavity wall, empty',
+    [1.2, 1.7],
+    [mm('brick-outer', 103), air(50), mm('brick-inner', 103), mm('plaster-gypsum-1300', 13)],
+    brick,
+  ),
+  construction(
+    'wall',
+    'wall-cavity-filled-50',
+    'Brick cavity wall, 5 cm filled',
+    [0.45, 0.65],
+    [
+      mm('brick-outer', 103),
+      mm('mineral-wool-040', 50),
+      mm('brick-inner', 103),
+      mm('plaster-gypsum-1300', 13),
+    ],
+    brick,
+  ),
+  construction(
+    'wall',
+    'wall-cavity-filled-150',
+    'Brick and block, 15 cm wool',
+    [0.17, 0.24],
+    [
+      mm('brick-outer', 103),
+      mm('mineral-wool-035', 150),
+      mm('block-light', 100),
+      mm('plasterboard-700', 13),
+    ],
+    brick,
+  ),
+  construction(
+    'wall',
+    'wall-concrete-panel-old',
+    'Concrete panel, 5 cm foam, 1970s',
+    [0.55, 0.8],
+    [mm('concrete-reinforced-1', 60), mm('eps-040', 50), mm('concrete-reinforced-1', 150)],
+    { sun: 0.6, rough: 'medium rough' },
+  ),
+  construction(
+    'wall',
+    'wall-aerated-365',
+    'Aerated concrete 36.5 cm',
+    [0.2, 0.28],
+    [mm('plaster-cement-sand', 15), mm('aerated-concrete-350', 365), mm('plaster-gypsum-1000', 10)],
+    render,
+  ),
+  construction(
+    'wall',
+    'wall-insulating-brick-365',
+    'Insulating brick 36.5 cm',
+    [0.27, 0.36],
+    [mm('plaster-cement-sand', 20), mm('brick-insulating', 365), mm('plaster-gypsum-1000', 15)],
+    render,
+  ),
+  construction(
+    'wall',
+    'wall-render-eps-100',
+    'Brick, 10 cm foam outside (retrofit)',
+    [0.25, 0.34],
+    [
+      mm('plaster-cement-sand', 8),
+      mm('eps-035', 100),
+      mm('brick-solid', 240),
+      mm('plaster-lime-sand', 15),
+    ],
+    render,
+  ),
+  construction(
+    'wall',
+    'wall-render-eps-160',
+    'Calcium silicate, 16 cm foam outside',
+    [0.17, 0.22],
+    [
+      mm('plaster-cement-sand', 8),
+      mm('eps-031', 160),
+      mm('calcium-silicate-1800', 175),
+      mm('plaster-gypsum-1000', 10),
+    ],
+    render,
+  ),
+  construction(
+    'wall',
+    'wall-render-wool-300',
+    'Calcium silicate, 30 cm wool outside',
+    [0.1, 0.14],
+    [
+      mm('plaster-cement-sand', 8),
+      mm('mineral-wool-035', 300),
+      mm('calcium-silicate-1800', 175),
+      mm('plaster-gypsum-1000', 10),
+    ],
+    render,
+  ),
+  construction(
+    'wall',
+    'wall-lined-inside-60',
+    'Solid brick, 6 cm calcium silicate board inside',
+    [0.6, 0.8],
+    [
+      mm('plaster-cement-sand', 20),
+      mm('brick-solid', 365),
+      mm('calcium-silicate-board', 60),
+      mm('plaster-lime-sand', 5),
+    ],
+    brick,
+  ),
+  construction(
+    'wall',
+    'wall-timber-frame-140',
+    'Timber frame, 14 cm wool',
+    [0.28, 0.38],
+    [mm('timber-500', 20), mm('osb', 12), mm('framed-wool-040', 140), mm('plasterboard-700', 13)],
+    boards,
+  ),
+  construction(
+    'wall',
+    'wall-timber-frame-240',
+    'Timber frame, 24 cm wool and wood fibre',
+    [0.14, 0.19],
+    [
+      mm('timber-500', 20),
+      mm('wood-fibre-board', 60),
+      mm('framed-wool-035', 240),
+      mm('osb', 15),
+      mm('plasterboard-700', 13),
+    ],
+    boards,
+  ),
+  construction(
+    'wall',
+    'wall-cross-laminated',
+    'Cross-laminated timber, 20 cm wood fibre',
+    [0.16, 0.21],
+    [
+      mm('timber-500', 20),
+      mm('wood-fibre-soft', 200),
+      mm('cross-laminated-timber', 100),
+      mm('plasterboard-900', 13),
+    ],
+    boards,
+  ),
+  construction(
+    'wall',
+    'wall-steel-sandwich-100',
+    'Steel sandwich panel, 10 cm',
+    [0.2, 0.3],
+    [mm('steel', 0.6), mm('pur-023', 100), mm('steel', 0.6)],
+    sheet,
+  ),
+  construction(
+    'wall',
+    'wall-basement-xps-120',
+    'Basement wall, concrete and 12 cm foam',
+    [0.24, 0.31],
+    [
+      mm('xps-034', 120),
+      mm('bitumen-felt', 4),
+      mm('concrete-reinforced-1', 250),
+      mm('plaster-gypsum-1000', 10),
+    ],
+  ),
+];
+
+export const doorConstructions: readonly LibraryConstruction[] = [
+  construction(
+    'door',
+    'door-timber-45',
+    'Solid timber door 45 mm',
+    [1.7, 2.4],
+    [mm('timber-700', 45)],
+    boards,
+  ),
+  construction(
+    'door',
+    'door-insulated',
+    'Insulated door',
+    [0.55, 0.95],
+    [mm('aluminium', 1.5), mm('pur-028', 40), mm('aluminium', 1.5)],
+    sheet,
+  ),
+  construction(
+    'door',
+    'door-steel-bare',
+    'Steel door with air space',
+    [2.4, 3.6],
+    [mm('steel', 1), air(40), mm('steel', 1)],
+    sheet,
+  ),
+];
