@@ -109,7 +109,7 @@ export const insideConstructions: readonly LibraryConstruction[] = [
     'partition-brick-115',
     'Brick 11.5 cm, plastered',
     [1.9, 2.7],
-    [mm('plaster-lime-sand', 15), mm('brick-hollow', 115), mm('plaster-lime-sand', 15)],
+    [mm('plaster-lime-sand', 10), mm('brick-hollow', 115), mm('plaster-lime-sand', 10)],
   ),
   construction(
     'partition',

@@ -26,12 +26,12 @@ export const roofConstructions: readonly LibraryConstruction[] = [
   ),
   construction(
     'roof',
-    'roof-pitched-240',
-    'Pitched roof, 24 cm between rafters',
+    'roof-pitched-220',
+    'Pitched roof, 22 cm between rafters',
     [0.16, 0.21],
     [
       mm('wood-fibre-board', 35),
-      mm('framed-wool-035', 240),
+      mm('framed-wool-035', 220),
       mm('osb', 15),
       air(25),
       mm('plasterboard-700', 13),

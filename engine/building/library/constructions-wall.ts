@@ -167,11 +167,11 @@ export const wallConstructions: readonly LibraryConstruction[] = [
   construction(
     'wall',
     'wall-cross-laminated',
-    'Cross-laminated timber, 20 cm wood fibre',
+    'Cross-laminated timber, 18 cm wood fibre',
     [0.16, 0.21],
     [
       mm('timber-500', 20),
-      mm('wood-fibre-soft', 200),
+      mm('wood-fibre-soft', 180),
       mm('cross-laminated-timber', 100),
       mm('plasterboard-900', 13),
     ],

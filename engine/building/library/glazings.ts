@@ -52,7 +52,7 @@ function coated(
   };
 }
 const warm = (side: 'front' | 'back') => coated(0.004, 0.6, 0.3, 0.23, 0.04, side);
-const warmBright = (side: 'front' | 'back') => coated(0.004, 0.69, 0.2, 0.17, 0.06, side);
+const warmBright = (side: 'front' | 'back') => coated(0.004, 0.72, 0.18, 0.15, 0.06, side);
 const hard = (side: 'front' | 'back') => coated(0.004, 0.72, 0.12, 0.11, 0.17, side);
 const sunControl = coated(0.006, 0.3, 0.46, 0.36, 0.03, 'back');
 const sunControlMild = coated(0.006, 0.42, 0.38, 0.3, 0.03, 'back');
