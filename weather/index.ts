@@ -4,6 +4,14 @@ export * from './air/atmosphere.ts';
 export * from './air/moist-air.ts';
 export * from './calendar.ts';
 export * from './fault.ts';
+export {
+  plainWeatherForm,
+  writePlainWeather,
+} from './read/form-plain.ts';
+export * from './read/number-table.ts';
+export * from './read/read-weather.ts';
+export * from './repair/gaps.ts';
+export * from './repair/radiation.ts';
 export * from './sky/air-mass.ts';
 export * from './sky/clear-sky.ts';
 export * from './sky/diffuse-split.ts';
@@ -11,7 +19,9 @@ export * from './sky/hourly-sky.ts';
 export * from './sky/perez.ts';
 export * from './sky/simple-skies.ts';
 export * from './sky/sky-temperature.ts';
+export * from './steps/hourly-sun.ts';
 export * from './steps/plane.ts';
+export * from './steps/spread.ts';
 export * from './steps/steps.ts';
 export * from './steps/sun-track.ts';
 export * from './sun/ephemeris.ts';
