@@ -1,8 +1,10 @@
 // The front door of the physics: all that other folders may import.
 
+export * from './adaptive-comfort.ts';
 export * from './air-layer.ts';
 export * from './air-mixing.ts';
 export * from './approximate-view-factors.ts';
+export * from './band-exceedance.ts';
 export * from './cavity-convection.ts';
 export * from './close-exchange.ts';
 export * from './conduction-mesh.ts';
@@ -29,12 +31,15 @@ export * from './inside-film.ts';
 export * from './interstitial-condensation.ts';
 export * from './layered-element.ts';
 export * from './leakage.ts';
+export * from './local-discomfort.ts';
 export * from './lumped-room.ts';
 export * from './moisture-buffer.ts';
+export * from './operative-temperature.ts';
 export * from './outside-film.ts';
 export * from './pane-optics.ts';
 export * from './people-gains.ts';
 export * from './plant-efficiency.ts';
+export * from './pmv.ts';
 export * from './radiosity.ts';
 export * from './short-wave-enclosure.ts';
 export * from './simple-window.ts';
