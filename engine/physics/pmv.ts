@@ -29,7 +29,6 @@ export interface ThermalVote {
   readonly vapourPa: number;
 }
 
-export const metWPerM2 = 58.15;
 export const cloM2KPerW = 0.155;
 
 /** Saturation pressure as the comfort standard has it [Pa]. Source: ISO 7730:2005, Annex D. */

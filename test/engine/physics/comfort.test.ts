@@ -24,9 +24,9 @@ import {
   radiantFromGlobeStillC,
   weightedOperativeC,
 } from '../../../engine/physics/operative-temperature.ts';
+import { metWPerM2 } from '../../../engine/physics/people-gains.ts';
 import {
   cloM2KPerW,
-  metWPerM2,
   operativeForVoteC,
   predictedDissatisfied,
   predictedMeanVote,
