@@ -25,35 +25,38 @@ export interface ZoneAir {
   readonly barometerPa?: number;
 }
 
-/** Pressure difference over leak k, outside less inside, with the zone at `zonePa` [Pa]. */
-function leakPa(paths: LeakPaths, k: number, air: ZoneAir, zonePa: number): number {
-  const barometer = air.barometerPa ?? seaLevelPa;
-  const outside = dryAirKgPerM3(air.outsideC, barometer);
-  const inside = dryAirKgPerM3(air.insideC, barometer);
-  const wind = 0.5 * outside * air.windMPerS * air.windMPerS * paths.windCoefficient[k];
-  return wind - zonePa - (outside - inside) * gravityMPerS2 * paths.heightM[k];
+/** Outside pressure by wind for a pressure coefficient of 1, ½·ρ_e·v² [Pa]. */
+function dynamicPa(air: ZoneAir, outsideKgPerM3: number): number {
+  return 0.5 * outsideKgPerM3 * air.windMPerS * air.windMPerS;
+}
+
+/** Mass flow of one leak under a pressure difference, with the density of the air that passes. */
+function flowKgPerS(
+  coefficient: number,
+  exponent: number,
+  dropPa: number,
+  outsideKgPerM3: number,
+  insideKgPerM3: number,
+): number {
+  if (dropPa > 0) return outsideKgPerM3 * coefficient * dropPa ** exponent;
+  return -insideKgPerM3 * coefficient * (-dropPa) ** exponent;
 }
 
 /**
- * Mass flow through leak k, inward positive, with the density of the air that passes.
+ * Mass flow through leak k, inward positive.
  *
- * @param zonePa zone pressure at height 0 against outside at height 0 [Pa]
+ *   Δp = C_p·½·ρ_e·v² − p − (ρ_e − ρ_i)·g·z,  ṁ = ± ρ·C·|Δp|^n
+ *
+ * @param zonePa zone pressure p at height 0 against outside at height 0 [Pa]
  * @returns [kg/s]
  */
 export function leakKgPerS(paths: LeakPaths, k: number, air: ZoneAir, zonePa: number): number {
-  const drop = leakPa(paths, k, air, zonePa);
-  const flow = paths.coefficient[k] * Math.abs(drop) ** paths.exponent[k];
   const barometer = air.barometerPa ?? seaLevelPa;
-  return drop > 0
-    ? flow * dryAirKgPerM3(air.outsideC, barometer)
-    : -flow * dryAirKgPerM3(air.insideC, barometer);
-}
-
-/** Net inflow of the zone, fans counted; falls as the zone's pressure rises [kg/s]. */
-function netKgPerS(paths: LeakPaths, air: ZoneAir, zonePa: number): number {
-  let sum = air.fanKgPerS;
-  for (let k = 0; k < paths.coefficient.length; k++) sum += leakKgPerS(paths, k, air, zonePa);
-  return sum;
+  const outside = dryAirKgPerM3(air.outsideC, barometer);
+  const inside = dryAirKgPerM3(air.insideC, barometer);
+  const wind = dynamicPa(air, outside) * paths.windCoefficient[k];
+  const drop = wind - zonePa - (outside - inside) * gravityMPerS2 * paths.heightM[k];
+  return flowKgPerS(paths.coefficient[k], paths.exponent[k], drop, outside, inside);
 }
 
 /**
@@ -69,32 +72,50 @@ function netKgPerS(paths: LeakPaths, air: ZoneAir, zonePa: number): number {
  * Source: one-zone pressure network, e.g. ASHRAE Handbook of Fundamentals, chapter on infiltration.
  */
 export function zonePressurePa(paths: LeakPaths, air: ZoneAir): number {
-  if (!paths.coefficient.some((c) => c > 0)) {
+  const { coefficient, exponent, heightM, windCoefficient } = paths;
+  if (!coefficient.some((c) => c > 0)) {
     throw new RangeError('a zone without a leak has no pressure of its own');
   }
+  const barometer = air.barometerPa ?? seaLevelPa;
+  const outside = dryAirKgPerM3(air.outsideC, barometer);
+  const inside = dryAirKgPerM3(air.insideC, barometer);
+  const dynamic = dynamicPa(air, outside);
+  const weight = (outside - inside) * gravityMPerS2; // Pa per metre of height
+
+  function netKgPerS(zonePa: number): number {
+    let sum = air.fanKgPerS;
+    for (let k = 0; k < coefficient.length; k++) {
+      const drop = dynamic * windCoefficient[k] - zonePa - weight * heightM[k];
+      sum += flowKgPerS(coefficient[k], exponent[k], drop, outside, inside);
+    }
+    return sum;
+  }
+
   let low = Number.POSITIVE_INFINITY;
   let high = Number.NEGATIVE_INFINITY;
-  for (let k = 0; k < paths.coefficient.length; k++) {
-    const own = leakPa(paths, k, air, 0);
+  for (let k = 0; k < coefficient.length; k++) {
+    const own = dynamic * windCoefficient[k] - weight * heightM[k];
     low = Math.min(low, own);
     high = Math.max(high, own);
   }
   let width = Math.max(1, high - low);
-  while (netKgPerS(paths, air, low) < 0) {
+  let atLow = netKgPerS(low);
+  while (atLow < 0) {
     low -= width;
     width *= 2;
+    atLow = netKgPerS(low);
   }
-  while (netKgPerS(paths, air, high) > 0) {
+  let atHigh = netKgPerS(high);
+  while (atHigh > 0) {
     high += width;
     width *= 2;
+    atHigh = netKgPerS(high);
   }
-  let atLow = netKgPerS(paths, air, low);
-  let atHigh = netKgPerS(paths, air, high);
   let side = 0;
   for (let round = 0; round < 200 && high - low > 1e-9; round++) {
     const secant = atLow > atHigh ? low + ((high - low) * atLow) / (atLow - atHigh) : low;
     const mid = round % 3 === 2 ? (low + high) / 2 : secant;
-    const at = netKgPerS(paths, air, mid);
+    const at = netKgPerS(mid);
     if (at === 0) return mid;
     if (at > 0) {
       low = mid;
