@@ -3,6 +3,8 @@
 export * from './air/atmosphere.ts';
 export * from './air/moist-air.ts';
 export * from './calendar.ts';
+export * from './climate/design-conditions.ts';
+export * from './climate/summary.ts';
 export * from './fault.ts';
 export {
   plainWeatherForm,
@@ -12,6 +14,7 @@ export * from './read/number-table.ts';
 export * from './read/read-weather.ts';
 export * from './repair/gaps.ts';
 export * from './repair/radiation.ts';
+export * from './repair/sun-time.ts';
 export * from './sky/air-mass.ts';
 export * from './sky/clear-sky.ts';
 export * from './sky/diffuse-split.ts';

@@ -38,7 +38,7 @@ export function createDecoder(): Decoder {
     let start = 0;
     const run = (to: number) => {
       for (let k = start; k < to; k += 8192)
-        out.push(String.fromCharCode(...bytes.subarray(k, Math.min(to, k + 8192))));
+        out.push(lettersOf(bytes.subarray(k, Math.min(to, k + 8192))));
     };
     for (let i = 0; i < bytes.length; ) {
       if (bytes[i] < 0x80) {
@@ -69,6 +69,11 @@ export function createDecoder(): Decoder {
       return isOld ? 'Windows-1252' : 'UTF-8';
     },
   };
+}
+
+/** `apply` takes any list of numbers; spreading a typed array would go through its iterator. */
+function lettersOf(bytes: Uint8Array): string {
+  return String.fromCharCode.apply(null, bytes as unknown as number[]);
 }
 
 /** UTF-16 by its mark, or by every second byte being zero, as in numbers and Latin letters. */
