@@ -1,7 +1,7 @@
 // What one run of the year hands to the window. Arrays hold one value an hour; index h is the hour
 // h:00 to h+1:00 of local standard time, counted from 1 January.
 
-import type { Site, WeatherNote } from '../../weather/weather-year.ts';
+import type { Site, WeatherNote } from '../../weather/index.ts';
 
 /** A moment in the year: the index of its hour, or words that the engine already wrote. */
 export type When = number | string | null;

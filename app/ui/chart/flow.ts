@@ -34,11 +34,23 @@ export interface FlowPicture {
 const gap = 9;
 const labelPitch = 16;
 
-function side(parts: readonly FlowPart[], sum: number, perUnit: number, barY: number) {
-  const rounded = shareOut(
-    parts.map((part) => part.value),
-    sum,
+/** The stream that is also a finding keeps its own rounding; the others share what is left. */
+const findingKey = 'heating';
+
+function shownValues(parts: readonly FlowPart[], sum: number): number[] {
+  const finding = parts.find((part) => part.key === findingKey);
+  const kept = finding ? Math.round(finding.value) : 0;
+  const others = parts.filter((part) => part !== finding);
+  if (others.length === 0) return [sum];
+  const shared = shareOut(
+    others.map((part) => part.value),
+    sum - kept,
   );
+  return parts.map((part) => (part === finding ? kept : (shared[others.indexOf(part)] ?? 0)));
+}
+
+function side(parts: readonly FlowPart[], sum: number, perUnit: number, barY: number) {
+  const rounded = shownValues(parts, sum);
   let outerY = 0;
   let innerY = barY;
   let lastLabel = -Infinity;

@@ -62,7 +62,7 @@ export function weeksOf(hours: number, firstWeekday: number | null): Week[] {
 
 export function weekAt(weeks: readonly Week[], hour: number): number {
   const at = weeks.findIndex((week) => hour >= week.firstHour && hour < week.endHour);
-  return at < 0 ? 0 : at;
+  return Math.max(0, at);
 }
 
 /**
@@ -113,3 +113,15 @@ const flowsOfNothing: Flows = {
   ...(Object.fromEntries(streams.map((key) => [key, 0])) as Record<Stream, number>),
   storage: 0,
 };
+
+/** Heat of the year in kWh, over one room or several together. */
+export function flowsOfYear(rooms: readonly RoomSeries[]): Flows {
+  const sum: Record<Stream | 'storage', number> = { ...flowsOfNothing };
+  for (const key of [...streams, 'storage'] as const) {
+    for (const room of rooms) {
+      const watts = room.flowsW[key];
+      for (let h = 0; h < watts.length; h++) sum[key] += watts[h] / 1000;
+    }
+  }
+  return rooms.length > 1 ? { ...sum, rooms: 0 } : sum;
+}

@@ -1,0 +1,9 @@
+export {
+  type Command,
+  isPressed,
+  type KeyPress,
+  type MenuName,
+  mayActWhileTyping,
+} from './command.ts';
+export { commandById, commands } from './commands.ts';
+export { allHits, findHits, type Hit } from './search.ts';

@@ -1,0 +1,2 @@
+export { browserDesk, isProject, readDropped, sortFiles } from './browser-desk.ts';
+export type { Desk, OpenedFile, OpenedProject, RecentProject } from './desk.ts';

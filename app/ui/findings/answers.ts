@@ -1,0 +1,116 @@
+// The findings in their fixed order, as figures with a note; one list for the house, one for a room.
+
+import { type Calendar, figure, type Quantity, quantity, whenText } from '../format/index.ts';
+import type { RoomTotals, Totals } from '../simulation.ts';
+
+export interface Answer {
+  readonly key: string;
+  readonly name: string;
+  /** At the right of the name, in small: the same per area, or where. */
+  readonly aside: string;
+  readonly quantity: Quantity;
+  readonly note: string;
+  readonly isMain: boolean;
+}
+
+/** How many percent of `whole`, as words; empty where there is no whole. */
+const shareOf = (part: number, whole: number) =>
+  whole > 0 ? `${figure((100 * part) / whole)} % of ${figure(whole)} occupied` : 'nobody is in';
+
+const nameWhere = (
+  rooms: readonly RoomTotals[],
+  of: (room: RoomTotals) => number,
+  value: number,
+) => {
+  const room = rooms.find((one) => of(one) === value);
+  return room ? `, ${room.name.charAt(0).toLowerCase()}${room.name.slice(1)}` : '';
+};
+
+/** `rooms` are the rooms of a house, to say where an extreme lies; empty for a single room. */
+export function findAnswers(
+  totals: Totals,
+  rooms: readonly RoomTotals[],
+  calendar: Calendar,
+): Answer[] {
+  const power = rooms.length > 0 ? quantity.housePowerW : quantity.roomPowerW;
+  const perArea = (kWh: number) => `${figure(kWh / totals.floorAreaM2)} kWh/m²`;
+  const range = totals.operativeTemperatureC;
+  const highestIn = nameWhere(rooms, (room) => room.operativeTemperatureC.max, range.max);
+  const lowestIn = nameWhere(rooms, (room) => room.operativeTemperatureC.min, range.min);
+  const isOccupied = totals.occupiedHours > 0;
+  const when = (at: Totals['peakHeatingAt']) => whenText(calendar, at);
+  const answers: Answer[] = [
+    {
+      key: 'heating',
+      name: 'Heating in a year',
+      aside: perArea(totals.heatingKWh),
+      quantity: quantity.energyKWh(totals.heatingKWh),
+      note: '',
+      isMain: true,
+    },
+    {
+      key: 'peak',
+      name: rooms.length > 0 ? 'Peak heating, whole house' : 'Peak heating',
+      aside:
+        totals.peakHeatingW > 0 ? `${figure(totals.peakHeatingW / totals.floorAreaM2)} W/m²` : '',
+      quantity: power(totals.peakHeatingW),
+      note: totals.peakHeatingW > 0 ? when(totals.peakHeatingAt) : 'no heat was called for',
+      isMain: true,
+    },
+    {
+      key: 'below',
+      name: 'Hours below the band',
+      aside: shareOf(totals.hoursBelowBand, totals.occupiedHours),
+      quantity: quantity.hours(isOccupied ? totals.hoursBelowBand : NaN),
+      note: isOccupied ? `${figure(totals.degreeHoursBelow)} K·h in all` : '',
+      isMain: true,
+    },
+    {
+      key: 'above',
+      name: 'Hours above the band',
+      aside: shareOf(totals.hoursAboveBand, totals.occupiedHours),
+      quantity: quantity.hours(isOccupied ? totals.hoursAboveBand : NaN),
+      note: isOccupied ? `${figure(totals.degreeHoursAbove)} K·h in all` : '',
+      isMain: true,
+    },
+    {
+      key: 'highest',
+      name: `Highest${highestIn}`,
+      aside: when(range.maxAt),
+      quantity: quantity.temperatureC(range.max),
+      note: '',
+      isMain: false,
+    },
+    {
+      key: 'lowest',
+      name: `Lowest${lowestIn}`,
+      aside: when(range.minAt),
+      quantity: quantity.temperatureC(range.min),
+      note: '',
+      isMain: false,
+    },
+  ];
+  if (totals.coolingKWh > 0) {
+    answers.splice(
+      2,
+      0,
+      {
+        key: 'cooling',
+        name: 'Cooling in a year',
+        aside: perArea(totals.coolingKWh),
+        quantity: quantity.energyKWh(totals.coolingKWh),
+        note: '',
+        isMain: false,
+      },
+      {
+        key: 'peak-cooling',
+        name: 'Peak cooling',
+        aside: when(totals.peakCoolingAt),
+        quantity: power(totals.peakCoolingW),
+        note: '',
+        isMain: false,
+      },
+    );
+  }
+  return answers;
+}

@@ -1,0 +1,162 @@
+// The findings at the right: always the same order, of the house or of the room that is shown.
+
+import { type Answer, type Caution, findAnswers, findCautions } from '../findings/index.ts';
+import { plain, quantity } from '../format/index.ts';
+import type { RoomTotals, Simulation } from '../simulation.ts';
+import { roomResult, useApp, useAppState, useCalendar } from '../state/index.ts';
+import { useAfter } from './run-progress.tsx';
+
+export function FindingsColumn({ simulation }: { simulation: Simulation }) {
+  const app = useApp();
+  const screen = useAppState((state) => state.screen);
+  const roomId = useAppState((state) => state.roomId);
+  const isStale = useAppState((state) => state.isStale);
+  const isDrawerOpen = useAppState((state) => state.isDrawerOpen);
+  const run = useAppState((state) => state.run);
+  const isWaiting = useAfter(run.kind === 'running', 150);
+  const calendar = useCalendar(simulation);
+  const room = roomResult(simulation, roomId);
+  const isRoom = screen === 'room' && room !== null;
+  const { building, rooms } = simulation.findings;
+  const answers = isRoom
+    ? findAnswers(room.totals, [], calendar)
+    : findAnswers(building, rooms, calendar);
+  const concerned = isRoom ? { ...simulation, rooms: [room.series] } : simulation;
+  const cautions = findCautions(concerned, calendar);
+
+  return (
+    <aside
+      className={`findings${isDrawerOpen ? ' is-open' : ''}`}
+      aria-label="Findings"
+      tabIndex={-1}
+      data-region="findings"
+      aria-busy={run.kind === 'running'}
+    >
+      {isWaiting && <div className="hairline" aria-hidden="true" />}
+      <div className="findings-head">
+        <h2>{isRoom ? `Findings, ${room.totals.name}` : 'Findings'}</h2>
+        <button
+          type="button"
+          className="text-button drawer-only"
+          onClick={() => app.set({ isDrawerOpen: false })}
+        >
+          Close
+        </button>
+      </div>
+      <p className="quiet">
+        {isStale ? 'From before the last change' : `${simulation.findings.weather.place}, one year`}
+      </p>
+      <div className={isStale ? 'is-stale' : ''}>
+        {answers.map((answer) => (
+          <AnswerRow key={answer.key} answer={answer} />
+        ))}
+      </div>
+      <Cautions cautions={cautions} onOpen={isRoom ? null : (id) => app.go('room', id)} />
+      {!isRoom && room && <SelectedRoom room={room.totals} />}
+    </aside>
+  );
+}
+
+function AnswerRow({ answer }: { answer: Answer }) {
+  return (
+    <div className={answer.isMain ? 'answer' : 'answer is-small'}>
+      <div className="answer-name">
+        <span>{answer.name}</span>
+        <span className="note">{answer.aside}</span>
+      </div>
+      <div className="answer-value">
+        <b className="figure">{answer.quantity.figure}</b>
+        <span>{answer.quantity.unit}</span>
+        {answer.note && <span className="note answer-note">{answer.note}</span>}
+      </div>
+    </div>
+  );
+}
+
+interface CautionsProps {
+  readonly cautions: readonly Caution[];
+  /** `null` on the room's own sheet. */
+  readonly onOpen: ((roomId: string) => void) | null;
+}
+
+function Cautions({ cautions, onOpen }: CautionsProps) {
+  return cautions.map((caution) => (
+    <p key={caution.kind} className="caution">
+      <svg width="14" height="13" aria-hidden="true">
+        <path d="M7 1.5L13 12H1Z" fill="none" stroke="currentColor" strokeWidth="1.5" />
+      </svg>
+      <b>{caution.title}</b> {caution.text}{' '}
+      {onOpen && (
+        <button type="button" className="link" onClick={() => onOpen(caution.roomId)}>
+          Open room
+        </button>
+      )}
+    </p>
+  ));
+}
+
+function SelectedRoom({ room }: { room: RoomTotals }) {
+  const app = useApp();
+  const isOccupied = room.occupiedHours > 0;
+  const rows = [
+    ['Heating', plain(quantity.energyKWh(room.heatingKWh))],
+    ['Peak heating', plain(quantity.roomPowerW(room.peakHeatingW))],
+    [
+      'Hours below the band',
+      isOccupied ? plain(quantity.hours(room.hoursBelowBand)) : 'nobody is in',
+    ],
+    [
+      'Hours above the band',
+      isOccupied ? plain(quantity.hours(room.hoursAboveBand)) : 'nobody is in',
+    ],
+  ];
+  return (
+    <section className="selected" aria-label={`${room.name}, selected`}>
+      <div className="findings-head">
+        <h2>{room.name}, selected</h2>
+        <button type="button" className="link" onClick={() => app.go('room', room.id)}>
+          Open room
+        </button>
+      </div>
+      <dl>
+        {rows.map(([name, value]) => (
+          <div key={name}>
+            <dt>{name}</dt>
+            <dd>{value}</dd>
+          </div>
+        ))}
+      </dl>
+    </section>
+  );
+}
+
+/** The four main answers under the title, where the findings are a drawer. */
+export function AnswerStrip({ simulation }: { simulation: Simulation }) {
+  const app = useApp();
+  const calendar = useCalendar(simulation);
+  const screen = useAppState((state) => state.screen);
+  const roomId = useAppState((state) => state.roomId);
+  const isStale = useAppState((state) => state.isStale);
+  const room = screen === 'room' ? roomResult(simulation, roomId) : null;
+  const { building, rooms } = simulation.findings;
+  const answers = room
+    ? findAnswers(room.totals, [], calendar)
+    : findAnswers(building, rooms, calendar);
+  return (
+    <section className={isStale ? 'strip is-stale' : 'strip'} aria-label="Main findings">
+      {answers
+        .filter((answer) => answer.isMain)
+        .map((answer) => (
+          <div key={answer.key}>
+            <span>{answer.name}</span>
+            <b>
+              {answer.quantity.figure} <i>{answer.quantity.unit}</i>
+            </b>
+          </div>
+        ))}
+      <button type="button" className="button" onClick={() => app.set({ isDrawerOpen: true })}>
+        Show findings
+      </button>
+    </section>
+  );
+}

@@ -1,0 +1,34 @@
+// A native dialog that opens with its component and tells when it was closed.
+
+import { type ReactNode, useEffect, useRef } from 'react';
+
+export interface SheetDialogProps {
+  readonly label: string;
+  readonly className?: string;
+  readonly onClose: () => void;
+  readonly children: ReactNode;
+}
+
+export function SheetDialog({ label, className = '', onClose, children }: SheetDialogProps) {
+  const ref = useRef<HTMLDialogElement>(null);
+  useEffect(() => {
+    const dialog = ref.current;
+    const before = document.activeElement;
+    if (dialog && !dialog.open) dialog.showModal();
+    return () => {
+      if (before instanceof HTMLElement && before.isConnected) before.focus();
+    };
+  }, []);
+  return (
+    // biome-ignore lint/a11y/useKeyWithClickEvents: Escape closes a dialog by itself
+    <dialog
+      ref={ref}
+      aria-label={label}
+      className={className}
+      onClose={onClose}
+      onClick={(event) => event.target === ref.current && onClose()}
+    >
+      <div className="dialog-body">{children}</div>
+    </dialog>
+  );
+}

@@ -1,0 +1,117 @@
+// How long the heating (and cooling) runs at how much: hours of the year sorted by size.
+
+import { useMemo } from 'react';
+import { ChartBox, type Point } from '../chart/chart-box.tsx';
+import { Drawing } from '../chart/drawing.tsx';
+import { evenUnits } from '../chart/measured-edge.ts';
+import { gridLines, hourMark, measuredEdge, type Painter, words } from '../chart/painter.ts';
+import { roundTicks, tickDecimals } from '../chart/ticks.ts';
+import { type Calendar, figure, plain, quantity, whenText } from '../format/index.ts';
+import { byDuration } from '../series/year.ts';
+import type { RoomSeries, RoomTotals } from '../simulation.ts';
+import type { HourMark } from '../state/index.ts';
+
+export interface LoadDurationProps {
+  readonly series: RoomSeries;
+  readonly totals: RoomTotals;
+  readonly calendar: Calendar;
+  readonly mark: HourMark | null;
+}
+
+const shownHours = [1, 10, 50, 100, 250, 500, 1000, 2000, 4000, 8000];
+
+/** One point an hour is more than the screen has pixels: keep every fourth, and the first hundred. */
+function pointsOf(curve: Float64Array): Point[] {
+  const points: Point[] = [];
+  curve.forEach((w, i) => {
+    if (w > 0 && (i < 100 || i % 4 === 0)) points.push({ x: i, y: w / 1000 });
+  });
+  return points;
+}
+
+export function LoadDuration({ series, totals, calendar, mark }: LoadDurationProps) {
+  const heating = useMemo(() => byDuration(series.heatingW), [series]);
+  const cooling = useMemo(() => byDuration(series.coolingW), [series]);
+  const heatingPoints = useMemo(() => pointsOf(heating), [heating]);
+  const coolingPoints = useMemo(() => pointsOf(cooling), [cooling]);
+  const hoursOn = (curve: Float64Array) => curve.filter((w) => w > 0).length;
+  const most = Math.max(heating[0] ?? 0, cooling[0] ?? 0) / 1000;
+  const ticks = roundTicks(0, most || 1, 4);
+  const decimals = tickDecimals(ticks);
+  const units = evenUnits(0, calendar.hours, 1000);
+
+  const nameCurve =
+    (name: string, curve: Float64Array, color: 'heat-in' | 'heat-out'): Painter =>
+    (view) => {
+      const on = hoursOn(curve);
+      if (on === 0) return;
+      const at = Math.round(on * 0.28);
+      const text = `${name}, on for ${figure(on)} h`;
+      words(view, text, view.x(at) + 10, view.y(curve[at] / 1000) - 6, view.ink[color], {
+        weight: 600,
+        halo: view.ink.sheet,
+      });
+    };
+  /** The marked hour at its place in the order. */
+  const heatNow = mark ? series.heatingW[mark.hour] : 0;
+  const place = heatNow > 0 ? heating.findIndex((w) => w <= heatNow) : -1;
+  const marked =
+    mark && place >= 0
+      ? [hourMark(place, plain(quantity.roomPowerW(heatNow)), mark.isPinned, heatNow / 1000)]
+      : [];
+  const hourWords: Painter = (view) => {
+    units.forEach((unit, i) => {
+      if (i % 2) return;
+      const text = i === 0 ? '0' : `${figure(unit.from)}${i === 8 ? ' h' : ''}`;
+      words(view, text, view.x(unit.from), view.bottom + 20, view.ink['ink-2'], {
+        align: 'center',
+      });
+    });
+  };
+  const peaks = [
+    totals.peakHeatingW > 0
+      ? `Peak heating ${plain(quantity.roomPowerW(totals.peakHeatingW))}, ${whenText(calendar, totals.peakHeatingAt)}`
+      : 'No heating called for',
+    totals.peakCoolingW > 0
+      ? `peak cooling ${plain(quantity.roomPowerW(totals.peakCoolingW))}, ${whenText(calendar, totals.peakCoolingAt)}`
+      : '',
+  ]
+    .filter(Boolean)
+    .join('; ');
+
+  return (
+    <Drawing
+      title="Load duration"
+      note={peaks}
+      equivalent={`${peaks}. Heating is on for ${figure(hoursOn(heating))} hours, cooling for ${figure(hoursOn(cooling))}.`}
+      table={{
+        columns: ['Hours of the year', 'Heating at least, kW', 'Cooling at least, kW'],
+        rows: () =>
+          shownHours.map((h) => [
+            figure(h),
+            figure((heating[h - 1] ?? NaN) / 1000, 2),
+            figure((cooling[h - 1] ?? NaN) / 1000, 2),
+          ]),
+      }}
+    >
+      <ChartBox
+        height={176}
+        top={20}
+        x={{ min: 0, max: calendar.hours }}
+        y={{ min: 0, max: ticks.at(-1) ?? 1 }}
+        layers={[
+          { kind: 'line', points: coolingPoints, color: (ink) => ink['heat-out'], width: 2.4 },
+          { kind: 'line', points: heatingPoints, color: (ink) => ink['heat-in'], width: 2.4 },
+        ]}
+        under={[gridLines(ticks, (tick) => figure(tick, decimals), 'kW')]}
+        over={[
+          nameCurve('Heating', heating, 'heat-in'),
+          nameCurve('Cooling', cooling, 'heat-out'),
+          measuredEdge(units),
+          ...marked,
+          hourWords,
+        ]}
+      />
+    </Drawing>
+  );
+}

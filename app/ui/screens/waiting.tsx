@@ -1,0 +1,56 @@
+// A sheet before its first result: the axes are drawn, with one sentence on what will fill them.
+
+import { ChartBox } from '../chart/chart-box.tsx';
+import { Drawing } from '../chart/drawing.tsx';
+import { monthUnits } from '../chart/measured-edge.ts';
+import { gridLines, measuredEdge } from '../chart/painter.ts';
+import { figure, makeCalendar } from '../format/index.ts';
+import { type Screen, useAppState } from '../state/index.ts';
+
+const titles: Readonly<Record<Screen, string>> = {
+  welcome: 'Welcome',
+  site: 'Site and weather',
+  house: 'Whole house',
+  room: 'Room by room',
+};
+
+export function Waiting({ screen, onWeather }: { screen: Screen; onWeather: () => void }) {
+  const run = useAppState((state) => state.run);
+  const project = useAppState((state) => state.project);
+  const weather = useAppState((state) => state.weather);
+  const sentence =
+    run.kind === 'running'
+      ? 'The year is being computed; the drawing fills when it is done.'
+      : project === null
+        ? 'No project yet, so no temperatures.'
+        : weather === null
+          ? 'No weather yet, so no temperatures.'
+          : 'No result yet. Run the year to fill this.';
+  const calendar = makeCalendar(8760);
+  return (
+    <>
+      <h1>{titles[screen]}</h1>
+      {weather && <p className="quiet">{weather.file} is held ready.</p>}
+      <Drawing title="Month by month" equivalent={sentence}>
+        <div className="empty">
+          <ChartBox
+            height={180}
+            layers={[]}
+            x={{ min: 0, max: calendar.hours }}
+            y={{ min: 0, max: 20 }}
+            under={[gridLines([0, 10, 20], (tick) => figure(tick), '°C')]}
+            over={[measuredEdge(monthUnits(calendar.months))]}
+          />
+          <p>
+            {sentence}
+            {weather === null && project !== null && run.kind !== 'running' && (
+              <button type="button" className="link" onClick={onWeather}>
+                Read a weather table
+              </button>
+            )}
+          </p>
+        </div>
+      </Drawing>
+    </>
+  );
+}
