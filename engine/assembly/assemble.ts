@@ -31,6 +31,7 @@ import { NetworkBuilder, type Provenance } from './network-builder.ts';
 import { type Outdoors, outdoors } from './outdoors.ts';
 import type { Face, RoomMeters, RoomParts } from './room-parts.ts';
 import { scheduledValues } from './schedule-values.ts';
+import { shadedSurface } from './shading.ts';
 import { type StepClock, stepClock } from './step-clock.ts';
 import { addRoomSun } from './sun-inside.ts';
 import { addGains, addPlant } from './use.ts';
@@ -295,7 +296,7 @@ function addOuterSide(task: RoomTask, surface: Surface, outerNode: number): void
       about: { name, room: room.id, surface: surface.id },
     };
     addOuterExchange(building, face, outside, builder);
-    addOuterSun(construction, face, outside, builder);
+    addOuterSun(construction, face, shadedSurface(room, surface), outside, builder);
   }
   if (boundary.kind === 'ground') {
     const series = builder.series(

@@ -12,6 +12,7 @@ import {
   type Layer,
   meshConstruction,
   roughnessFactor,
+  type ShadedWindow,
   thirdPowerFilm,
 } from '../physics/index.ts';
 import type { NetworkBuilder, Provenance } from './network-builder.ts';
@@ -202,15 +203,17 @@ const outsideFilmMethod = {
 export function addOuterSun(
   construction: Construction,
   face: OuterFace,
+  shaded: ShadedWindow | null,
   outside: Outdoors,
   builder: NetworkBuilder,
 ): void {
   if (construction.outsideSolarAbsorptance === 0) return;
+  const name = `sun absorbed outside, ${face.about.name}`;
   builder.source(
     face.node,
     construction.outsideSolarAbsorptance * face.areaM2,
-    outside.sunSeries(face.tiltDeg, face.azimuthDeg),
-    `sun absorbed outside, ${face.about.name}`,
+    outside.totalSunSeries(face, shaded, name),
+    name,
   );
 }
 

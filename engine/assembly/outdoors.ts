@@ -9,12 +9,21 @@ import type { Building } from '../building/index.ts';
 import {
   forcedFilmWPerM2K,
   isWindward,
+  orderedHorizon,
   roughPlateFilmWPerM2K,
+  type ShadedWindow,
   standardOutsideFilmWPerM2K,
   terrains,
   windAtHeightMPerS,
 } from '../physics/index.ts';
 import type { NetworkBuilder } from './network-builder.ts';
+import { type FaceSun, faceSun } from './shading.ts';
+
+/** Where a face looks. */
+interface Facing {
+  readonly tiltDeg: number;
+  readonly azimuthDeg: number;
+}
 
 /** What faces need to know of the outside; each series is computed once and shared. */
 export interface Outdoors {
@@ -26,9 +35,10 @@ export interface Outdoors {
   /** Wind-driven film of a face, as a series of W/m²K; the whole film where `hasNaturalTerm` is false. */
   filmSeries(face: { heightM: number; tiltDeg: number; azimuthDeg: number }): number;
   readonly hasNaturalTerm: boolean;
-  sunOn(tiltDeg: number, azimuthDeg: number): PlaneIrradiance;
-  /** All sunlight on a plane, as a series of W/m². */
-  sunSeries(tiltDeg: number, azimuthDeg: number): number;
+  /** Sun on a face, with what shades it; skyline included. */
+  sunOn(face: Facing, shaded: ShadedWindow | null): FaceSun;
+  /** All sunlight on a face, as a series of W/m²; faces alike share one. */
+  totalSunSeries(face: Facing, shaded: ShadedWindow | null, name: string): number;
 }
 
 export function outdoors(
@@ -56,6 +66,7 @@ export function outdoors(
   const films = new Map<string, number>();
   const planes = new Map<string, PlaneIrradiance>();
   const sunlight = new Map<string, number>();
+  const horizon = orderedHorizon(building.site.horizon);
   const terrain = terrains[building.site.terrain];
 
   function film(heightM: number, tiltDeg: number, azimuthDeg: number): Float64Array {
@@ -74,7 +85,7 @@ export function outdoors(
     return values;
   }
 
-  function sunOn(tiltDeg: number, azimuthDeg: number): PlaneIrradiance {
+  function planeOf({ tiltDeg, azimuthDeg }: Facing): PlaneIrradiance {
     const key = `${tiltDeg} ${azimuthDeg}`;
     let plane = planes.get(key);
     if (!plane) {
@@ -88,6 +99,10 @@ export function outdoors(
       planes.set(key, plane);
     }
     return plane;
+  }
+
+  function sunOn(face: Facing, shaded: ShadedWindow | null): FaceSun {
+    return faceSun(planeOf(face), face, shaded, horizon, steps.sun);
   }
 
   return {
@@ -109,19 +124,13 @@ export function outdoors(
       return series;
     },
     sunOn,
-    sunSeries(tiltDeg, azimuthDeg) {
-      const key = `${tiltDeg} ${azimuthDeg}`;
+    totalSunSeries(face, shaded, name) {
+      const key = `${face.tiltDeg} ${face.azimuthDeg} ${JSON.stringify(shaded)}`;
       const known = sunlight.get(key);
       if (known !== undefined) return known;
-      const sun = sunOn(tiltDeg, azimuthDeg);
-      const total = sun.beamWPerM2.map(
-        (beam, k) => beam + sun.isotropicWPerM2[k] + sun.horizonWPerM2[k] + sun.groundWPerM2[k],
-      );
-      const series = builder.series(
-        `sun on tilt ${tiltDeg}°, azimuth ${azimuthDeg}°`,
-        'step',
-        total,
-      );
+      const { beamWPerM2, diffuseWPerM2 } = sunOn(face, shaded);
+      const total = beamWPerM2.map((beam, k) => beam + diffuseWPerM2[k]);
+      const series = builder.series(name, 'step', total);
       sunlight.set(key, series);
       return series;
     },

@@ -34,12 +34,12 @@ export function addRoomSun(task: SunTask): void {
   if (windows.length === 0) return;
   const firstW = faces.map(() => new Float64Array(task.outside.count));
   for (const window of windows) {
-    const light = transmitted(window, task);
+    const light = transmitted(window);
     addBeam(task.building, room, faces, window, light.beamW, task.outside.sun, firstW);
     viewShares(task.views, faces.indexOf(window.face)).forEach((share, f) => {
       addScaled(share, light.diffuseW, firstW[f]);
     });
-    addPaneSun(window, task);
+    addPaneSun(window, builder);
   }
   const totalW = followed(faces, task.views, firstW);
   faces.forEach((face, f) => {
@@ -99,32 +99,29 @@ function viewShares(views: FaceViews, windowFace: number): Float64Array {
   );
 }
 
-function transmitted(window: WindowParts, task: SunTask): Transmitted {
-  const { areaM2, optics } = window;
-  const sun = task.outside.sunOn(window.tiltDeg, window.azimuthDeg);
+function transmitted(window: WindowParts): Transmitted {
+  const { areaM2, optics, sun } = window;
   const beamW = sun.beamWPerM2.map((beam, k) =>
     beam > 0 ? areaM2 * beam * beamTransmittance(optics, sun.cosIncidence[k]) : 0,
   );
-  const diffuseW = sun.isotropicWPerM2.map(
-    (dome, k) =>
-      areaM2 * optics.diffuse.transmittance * (dome + sun.horizonWPerM2[k] + sun.groundWPerM2[k]),
+  const diffuseW = sun.diffuseWPerM2.map(
+    (diffuse) => areaM2 * optics.diffuse.transmittance * diffuse,
   );
   return { beamW, diffuseW };
 }
 
 /** What the panes keep of the light from outside, half at each face. */
-function addPaneSun(window: WindowParts, task: SunTask): void {
-  const { areaM2, optics } = window;
-  const sun = task.outside.sunOn(window.tiltDeg, window.azimuthDeg);
+function addPaneSun(window: WindowParts, builder: NetworkBuilder): void {
+  const { areaM2, optics, sun } = window;
   window.paneNodes.forEach((nodes, p) => {
     const name = `${window.face.name} sun in pane ${p + 1}`;
-    const diffuse = optics.diffuse.absorptance[p];
-    const values = sun.isotropicWPerM2.map((dome, k) => {
+    const ofDiffuse = optics.diffuse.absorptance[p];
+    const values = sun.diffuseWPerM2.map((diffuse, k) => {
       const beam = sun.beamWPerM2[k];
       const direct = beam > 0 ? beam * beamAbsorptance(optics, p, sun.cosIncidence[k]) : 0;
-      return areaM2 * (direct + diffuse * (dome + sun.horizonWPerM2[k] + sun.groundWPerM2[k]));
+      return areaM2 * (direct + ofDiffuse * diffuse);
     });
-    const series = task.builder.series(name, 'step', values);
-    for (const node of nodes) task.builder.source(node, 0.5, series, name);
+    const series = builder.series(name, 'step', values);
+    for (const node of nodes) builder.source(node, 0.5, series, name);
   });
 }

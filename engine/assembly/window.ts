@@ -14,6 +14,7 @@ import { gapLaw } from './gap-law.ts';
 import type { NetworkBuilder, Provenance } from './network-builder.ts';
 import type { Outdoors } from './outdoors.ts';
 import type { Face } from './room-parts.ts';
+import { type FaceSun, shadedOpening } from './shading.ts';
 import { addSimpleWindow } from './simple-window.ts';
 
 /** A window in the network, and how it deals with the sun. */
@@ -21,8 +22,7 @@ export interface WindowParts {
   readonly face: Face;
   readonly opening: Opening;
   readonly areaM2: number;
-  readonly tiltDeg: number;
-  readonly azimuthDeg: number;
+  readonly sun: FaceSun;
   /** Outer and inner face node of each pane, outermost first; the same node twice where a pane is one node. */
   readonly paneNodes: readonly (readonly [number, number])[];
   readonly optics: GlazingAngles;
@@ -105,8 +105,7 @@ export function addWindow(
     face,
     opening,
     areaM2,
-    tiltDeg,
-    azimuthDeg,
+    sun: outside.sunOn(surface, shadedOpening(room, surface, opening)),
     paneNodes: glass.paneNodes,
     optics: glass.optics,
   };

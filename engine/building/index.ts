@@ -20,6 +20,7 @@ export type {
   Rectangle,
   Room,
   Scheduled,
+  Shading,
   Surface,
 } from './schema-room.ts';
 export type { Calendar, Profile, Schedule } from './schema-use.ts';

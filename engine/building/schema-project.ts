@@ -20,6 +20,10 @@ const siteSchema = z.strictObject({
   /** Land around the building, for the wind at the height of a face. */
   terrain: z.enum(['water', 'open', 'suburban', 'city']).default('open'),
   groundReflectance: share.default(0.2),
+  /** Skyline round the building, straight between its points; left out: a free view. */
+  horizon: z
+    .array(z.strictObject({ azimuthDeg: between(0, 360), altitudeDeg: between(0, 90) }))
+    .default([]),
 });
 
 const weatherSourceSchema = z.strictObject({

@@ -10,6 +10,32 @@ const rectangleSchema = z.strictObject({
   heightM: positive(200),
 });
 
+const extent = z.number().gte(0).lte(1000);
+/** A plate that stands off the wall beside a window; left and right as seen from inside. */
+const finSchema = z.strictObject({
+  depthM: positive(100),
+  gapM: extent.default(0),
+  aboveM: extent.default(0),
+  belowM: extent.default(0),
+});
+/** What stands before a window or a wall. */
+const shadingSchema = z.strictObject({
+  overhang: z
+    .strictObject({
+      depthM: positive(100),
+      /** From the head up to the plate. */
+      gapM: extent.default(0),
+      /** How far it goes on beyond the sides. */
+      leftM: extent.default(0),
+      rightM: extent.default(0),
+    })
+    .optional(),
+  leftFin: finSchema.optional(),
+  rightFin: finSchema.optional(),
+  /** How far the glass stands behind the outer face. */
+  revealM: extent.default(0),
+});
+
 const openingSchema = z.strictObject({
   id,
   name: text.optional(),
@@ -17,6 +43,8 @@ const openingSchema = z.strictObject({
   areaM2: positive(1000),
   /** Place on the face; its size must give `areaM2`. Used for view factors, shading and the sun's patch. */
   rectangle: rectangleSchema.optional(),
+  /** Left out: what shades the wall shades the opening too, where both have their place on a box. */
+  shading: shadingSchema.optional(),
 });
 
 const boundarySchema = z.discriminatedUnion('kind', [
@@ -47,6 +75,8 @@ const surfaceSchema = z.strictObject({
   /** Height of its middle above the ground outside, for the wind; left out: 1.35 m for walls, room height for roofs. */
   heightAboveGroundM: between(0, 500).optional(),
   boundary: boundarySchema,
+  /** What shades the whole surface, measured from its edges. */
+  shading: shadingSchema.optional(),
   openings: z.array(openingSchema).default([]),
 });
 
@@ -145,6 +175,7 @@ export type Room = z.infer<typeof roomSchema>;
 export type Surface = Room['surfaces'][number];
 export type Opening = Surface['openings'][number];
 export type Boundary = Surface['boundary'];
+export type Shading = z.infer<typeof shadingSchema>;
 export type Rectangle = z.infer<typeof rectangleSchema>;
 export type Heating = NonNullable<Room['heating']>;
 export type Scheduled = Heating['setPointC'];
