@@ -59,5 +59,5 @@ export function takeOut(polygon: Polygon, hole: Polygon): Polygon[] {
     if (outside.length >= 6) pieces.push(outside);
     rest = cut(rest, ax, ay, bx, by, turn);
   }
-  return pieces;
+  return rest.length < 6 ? [polygon] : pieces; // nothing of it lay in the hole: leave it whole
 }

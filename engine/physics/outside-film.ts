@@ -25,12 +25,18 @@ export const roughnessFactor: Readonly<Record<Roughness, number>> = {
   'very smooth': 1,
 };
 
+const leewardCosine = Math.cos((100 * Math.PI) / 180) - 1e-9; // 100° itself is windward
+
 /**
- * Whether the wind blows at a face: within 100° of its normal; a roof always counts as windward.
+ * Whether the wind blows at a face: angle between the wind and the face's normal up to 100°.
+ *
+ *   cos θ = sin β·cos(wind − azimuth)
+ *
+ * So a roof up to 10° steep is windward in every wind, and a wall within 100° of its azimuth.
  *
  * @param windFromDeg direction the wind comes from, clockwise from north [°]
  * @param faceAzimuthDeg direction the face looks, clockwise from north [°]
- * @param faceTiltDeg 0 flat roof, 90 wall; faces within 10° of horizontal are roofs here [°]
+ * @param faceTiltDeg 0 flat roof, 90 wall [°]
  *
  * Source: G. N. Walton, NBSIR 83-2655, 1983.
  */
@@ -39,9 +45,8 @@ export function isWindward(
   faceAzimuthDeg: number,
   faceTiltDeg: number,
 ): boolean {
-  if (Math.abs(Math.cos((faceTiltDeg * Math.PI) / 180)) > 0.98) return true;
-  const turn = (((windFromDeg - faceAzimuthDeg) % 360) + 360) % 360;
-  return Math.min(turn, 360 - turn) <= 100;
+  const turned = ((windFromDeg - faceAzimuthDeg) * Math.PI) / 180;
+  return Math.sin((faceTiltDeg * Math.PI) / 180) * Math.cos(turned) >= leewardCosine;
 }
 
 /**

@@ -31,6 +31,8 @@ export interface ThermalVote {
 
 export const cloM2KPerW = 0.155;
 
+const fourth = (x: number): number => x * x * (x * x);
+
 /** Saturation pressure as the comfort standard has it [Pa]. Source: ISO 7730:2005, Annex D. */
 function comfortSaturationPa(airC: number): number {
   return 1000 * Math.exp(16.6536 - 4030.183 / (airC + 235));
@@ -42,7 +44,7 @@ function comfortSaturationPa(airC: number): number {
  *   PMV = (0.303·e^(−0.036·M) + 0.028)·L
  *
  * with L the body's heat production less its losses at comfort; the clothing's temperature balances
- * what passes through it with what it gives off, and is found by bisection to 1e-10 K.
+ * what passes through it with what it gives off, and is found to 1e-9 K.
  * Made for PMV from −2 to 2, air 10 to 30 °C, radiant 10 to 40 °C, up to 1 m/s, 0.8 to 4 met, 0 to 2 clo.
  *
  * Source: ISO 7730:2005, 4.1, equations (1) to (5).
@@ -53,9 +55,10 @@ export function predictedMeanVote(e: ThermalEnvironment): ThermalVote {
   const vapourPa = e.relativeHumidity * comfortSaturationPa(airC);
   const area = icl <= 0.078 ? 1 + 1.29 * icl : 1.05 + 0.645 * icl;
   const forced = 12.1 * Math.sqrt(e.airMPerS);
-  const convective = (clothC: number) => Math.max(2.38 * Math.abs(clothC - airC) ** 0.25, forced);
+  const convective = (clothC: number) =>
+    Math.max(2.38 * Math.sqrt(Math.sqrt(Math.abs(clothC - airC))), forced);
   const dry = (clothC: number) =>
-    3.96e-8 * area * ((clothC + 273) ** 4 - (meanRadiantC + 273) ** 4) +
+    3.96e-8 * area * (fourth(clothC + 273) - fourth(meanRadiantC + 273)) +
     area * convective(clothC) * (clothC - airC);
   const clothingC = rootOf(
     (t) => t - (35.7 - 0.028 * inner - icl * dry(t)),
@@ -110,14 +113,24 @@ export function operativeForVoteC(
   );
 }
 
-/** Root of a rising function between two bounds, by bisection to 1e-10. */
+/** Root of a rising function between two bounds, by false position (Illinois variant) to 1e-9. */
 function rootOf(f: (x: number) => number, low: number, high: number): number {
   let [a, b] = [low, high];
-  while (b - a > 1e-10) {
-    const middle = (a + b) / 2;
-    if (middle === a || middle === b) break;
-    if (f(middle) < 0) a = middle;
-    else b = middle;
+  let [fa, fb] = [f(a), f(b)];
+  let moved = 0; // which end moved last: −1 the lower, +1 the upper
+  for (let round = 0; round < 100; round++) {
+    const x = (a * fb - b * fa) / (fb - fa);
+    const fx = f(x);
+    if (Math.abs(fx) < 1e-9) return x;
+    if (fx < 0) {
+      [a, fa] = [x, fx];
+      if (moved === -1) fb /= 2; // the same end twice: draw the other one in
+      moved = -1;
+    } else {
+      [b, fb] = [x, fx];
+      if (moved === 1) fa /= 2;
+      moved = 1;
+    }
   }
   return (a + b) / 2;
 }

@@ -1,5 +1,6 @@
 // Where the beam lands that comes through a window of a box-shaped room: exact, by clipping polygons.
-import { type Box, type BoxFace, type BoxRectangle, rectangleAreaM2 } from './view-factors.ts';
+import type { Polygon } from './convex-cut.ts';
+import type { Box, BoxFace, BoxRectangle } from './view-factors.ts';
 
 /** A direction in the box's own axes: x from left to right, y from front to back, z up. */
 export interface Direction {
@@ -30,7 +31,9 @@ export function sunTravel(
   };
 }
 
-const planes: Readonly<Record<BoxFace, { readonly axis: 0 | 1 | 2; readonly far: boolean }>> = {
+type Axis = 0 | 1 | 2;
+
+const planes: Readonly<Record<BoxFace, { readonly axis: Axis; readonly far: boolean }>> = {
   left: { axis: 0, far: false },
   right: { axis: 0, far: true },
   front: { axis: 1, far: false },
@@ -40,22 +43,30 @@ const planes: Readonly<Record<BoxFace, { readonly axis: 0 | 1 | 2; readonly far:
 };
 
 /** The two axes along u and v of a face with this normal. */
-const along = [
+const sides: readonly (readonly [Axis, Axis])[] = [
   [1, 2],
   [0, 2],
   [0, 1],
-] as const;
+];
+
+/** Component of a direction along an axis. */
+function along(d: Direction, axis: Axis): number {
+  if (axis === 2) return d.z;
+  return axis === 0 ? d.x : d.y;
+}
 
 /** Cosine between a direction of travel and the inward normal of a face; above 0 where it comes in. */
 export function inwardCosine(face: BoxFace, d: Direction): number {
   const { axis, far } = planes[face];
-  const component = axis === 0 ? d.x : axis === 1 ? d.y : d.z;
-  return far ? -component : component;
+  return far ? -along(d, axis) : along(d, axis);
 }
 
-/** Room for two polygons of up to eight corners; one for each caller. */
+/** Numbers in each half of the scratch: 32 corners, more than any shadow leaves. */
+const half = 64;
+
+/** Room for two polygons; one for each caller. */
 export function patchScratch(): Float64Array {
-  return new Float64Array(32);
+  return new Float64Array(2 * half);
 }
 
 /**
@@ -64,11 +75,12 @@ export function patchScratch(): Float64Array {
  * The window is carried along the rays into the plane of the target, where it becomes a parallelogram;
  * the share is how much of it the target covers. Over all five other faces the shares add up to 1.
  *
- * @param window on its face; for a part in the sun, that part
+ * @param window on its face
  * @param travel direction of the rays, into the room through the window
  * @param target a face, or a rectangle on one
  * @param scratch from `patchScratch`
- * @returns 0 to 1
+ * @param lit parts of the window in the sun, as `sunlitPieces` gives them; the whole if left out
+ * @returns 0 to 1, of what comes through the lit parts
  *
  * Source: geometry; clipping by I. E. Sutherland, G. W. Hodgman, "Reentrant polygon clipping",
  * Communications of the ACM 17 (1974), pp. 32–42.
@@ -79,33 +91,43 @@ export function patchShare(
   travel: Direction,
   target: BoxRectangle,
   scratch: Float64Array,
+  lit?: readonly Polygon[],
 ): number {
-  const size = [box.lengthM, box.widthM, box.heightM];
-  const d = [travel.x, travel.y, travel.z];
   const from = planes[window.face];
   const to = planes[target.face];
-  const rate = d[to.axis];
+  const rate = along(travel, to.axis);
   if (window.face === target.face || (to.far ? rate <= 1e-9 : rate >= -1e-9)) return 0;
-  const [wu, wv] = along[from.axis];
-  const [tu, tv] = along[to.axis];
+  const { u0M, u1M, v0M, v1M } = window;
+  const width = u1M - u0M;
+  const height = v1M - v0M;
+  const pieces = lit ?? [[0, 0, width, 0, width, height, 0, height]];
+  // Looking out of front or right, u runs to the left.
+  const mirrored = window.face === 'front' || window.face === 'right';
+  const size = [box.lengthM, box.widthM, box.heightM];
+  const [wu, wv] = sides[from.axis];
+  const [tu, tv] = sides[to.axis];
   const plane = to.far ? size[to.axis] : 0;
-  for (let k = 0; k < 4; k++) {
-    const corner = [0, 0, 0];
-    corner[from.axis] = from.far ? size[from.axis] : 0;
-    corner[wu] = k === 0 || k === 3 ? window.u0M : window.u1M;
-    corner[wv] = k < 2 ? window.v0M : window.v1M;
-    const reach = (plane - corner[to.axis]) / rate;
-    scratch[2 * k] = corner[tu] + reach * d[tu];
-    scratch[2 * k + 1] = corner[tv] + reach * d[tv];
+  const corner = [0, 0, 0];
+  corner[from.axis] = from.far ? size[from.axis] : 0;
+  let whole = 0;
+  let covered = 0;
+  for (const piece of pieces) {
+    for (let k = 0; k < piece.length; k += 2) {
+      corner[wu] = mirrored ? u1M - piece[k] : u0M + piece[k];
+      corner[wv] = v0M + piece[k + 1];
+      const reach = (plane - corner[to.axis]) / rate;
+      scratch[k] = corner[tu] + reach * along(travel, tu);
+      scratch[k + 1] = corner[tv] + reach * along(travel, tv);
+    }
+    let corners = piece.length / 2;
+    whole += areaOf(scratch, corners);
+    corners = clip(scratch, corners, 0, 0, target.u0M, 1);
+    corners = clip(scratch, corners, half, 0, target.u1M, -1);
+    corners = clip(scratch, corners, 0, 1, target.v0M, 1);
+    corners = clip(scratch, corners, half, 1, target.v1M, -1);
+    covered += areaOf(scratch, corners);
   }
-  // The projection scales areas by the ratio of the cosines at window and target.
-  const whole = (rectangleAreaM2(window) * Math.abs(d[from.axis])) / Math.abs(rate);
-  let corners = 4;
-  corners = clip(scratch, corners, 0, 0, target.u0M, 1);
-  corners = clip(scratch, corners, 16, 0, target.u1M, -1);
-  corners = clip(scratch, corners, 0, 1, target.v0M, 1);
-  corners = clip(scratch, corners, 16, 1, target.v1M, -1);
-  return Math.min(1, areaOf(scratch, corners) / whole);
+  return whole > 0 ? Math.min(1, covered / whole) : 0;
 }
 
 /** Keeps the part of a polygon on one side of a line; reads at `from`, writes to the other half. */
@@ -117,7 +139,7 @@ function clip(
   limit: number,
   side: 1 | -1,
 ): number {
-  const into = 16 - from;
+  const into = half - from;
   let kept = 0;
   for (let k = 0; k < count; k++) {
     const a = from + 2 * k;

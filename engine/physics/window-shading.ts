@@ -93,9 +93,12 @@ export function sunlitPieces(window: ShadedWindow, sun: SunFromWindow): readonly
   const side = -sun.right / sun.out; // sideways move of a shadow per metre of depth
   const down = -sun.up / sun.out;
   const shadows: Polygon[] = [];
-  /** Shadow of a plate that stands on the line (x0, y0) to (x1, y1), from one depth to another. */
+  /** Shadow of a plate that stands on the line (x0, y0) to (x1, y1), x0 ≤ x1 and y0 ≤ y1, from one depth to another. */
   const cast = (x0: number, y0: number, x1: number, y1: number, near: number, far: number) => {
     const [nx, ny, fx, fy] = [near * side, near * down, far * side, far * down];
+    const beside = Math.max(x1 + nx, x1 + fx) <= 0 || Math.min(x0 + nx, x0 + fx) >= w;
+    const beyond = Math.max(y1 + ny, y1 + fy) <= 0 || Math.min(y0 + ny, y0 + fy) >= h;
+    if (beside || beyond) return; // clear of the window
     shadows.push([x0 + nx, y0 + ny, x1 + nx, y1 + ny, x1 + fx, y1 + fy, x0 + fx, y0 + fy]);
   };
   const reach = (length: number) => Math.min(length, farM);

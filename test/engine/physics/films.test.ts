@@ -88,14 +88,17 @@ test('fixed films follow the heat flow as ISO 6946 has it', () => {
 });
 
 describe('outside films', () => {
-  test('the wind blows at a face within 100° of its normal, and at every roof', () => {
+  test('the wind blows at a face within 100° of its normal, and at every flat roof', () => {
     expect(isWindward(350, 90, 90)).toBe(true); // 100° apart over north
     expect(isWindward(349, 90, 90)).toBe(false);
     expect(isWindward(10, 270, 90)).toBe(true);
     expect(isWindward(-170, 180, 90)).toBe(true);
     expect(isWindward(0, 180, 90)).toBe(false);
     expect(isWindward(0, 180, 0)).toBe(true);
+    expect(isWindward(0, 180, 9.9)).toBe(true);
     expect(isWindward(0, 180, 45)).toBe(false);
+    expect(isWindward(76, 180, 45)).toBe(true); // 104° in plan is 99.85° from the slope's normal
+    expect(isWindward(75, 180, 45)).toBe(false); // 105° in plan is 100.55°
   });
 
   // Yazdanian & Klems 1994: 3.26·V^0.89 and 3.55·V^0.617; at 1 m/s the constants themselves.

@@ -18,6 +18,7 @@ import {
   rectangleAreaM2,
 } from '../../../engine/physics/view-factors.ts';
 import { windowLight } from '../../../engine/physics/window-light.ts';
+import { sunFromWindow, sunlitPieces } from '../../../engine/physics/window-shading.ts';
 
 const box = { lengthM: 8, widthM: 6, heightM: 2.7 };
 const window: BoxRectangle = { face: 'front', u0M: 0.5, u1M: 3.5, v0M: 0.2, v1M: 2.2 };
@@ -76,6 +77,28 @@ describe('patch of the sun', () => {
         expect(sum).toBeCloseTo(1, 9);
       }),
     );
+  });
+
+  // Independent of the clipping of pieces: the lit part of this window is a rectangle at its right end
+  // (as seen from inside, which is its low-x end in front), that can be given as a window itself.
+  test('a window in half shade throws the patch of its lit half', () => {
+    const d = sunTravel(180, 150, 30); // morning sun, from the left looking out: the left is in shade
+    const sun = sunFromWindow(90, 180, 150, 30);
+    const shade = {
+      widthM: 3,
+      heightM: 2,
+      revealM: 0,
+      leftFin: { depthM: 2, gapM: 0, aboveM: Infinity, belowM: Infinity },
+    };
+    const lit = sunlitPieces(shade, sun);
+    const shadowM = (2 * -sun.right) / sun.out;
+    const rest = { ...window, u1M: window.u1M - shadowM };
+    const strip: BoxRectangle = { face: 'floor', u0M: 0, u1M: 1.5, v0M: 0.5, v1M: 2.5 };
+    for (const target of [...boxFaces.map((f) => faceRectangle(box, f)), strip]) {
+      const found = patchShare(box, window, d, target, scratch, lit);
+      expect(found, target.face).toBeCloseTo(share(d, target, rest), 9);
+    }
+    expect(patchShare(box, window, d, faceRectangle(box, 'floor'), scratch, [])).toBe(0);
   });
 
   test('a ray cast from points over the window finds the same shares within 1 %', () => {
