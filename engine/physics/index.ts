@@ -9,6 +9,7 @@ export * from './cavity-convection.ts';
 export * from './close-exchange.ts';
 export * from './conduction-mesh.ts';
 export * from './conventional-film.ts';
+export type { Polygon } from './convex-cut.ts';
 export * from './degree-days.ts';
 export * from './dense.ts';
 export * from './design-heat-load.ts';
