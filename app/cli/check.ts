@@ -1,7 +1,7 @@
 import type { Building } from '../../engine/index.ts';
 import type { Fault } from '../../weather/index.ts';
 import type { Command } from './command.ts';
-import { openProject, weatherFor } from './inputs.ts';
+import { openModel, weatherFor } from './inputs.ts';
 import { InputFaults } from './stop.ts';
 
 const counted = (count: number, one: string, many = `${one}s`) =>
@@ -21,7 +21,14 @@ function contents({ rooms, constructions, glazings, schedules }: Building): stri
 /** What was found, good or bad; the weather is looked at only where the project itself is sound. */
 async function look(file: string) {
   try {
-    const project = await openProject(file);
+    const project = await openModel(file);
+    if ('model' in project) {
+      const { name, nodes, links } = project.model;
+      const lines = [
+        `${name}: ${counted(nodes.length, 'node')}, ${counted(links.length, 'link')}.`,
+      ];
+      return { faults: [], notes: [], lines };
+    }
     const lines = [`${project.building.name}: ${contents(project.building)}.`];
     if (!project.building.weather) {
       return { faults: [], notes: ['The project names no weather table yet.'], lines };

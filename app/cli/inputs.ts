@@ -3,8 +3,9 @@
 import { dirname, isAbsolute, join } from 'node:path';
 import { type Building, parseProject } from '../../engine/index.ts';
 import { readWeather, type WeatherYear } from '../../weather/index.ts';
-import { readText } from '../disk/index.ts';
+import { readBytes, readText } from '../disk/index.ts';
 import { checkWeatherDigest } from '../project/index.ts';
+import { type OpenNodal, openNodal } from './nodal.ts';
 import { InputFaults, need, WrongUsage } from './stop.ts';
 
 export interface OpenProject {
@@ -13,11 +14,13 @@ export interface OpenProject {
   readonly building: Building;
 }
 
-export async function openProject(file: string): Promise<OpenProject> {
-  const { text } = need(
-    await readText(file, { expected: 'a project file', limitBytes: 32_000_000 }),
-  );
-  return { file, building: need(parseProject(text, file)) };
+const projectRead = { expected: 'a project file', limitBytes: 32_000_000 };
+
+/** A project, or a plain nodal model: the file says which. */
+export async function openModel(file: string): Promise<OpenProject | OpenNodal> {
+  const { text } = need(await readText(file, projectRead));
+  const nodal = await openNodal(file, text);
+  return nodal ?? { file, building: need(parseProject(text, file)) };
 }
 
 export interface OpenWeather {
@@ -32,15 +35,10 @@ export async function openWeather(
   file: string,
   site: NonNullable<Building['weather']>['site'] | null = null,
 ): Promise<OpenWeather> {
-  const { text, sha256, notes } = need(
-    await readText(file, {
-      expected: 'a weather table',
-      limitBytes: 64_000_000,
-      allowLegacyText: true,
-    }),
-  );
-  const year = need(readWeather(text, file, site === null ? {} : { site }));
-  return { file, year, sha256, notes: notes.map((note) => `${file}: ${note}`) };
+  const limits = { expected: 'a weather table', limitBytes: 64_000_000 };
+  const { data, sha256 } = need(await readBytes(file, limits));
+  const year = need(readWeather(data, site ? { file, site } : { file }));
+  return { file, year, sha256, notes: [] };
 }
 
 /**

@@ -1,6 +1,6 @@
 // The network behind a project, as data: every node and link with where it comes from.
 
-import type { Assembly, Provenance } from '../../engine/index.ts';
+import type { Assembly, Problem, Provenance } from '../../engine/index.ts';
 import { linkSizeWPerK, yearMeans } from './link-size.ts';
 
 export interface NodeEntry extends Provenance {
@@ -29,7 +29,20 @@ export interface NetworkDocument {
   readonly plants: readonly { readonly name: string; readonly kind: string }[];
 }
 
-export function networkDocument({ building, problem, provenance }: Assembly): NetworkDocument {
+/** Where a nodal model's parts come from: its file. */
+const asGiven = (name: string): Provenance => ({
+  name,
+  what: name,
+  method: 'as given in the model',
+  inputs: {},
+});
+
+/** @param provenance of an assembled building; null for a nodal model */
+export function networkDocument(
+  name: string,
+  problem: Problem,
+  provenance: Assembly['provenance'] | null,
+): NetworkDocument {
   const { network } = problem;
   const { nodeNames } = network;
   const mean = yearMeans(problem);
@@ -41,7 +54,8 @@ export function networkDocument({ building, problem, provenance }: Assembly): Ne
       sumWPerK[from] += sizeWPerK;
       sumWPerK[to] += sizeWPerK;
       const ends = { from: nodeNames[from], to: nodeNames[to] };
-      return { ...provenance.links[g][k], law: group.law, ...ends, sizeWPerK };
+      const about = provenance?.links[g][k] ?? asGiven(`${ends.from} to ${ends.to}`);
+      return { ...about, law: group.law, ...ends, sizeWPerK };
     }),
   );
   const { directed } = network;
@@ -51,19 +65,19 @@ export function networkDocument({ building, problem, provenance }: Assembly): Ne
     const sizeWPerK = directed.rateWPerK[k] * scale;
     sumWPerK[to] += sizeWPerK;
     return {
-      ...provenance.directed[k],
+      ...(provenance?.directed[k] ?? asGiven(`${nodeNames[from]} to ${nodeNames[to]}`)),
       law: 'directed',
       from: nodeNames[from],
       to: nodeNames[to],
       sizeWPerK,
     };
   });
-  const nodes = nodeNames.map((_, index): NodeEntry => {
+  const nodes = nodeNames.map((node, index): NodeEntry => {
     const isBoundary = network.boundarySeries[index] >= 0;
     const capacityJPerK = isBoundary ? 0 : network.capacityJPerK[index];
     const hasTime = capacityJPerK > 0 && sumWPerK[index] > 0;
     return {
-      ...provenance.nodes[index],
+      ...(provenance?.nodes[index] ?? asGiven(node)),
       index,
       capacityJPerK,
       isBoundary,
@@ -71,7 +85,7 @@ export function networkDocument({ building, problem, provenance }: Assembly): Ne
     };
   });
   return {
-    project: building.name,
+    project: name,
     nodes,
     links,
     directed: flows,
@@ -80,7 +94,7 @@ export function networkDocument({ building, problem, provenance }: Assembly): Ne
       nodes: Array.from(one.nodes, (node) => nodeNames[node]),
     })),
     sources: Array.from(network.sources.node, (node, k) => ({
-      name: provenance.sources[k],
+      name: provenance?.sources[k] ?? 'source',
       node: nodeNames[node],
     })),
     plants: network.plants.map(({ name, kind }) => ({ name, kind })),

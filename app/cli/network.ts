@@ -1,13 +1,14 @@
 import { assemble } from '../../engine/index.ts';
 import { textOf } from './arguments.ts';
-import type { Command } from './command.ts';
-import { openProject, weatherFor } from './inputs.ts';
+import type { Command, Given } from './command.ts';
+import { type OpenProject, openModel, weatherFor } from './inputs.ts';
 import {
   type LinkEntry,
   type NetworkDocument,
   type NodeEntry,
   networkDocument,
 } from './network-document.ts';
+import { type OpenNodal, refuseForNodal } from './nodal.ts';
 import { table } from './table.ts';
 
 const inputText = (inputs: LinkEntry['inputs']) =>
@@ -52,7 +53,7 @@ function networkText(document: NetworkDocument): string {
       links,
     );
   const parts = [
-    `${document.project}: ${document.nodes.length} nodes, ${document.links.length} links, ${document.directed.length} directed links, ${document.sources.length} sources, ${document.plants.length} heaters and chillers`,
+    `${document.project}: ${document.nodes.length} nodes, ${document.links.length} links, ${document.directed.length} directed links, ${document.sources.length} sources, heaters and chillers: ${document.plants.length}`,
     nodes,
     "Links. Where the law depends on temperature or weather, the size is the one at 20 °C, 1 K apart and the\nyear's mean weather.\n" +
       linkTable(document.links),
@@ -61,6 +62,18 @@ function networkText(document: NetworkDocument): string {
   for (const one of document.enclosures)
     parts.push(`Enclosure ${one.name}: ${one.nodes.join(', ')}`);
   return parts.join('\n\n');
+}
+
+async function ofProject(project: OpenProject, given: Given): Promise<NetworkDocument> {
+  const { year } = await weatherFor(project, textOf(given, 'weather'));
+  const { building } = project;
+  const { problem, provenance } = assemble(building, year, { stepMinutes: 15, refine: 1 });
+  return networkDocument(building.name, problem, provenance);
+}
+
+function ofNodal({ model, problem }: OpenNodal, given: Given): NetworkDocument {
+  refuseForNodal('network', given, ['weather']);
+  return networkDocument(model.name, problem, null);
 }
 
 export const networkCommand: Command = {
@@ -76,11 +89,8 @@ export const networkCommand: Command = {
     'inglenook network house.inglenook.json --json > network.json',
   ],
   async run(operand, given, terminal) {
-    const project = await openProject(operand);
-    const { year } = await weatherFor(project, textOf(given, 'weather'));
-    const document = networkDocument(
-      assemble(project.building, year, { stepMinutes: 15, refine: 1 }),
-    );
+    const model = await openModel(operand);
+    const document = 'building' in model ? await ofProject(model, given) : ofNodal(model, given);
     terminal.print(given.json ? JSON.stringify(document, null, 2) : networkText(document));
   },
 };

@@ -2,10 +2,18 @@ import { type Findings, type Simulation, simulate } from '../../engine/index.ts'
 import { writeFolderWhole } from '../disk/index.ts';
 import { type Accuracy, accuracyOf, accuracyText } from './accuracy.ts';
 import { textOf } from './arguments.ts';
-import type { Command } from './command.ts';
+import type { Command, Given } from './command.ts';
 import { findingsText } from './findings-text.ts';
 import { resultFiles } from './hourly-csv.ts';
-import { type OpenProject, type OpenWeather, openProject, weatherFor } from './inputs.ts';
+import { type OpenProject, type OpenWeather, openModel, weatherFor } from './inputs.ts';
+import {
+  nodalCsv,
+  nodalResults,
+  nodalText,
+  type OpenNodal,
+  refuseForNodal,
+  runNodal,
+} from './nodal.ts';
 import { need, WrongUsage } from './stop.ts';
 import type { Terminal } from './terminal.ts';
 
@@ -42,10 +50,28 @@ function run(
   return step.value;
 }
 
+async function simulateNodal(nodal: OpenNodal, given: Given, terminal: Terminal): Promise<void> {
+  refuseForNodal('simulate', given, ['weather', 'step', 'check-accuracy']);
+  const run = runNodal(nodal, terminal);
+  const results = nodalResults(nodal, run);
+  const json = JSON.stringify(results, null, 2);
+  const folder = textOf(given, 'out');
+  if (folder !== null) {
+    const files = new Map([
+      ['results.json', `${json}\n`],
+      ['records.csv', nodalCsv(nodal, run)],
+    ]);
+    need(await writeFolderWhole(folder, files));
+    terminal.note(`Written to ${folder}: results.json and records.csv.`);
+  }
+  terminal.print(given.json ? json : nodalText(results));
+}
+
 export const simulateCommand: Command = {
   name: 'simulate',
   operand: 'PROJECT',
-  summary: 'Runs the year: energy, peaks and hours outside the comfort band, room by room.',
+  summary:
+    'Runs the year: energy, peaks and hours outside the comfort band; or a plain nodal model.',
   options: {
     weather: { value: 'FILE', help: "a weather table instead of the project's" },
     step: { value: 'MIN', help: 'step in minutes, a divisor of 60; 15 without it' },
@@ -60,9 +86,10 @@ export const simulateCommand: Command = {
     'inglenook simulate house.inglenook.json --out results --check-accuracy',
   ],
   async run(operand, given, terminal) {
-    const stepMinutes = stepOf(textOf(given, 'step'));
     const started = performance.now();
-    const project = await openProject(operand);
+    const project = await openModel(operand);
+    if ('model' in project) return simulateNodal(project, given, terminal);
+    const stepMinutes = stepOf(textOf(given, 'step'));
     const weather = await weatherFor(project, textOf(given, 'weather'));
     const readMs = performance.now() - started;
 

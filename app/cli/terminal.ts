@@ -11,7 +11,7 @@ export interface Terminal {
   endProgress(): void;
 }
 
-interface Stream {
+export interface Stream {
   readonly isTTY?: boolean;
   write(text: string): unknown;
 }

@@ -123,8 +123,7 @@ export const weatherCommand: Command = {
   options: { json: { help: 'one JSON document on standard output' } },
   examples: ['inglenook weather year.csv', 'inglenook weather year.csv --json'],
   async run(operand, given, terminal) {
-    const { file, sha256, year, notes } = await openWeather(operand);
-    for (const note of notes) terminal.note(note);
+    const { file, sha256, year } = await openWeather(operand);
     const document = weatherDocument(file, sha256, year);
     terminal.print(given.json ? JSON.stringify(document, null, 2) : weatherText(document));
   },

@@ -1,3 +1,2 @@
-export { type ReadOptions, readText, type TextFile } from './read-text.ts';
-export { systemFault } from './system-fault.ts';
+export { readBytes, readText, type TextFile } from './read-text.ts';
 export { writeFileWhole, writeFolderWhole } from './write-whole.ts';

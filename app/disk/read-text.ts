@@ -1,4 +1,4 @@
-// Reads a text file that the user named: only real files, only up to a limit, only text.
+// Reads a file that the user named: only real files, only up to a limit; as text, only text.
 
 import { createHash } from 'node:crypto';
 import { open } from 'node:fs/promises';
@@ -9,8 +9,17 @@ export interface ReadOptions {
   /** What the file should be, for the fault: "a project file". */
   readonly expected: string;
   readonly limitBytes: number;
-  /** Tables from older programs are often in Windows' western code page: read them so, with a note. */
+}
+
+export interface ReadTextOptions extends ReadOptions {
+  /** Tables from other programs come in UTF-16 and in Windows' western code page: read them, with a note. */
   readonly allowLegacyText?: boolean;
+}
+
+export interface BytesFile {
+  readonly data: Uint8Array;
+  /** Of the bytes on disk, in hexadecimal. */
+  readonly sha256: string;
 }
 
 export interface TextFile {
@@ -29,8 +38,6 @@ const signatures: readonly (readonly [bytes: readonly number[], found: string, m
   [[0x50, 0x4b, 0x03, 0x04], 'a ZIP archive or a workbook', 'Unpack it, or export it as text.'],
   [[0x1f, 0x8b], 'a gzip archive', 'Unpack it first.'],
   [[0x25, 0x50, 0x44, 0x46], 'a PDF document', 'Name the file with the data.'],
-  [[0xff, 0xfe], 'text in UTF-16', 'Save it as UTF-8.'],
-  [[0xfe, 0xff], 'text in UTF-16', 'Save it as UTF-8.'],
 ];
 
 function notText(data: Uint8Array): readonly [found: string, mend: string] | null {
@@ -40,13 +47,13 @@ function notText(data: Uint8Array): readonly [found: string, mend: string] | nul
   return data.subarray(0, 65536).includes(0) ? ['binary data', 'Name a text file.'] : null;
 }
 
-export async function readText(file: string, options: ReadOptions): Promise<Parsed<TextFile>> {
+/** The file's bytes as they are. */
+export async function readBytes(file: string, options: ReadOptions): Promise<Parsed<BytesFile>> {
   const { expected, limitBytes } = options;
-  const fault = (found: string, mend: string): Parsed<TextFile> => {
+  const fault = (found: string, mend: string): Parsed<BytesFile> => {
     const one: Fault = { file, place: { path: '' }, found, expected, mend };
     return { ok: false, faults: [one] };
   };
-  let data: Uint8Array;
   try {
     const handle = await open(file, 'r');
     try {
@@ -56,22 +63,45 @@ export async function readText(file: string, options: ReadOptions): Promise<Pars
       if (stat.size > limitBytes) {
         return fault(megabytes(stat.size), `Name a file of at most ${megabytes(limitBytes)}.`);
       }
-      data = await handle.readFile();
+      const data: Uint8Array = await handle.readFile();
+      if (data.length === 0) {
+        return fault('an empty file', 'Check that it was saved or copied whole.');
+      }
+      const sha256 = createHash('sha256').update(data).digest('hex');
+      return { ok: true, value: { data, sha256 } };
     } finally {
       await handle.close();
     }
   } catch (error) {
     return { ok: false, faults: [systemFault(file, error, expected)] };
   }
-  if (data.length === 0) return fault('an empty file', 'Check that it was saved or copied whole.');
-  const other = notText(data);
-  if (other) return fault(...other);
+}
 
-  const sha256 = createHash('sha256').update(data).digest('hex');
+/** The label of UTF-16 by its mark at the start, or null. */
+function utf16Label(data: Uint8Array): string | null {
+  if (data[0] === 0xff && data[1] === 0xfe) return 'utf-16le';
+  return data[0] === 0xfe && data[1] === 0xff ? 'utf-16be' : null;
+}
+
+export async function readText(file: string, options: ReadTextOptions): Promise<Parsed<TextFile>> {
+  const read = await readBytes(file, options);
+  if (!read.ok) return read;
+  const { data, sha256 } = read.value;
   const made = (text: string, notes: readonly string[] = []): Parsed<TextFile> => ({
     ok: true,
     value: { text, sha256, bytes: data.length, notes },
   });
+  const fault = (found: string, mend: string): Parsed<TextFile> => ({
+    ok: false,
+    faults: [{ file, place: { path: '' }, found, expected: options.expected, mend }],
+  });
+  const wide = utf16Label(data);
+  if (wide) {
+    if (!options.allowLegacyText) return fault('text in UTF-16', 'Save it as UTF-8.');
+    return made(new TextDecoder(wide).decode(data), ['The text is in UTF-16.']);
+  }
+  const other = notText(data);
+  if (other) return fault(...other);
   try {
     return made(new TextDecoder('utf-8', { fatal: true }).decode(data));
   } catch {

@@ -17,7 +17,7 @@ export function simulationWork(): (request: RunRequest) => Work<Simulation> {
     const { weatherText: text, weatherFile: file } = request;
     const key = JSON.stringify([file, site]);
     if (last?.key === key && last.text === text) return { ok: true, value: last.year };
-    const read = readWeather(text, file, site === null ? {} : { site });
+    const read = readWeather(text, site === null ? { file } : { file, site });
     if (read.ok) last = { key, text, year: read.value };
     return read;
   }

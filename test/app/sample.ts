@@ -63,3 +63,25 @@ export const sampleProject = {
 
 export const sampleText = (changes: object = {}) =>
   `${JSON.stringify({ ...sampleProject, ...changes }, null, 2)}\n`;
+
+/** A plain weather table of an invented place: sinusoids for year and day, sun by day. */
+export function sampleWeather(warmerK = 0): string {
+  const lines = [
+    '# site: Nowhere Moor',
+    '# latitudeDeg: 50',
+    '# longitudeDeg: 15',
+    '# elevationM: 200',
+    '# utcOffsetH: 1',
+    '# year: 2019',
+    'hour,dryBulbC,relativeHumidity,windMPerS,ghiWPerM2',
+  ];
+  for (let hour = 0; hour < 8760; hour++) {
+    const yearTurn = -Math.cos((2 * Math.PI * (hour - 20 * 24)) / 8760);
+    const dayTurn = -Math.cos((2 * Math.PI * ((hour % 24) + 0.5 - 3)) / 24);
+    const height = Math.sin((Math.PI * ((hour % 24) + 0.5 - 8)) / 8); // up from 8:00 to 16:00
+    const ghiWPerM2 = Math.max(0, height * (250 + 150 * yearTurn));
+    const dryBulbC = 9 + warmerK + 10 * yearTurn + 4 * dayTurn;
+    lines.push(`${hour},${dryBulbC.toFixed(2)},0.6,3,${ghiWPerM2.toFixed(1)}`);
+  }
+  return `${lines.join('\n')}\n`;
+}
