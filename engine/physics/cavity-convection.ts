@@ -31,7 +31,7 @@ const gravityMPerS2 = 9.81;
 
 /**
  * Properties of a filling. Mixtures are the mean by volume share (as EN 673 does); ISO 15099 mixes by
- * kinetic theory, which differs by about 2 % for argon with 10 % air.
+ * kinetic theory, which is not done here.
  *
  * @param filling shares that add up to 1; a gas without data here is an error
  */

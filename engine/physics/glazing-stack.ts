@@ -93,7 +93,7 @@ const strips = 4;
  *
  *   τd = 2·∫ τ(μ)·μ dμ,  μ = cos θ from 0 to 1
  *
- * By Gauss-Legendre, 8 points in each of 4 strips; error under 1e-6.
+ * By Gauss-Legendre, 8 points in each of 4 strips; error under 1e-5.
  *
  * Source: Duffie & Beckman, 5.4 (definition).
  */

@@ -23,7 +23,7 @@ const mostTaken = 0.92;
  *   U ≥ 4.5: τ = 0.939998·g² + 0.20332·g for g < 0.7206, else 1.30415·g − 0.30515
  *   U ≤ 3.4: τ = 0.41040·g for g ≤ 0.15, else 0.085775·g² + 0.963954·g − 0.084958
  *
- * straight in between. A fit over many real glazings, true to about 0.05.
+ * straight in between. A fit over many real glazings: one of them may lie off it.
  *
  * Source: D. Arasteh, C. Kohler, B. Griffith, report LBNL-2804E, 2009 (constants from memory).
  */

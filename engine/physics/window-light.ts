@@ -21,7 +21,7 @@ const spokes = 64;
  *   s_t = ∫ τ(θ)·cos θ·(share of the rays that meet t) dω / ∫ τ(θ)·cos θ dω
  *
  * over the directions that head down (sky) or up (ground). 24 × 64 directions of equal weight; the
- * error is under 0.001. With τ constant, the mean of both, weighted by what each half holds, is the
+ * error is under 0.002. With τ constant, the mean of both, weighted by what each half holds, is the
  * view factor of the window.
  *
  * @param targets whole faces or rectangles on them, without overlap
