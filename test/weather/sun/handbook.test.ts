@@ -162,11 +162,11 @@ test('every case on the sun is used here or in position.test.ts; shading belongs
   expect(referenceCases(file).filter((one) => !used.test(one.id))).toEqual([]);
 });
 
-test("Spencer's declination follows the ephemeris of 2025 to 0.25 degrees", () => {
+test("Spencer's declination follows the ephemeris of 2025 to 0.33 degrees", () => {
   // Spencer (1971) states 0.0006 rad, 0.03 degrees; near the equinoxes, at 0.4 degrees a day, the
-  // leap-year cycle and the time of day add up to half a day.
+  // leap-year cycle (¼ day) and the time of day (½ day) add 0.3.
   for (let day = 1; day <= 365; day += 4) {
     const exact = sunEphemeris(julianDay(Date.UTC(2025, 0, day, 12))).declinationDeg;
-    expect(Math.abs(spencerDeclinationDeg(day) - exact)).toBeLessThan(0.25);
+    expect(Math.abs(spencerDeclinationDeg(day) - exact)).toBeLessThan(0.33);
   }
 });
