@@ -4,6 +4,7 @@ import { spawn } from 'node:child_process';
 import { existsSync } from 'node:fs';
 import { join } from 'node:path';
 import { fileURLToPath } from 'node:url';
+import { version } from '../version.ts';
 import { hasScreen, openAppWindow } from './app-window.ts';
 import { electronProgram } from './electron-program.ts';
 import { findBrowser } from './find-browser.mjs';
@@ -11,7 +12,6 @@ import { makeHandlers } from './handlers.ts';
 import { startLoopback } from './loopback/loopback.ts';
 import { dataFolder } from './recent.ts';
 import { type StartOptions, startHelp, startOptions } from './start-options.ts';
-import { version } from '../version.ts';
 
 // This file is built to dist/start.js: everything is found from there.
 const dist = fileURLToPath(new URL('.', import.meta.url));

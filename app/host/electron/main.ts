@@ -5,8 +5,8 @@ import { dirname, join, resolve } from 'node:path';
 import { fileURLToPath } from 'node:url';
 import { app, BrowserWindow, dialog, ipcMain, protocol, session } from 'electron';
 import { dispatch } from '../../bridge/index.ts';
-import { makeHandlers } from '../handlers.ts';
 import { version } from '../../version.ts';
+import { makeHandlers } from '../handlers.ts';
 import { answerPage, pageOrigin, scheme } from './page-scheme.ts';
 
 const dist = fileURLToPath(new URL('.', import.meta.url));
