@@ -53,6 +53,7 @@ function dataset(layer: Layer, ink: Ink): ChartDataset<'line' | 'bar', Point[]> 
   if (layer.kind === 'bar') {
     return {
       type: 'bar',
+      grouped: false,
       data: layer.points,
       backgroundColor: color,
       barThickness: layer.width ?? 20,

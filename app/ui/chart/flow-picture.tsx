@@ -73,6 +73,12 @@ export function FlowPicture(props: FlowPictureProps) {
   const x0 = bar.x - reach;
   const x1 = bar.x + bar.width + reach;
   const top = 34;
+  const longest = Math.max(
+    1,
+    ...[...picture.into, ...picture.out].map((s) => figure(s.shown).length),
+  );
+  /** From a stream's end to its name: the figure, as wide as the longest. */
+  const column = 24 + 7.6 * longest;
 
   return (
     <div ref={box}>
@@ -90,7 +96,7 @@ export function FlowPicture(props: FlowPictureProps) {
                 d={streamPath(x0, s.outerY, bar.x, s.innerY, Math.max(0.7, s.width))}
                 className={colorOf(s.key, false)}
               />
-              <text x={x0 - 46} y={s.labelY + 4.5} className="end body">
+              <text x={x0 - column} y={s.labelY + 4.5} className="end body">
                 {streamName(s.key, false)}
               </text>
               <text x={x0 - 8} y={s.labelY + 4.5} className="end strong body">
@@ -104,10 +110,10 @@ export function FlowPicture(props: FlowPictureProps) {
                 d={streamPath(x1, s.outerY, bar.x + bar.width, s.innerY, Math.max(0.7, s.width))}
                 className={colorOf(s.key, true)}
               />
-              <text x={x1 + 40} y={s.labelY + 4.5} className="end strong body">
+              <text x={x1 + column - 8} y={s.labelY + 4.5} className="end strong body">
                 {figure(s.shown)}
               </text>
-              <text x={x1 + 48} y={s.labelY + 4.5} className="body">
+              <text x={x1 + column} y={s.labelY + 4.5} className="body">
                 {streamName(s.key, true)}
               </text>
             </g>

@@ -1,4 +1,4 @@
-import type { AppState, Scheme } from '../state/index.ts';
+import { type AppState, asksForSite, type Scheme } from '../state/index.ts';
 import type { Command } from './command.ts';
 
 const always = () => true;
@@ -46,7 +46,7 @@ export const commands: readonly Command[] = [
     label: 'Give the site of the table…',
     menu: 'File',
     keys: '',
-    isEnabled: (state) => state.weather !== null,
+    isEnabled: asksForSite,
     run: (app) => app.set({ dialog: 'site' }),
   },
   {

@@ -10,11 +10,13 @@ export interface OpenedFile {
 export interface OpenedProject extends OpenedFile {
   /** The weather table the project names, where the machine may read it. */
   readonly weather: OpenedFile | null;
+  /** Why the table that the project names was not read. */
+  readonly trouble?: string;
 }
 
 export interface RecentProject {
   readonly file: string;
-  /** Folder or moment, to tell two of the same name apart. */
+  /** Path or folder, to tell two of the same name apart. */
   readonly note: string;
 }
 

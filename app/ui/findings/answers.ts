@@ -1,6 +1,6 @@
 // The findings in their fixed order, as figures with a note; one list for the house, one for a room.
 
-import { type Calendar, figure, type Quantity, quantity, whenText } from '../format/index.ts';
+import { figure, type Quantity, quantity, stampText } from '../format/index.ts';
 import type { RoomTotals, Totals } from '../simulation.ts';
 
 export interface Answer {
@@ -27,18 +27,13 @@ const nameWhere = (
 };
 
 /** `rooms` are the rooms of a house, to say where an extreme lies; empty for a single room. */
-export function findAnswers(
-  totals: Totals,
-  rooms: readonly RoomTotals[],
-  calendar: Calendar,
-): Answer[] {
+export function findAnswers(totals: Totals, rooms: readonly RoomTotals[]): Answer[] {
   const power = rooms.length > 0 ? quantity.housePowerW : quantity.roomPowerW;
   const perArea = (kWh: number) => `${figure(kWh / totals.floorAreaM2)} kWh/m²`;
   const range = totals.operativeTemperatureC;
   const highestIn = nameWhere(rooms, (room) => room.operativeTemperatureC.max, range.max);
   const lowestIn = nameWhere(rooms, (room) => room.operativeTemperatureC.min, range.min);
   const isOccupied = totals.occupiedHours > 0;
-  const when = (at: Totals['peakHeatingAt']) => whenText(calendar, at);
   const answers: Answer[] = [
     {
       key: 'heating',
@@ -54,7 +49,7 @@ export function findAnswers(
       aside:
         totals.peakHeatingW > 0 ? `${figure(totals.peakHeatingW / totals.floorAreaM2)} W/m²` : '',
       quantity: power(totals.peakHeatingW),
-      note: totals.peakHeatingW > 0 ? when(totals.peakHeatingAt) : 'no heat was called for',
+      note: totals.peakHeatingW > 0 ? stampText(totals.peakHeatingAt) : 'no heat was called for',
       isMain: true,
     },
     {
@@ -76,7 +71,7 @@ export function findAnswers(
     {
       key: 'highest',
       name: `Highest${highestIn}`,
-      aside: when(range.maxAt),
+      aside: stampText(range.maxAt),
       quantity: quantity.temperatureC(range.max),
       note: '',
       isMain: false,
@@ -84,7 +79,7 @@ export function findAnswers(
     {
       key: 'lowest',
       name: `Lowest${lowestIn}`,
-      aside: when(range.minAt),
+      aside: stampText(range.minAt),
       quantity: quantity.temperatureC(range.min),
       note: '',
       isMain: false,
@@ -105,7 +100,7 @@ export function findAnswers(
       {
         key: 'peak-cooling',
         name: 'Peak cooling',
-        aside: when(totals.peakCoolingAt),
+        aside: stampText(totals.peakCoolingAt),
         quantity: power(totals.peakCoolingW),
         note: '',
         isMain: false,

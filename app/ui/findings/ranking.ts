@@ -1,7 +1,7 @@
 // The rooms ranked by one finding: what the whole-house table draws.
 
-import { type Calendar, figure, type Quantity, quantity, whenText } from '../format/index.ts';
-import type { RoomTotals, When } from '../simulation.ts';
+import { figure, type Quantity, quantity, stampText } from '../format/index.ts';
+import type { RoomTotals } from '../simulation.ts';
 import type { FigureKey } from '../state/index.ts';
 
 export interface FigureKind {
@@ -16,13 +16,12 @@ export interface FigureKind {
   readonly write: (value: number) => Quantity;
   /** The figure beside it, and its head. */
   readonly besideHead: string;
-  readonly beside: (room: RoomTotals, calendar: Calendar) => string;
+  readonly beside: (room: RoomTotals) => string;
   /** Rooms nobody is in have no hours outside a band. */
   readonly needsPeople: boolean;
 }
 
 const perM2 = (value: number, room: RoomTotals) => figure(value / room.floorAreaM2);
-const at = (when: When, calendar: Calendar) => whenText(calendar, when);
 
 export const figureKinds: readonly FigureKind[] = [
   {
@@ -46,9 +45,9 @@ export const figureKinds: readonly FigureKind[] = [
     of: (room) => room.peakHeatingW,
     write: quantity.roomPowerW,
     besideHead: 'W/m²; when',
-    beside: (room, calendar) =>
+    beside: (room) =>
       room.peakHeatingW > 0
-        ? `${perM2(room.peakHeatingW, room)}; ${at(room.peakHeatingAt, calendar)}`
+        ? `${perM2(room.peakHeatingW, room)}; ${stampText(room.peakHeatingAt)}`
         : 'none called for',
     needsPeople: false,
   },
@@ -85,7 +84,7 @@ export const figureKinds: readonly FigureKind[] = [
     of: (room) => room.operativeTemperatureC.max,
     write: quantity.temperatureC,
     besideHead: 'when',
-    beside: (room, calendar) => at(room.operativeTemperatureC.maxAt, calendar),
+    beside: (room) => stampText(room.operativeTemperatureC.maxAt),
     needsPeople: false,
   },
   {
@@ -97,7 +96,7 @@ export const figureKinds: readonly FigureKind[] = [
     of: (room) => room.operativeTemperatureC.min,
     write: quantity.temperatureC,
     besideHead: 'when',
-    beside: (room, calendar) => at(room.operativeTemperatureC.minAt, calendar),
+    beside: (room) => stampText(room.operativeTemperatureC.minAt),
     needsPeople: false,
   },
 ];

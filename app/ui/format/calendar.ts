@@ -85,9 +85,14 @@ export function hourSpan(calendar: Calendar, hour: number): string {
   return `${weekday ? `${weekday.slice(0, 3)} ` : ''}${date} ${month}, ${clock(hour)} to ${end}`;
 }
 
-/** `17 January, 07:00`, from an hour's index or from the engine's own words. */
-export function whenText(calendar: Calendar, when: number | string | null): string {
-  if (when === null) return '';
-  if (typeof when === 'string') return when;
+/** `17 January, 07:00` */
+export function hourText(calendar: Calendar, when: number): string {
   return `${dayText(calendar, when)}, ${clock(when)}`;
+}
+
+/** `17 January, 07:00` from the engine's `2025-01-17T07:00`; empty stays empty. */
+export function stampText(stamp: string): string {
+  const [, month, day, time] = /^\d{4}-(\d{2})-(\d{2})T(\d{2}:\d{2})$/.exec(stamp) ?? [];
+  const name = monthNames[Number(month) - 1];
+  return name ? `${Number(day)} ${name}, ${time}` : stamp;
 }

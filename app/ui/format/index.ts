@@ -4,10 +4,11 @@ export {
   clock,
   dayText,
   hourSpan,
+  hourText,
   type Month,
   makeCalendar,
   monthOf,
-  whenText,
+  stampText,
 } from './calendar.ts';
 export {
   difference,

@@ -15,7 +15,7 @@ function Marked({ text, typed }: { text: string; typed: string }) {
   return (
     <>
       {text.slice(0, at)}
-      <b>{text.slice(at, at + word.length)}</b>
+      <b className="typed">{text.slice(at, at + word.length)}</b>
       {text.slice(at + word.length)}
     </>
   );

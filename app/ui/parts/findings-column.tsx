@@ -3,7 +3,7 @@
 import { type Answer, type Caution, findAnswers, findCautions } from '../findings/index.ts';
 import { plain, quantity } from '../format/index.ts';
 import type { RoomTotals, Simulation } from '../simulation.ts';
-import { roomResult, useApp, useAppState, useCalendar } from '../state/index.ts';
+import { roomResult, useApp, useAppState } from '../state/index.ts';
 import { useAfter } from './run-progress.tsx';
 
 export function FindingsColumn({ simulation }: { simulation: Simulation }) {
@@ -14,15 +14,12 @@ export function FindingsColumn({ simulation }: { simulation: Simulation }) {
   const isDrawerOpen = useAppState((state) => state.isDrawerOpen);
   const run = useAppState((state) => state.run);
   const isWaiting = useAfter(run.kind === 'running', 150);
-  const calendar = useCalendar(simulation);
   const room = roomResult(simulation, roomId);
   const isRoom = screen === 'room' && room !== null;
   const { building, rooms } = simulation.findings;
-  const answers = isRoom
-    ? findAnswers(room.totals, [], calendar)
-    : findAnswers(building, rooms, calendar);
-  const concerned = isRoom ? { ...simulation, rooms: [room.series] } : simulation;
-  const cautions = findCautions(concerned, calendar);
+  const answers = isRoom ? findAnswers(room.totals, []) : findAnswers(building, rooms);
+  const concerned = isRoom ? [room.totals] : rooms;
+  const cautions = findCautions(concerned);
 
   return (
     <aside
@@ -32,7 +29,13 @@ export function FindingsColumn({ simulation }: { simulation: Simulation }) {
       data-region="findings"
       aria-busy={run.kind === 'running'}
     >
-      {isWaiting && <div className="hairline" aria-hidden="true" />}
+      {isWaiting && run.kind === 'running' && (
+        <div
+          className="hairline"
+          aria-hidden="true"
+          style={{ width: `${Math.max(4, run.share * 100)}%` }}
+        />
+      )}
       <div className="findings-head">
         <h2>{isRoom ? `Findings, ${room.totals.name}` : 'Findings'}</h2>
         <button
@@ -133,15 +136,12 @@ function SelectedRoom({ room }: { room: RoomTotals }) {
 /** The four main answers under the title, where the findings are a drawer. */
 export function AnswerStrip({ simulation }: { simulation: Simulation }) {
   const app = useApp();
-  const calendar = useCalendar(simulation);
   const screen = useAppState((state) => state.screen);
   const roomId = useAppState((state) => state.roomId);
   const isStale = useAppState((state) => state.isStale);
   const room = screen === 'room' ? roomResult(simulation, roomId) : null;
   const { building, rooms } = simulation.findings;
-  const answers = room
-    ? findAnswers(room.totals, [], calendar)
-    : findAnswers(building, rooms, calendar);
+  const answers = room ? findAnswers(room.totals, []) : findAnswers(building, rooms);
   return (
     <section className={isStale ? 'strip is-stale' : 'strip'} aria-label="Main findings">
       {answers

@@ -129,8 +129,9 @@ function MenuList({ name, onDone, onLeave }: MenuListProps) {
             <button
               key={command.id}
               type="button"
-              role={isOn === undefined ? 'menuitem' : 'menuitemcheckbox'}
-              aria-checked={isOn}
+              {...(isOn === undefined
+                ? { role: 'menuitem' }
+                : { role: 'menuitemcheckbox', 'aria-checked': isOn })}
               tabIndex={-1}
               disabled={!command.isEnabled(state)}
               onClick={() => {

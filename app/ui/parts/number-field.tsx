@@ -1,4 +1,5 @@
 import { type ReactNode, useId } from 'react';
+import { figure } from '../format/index.ts';
 
 export interface NumberFieldProps {
   readonly label: string;
@@ -36,7 +37,7 @@ export function NumberField(props: NumberFieldProps) {
       />
       <span className="unit">{unit}</span>
       <span id={`${id}-note`} className={isWrong ? 'field-wrong' : 'note'}>
-        {isWrong ? `Enter ${min} to ${max} ${unit}` : note}
+        {isWrong ? `Enter ${figure(min)} to ${figure(max)} ${unit}` : note}
       </span>
     </div>
   );

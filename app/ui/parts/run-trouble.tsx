@@ -1,12 +1,13 @@
 // What stands on the sheet when a run gave no result, or when there is none yet: one sentence and
 // what to do. The last result, if there is one, stays below it.
 
-import { useApp, useAppState } from '../state/index.ts';
+import { asksForSite, useApp, useAppState } from '../state/index.ts';
 import { FaultList } from './fault-list.tsx';
 
 export function RunTrouble() {
   const app = useApp();
   const run = useAppState((state) => state.run);
+  const isSite = useAppState(asksForSite);
   const hasWeather = useAppState((state) => state.weather !== null);
   const again = (
     <button type="button" className="button" onClick={() => void app.runYear()}>
@@ -14,9 +15,6 @@ export function RunTrouble() {
     </button>
   );
   if (run.kind === 'refused') {
-    const isSite = run.faults.some(
-      (fault) => 'path' in fault.place && fault.place.path.includes('site'),
-    );
     return (
       <section className="stop" aria-label="Not run" role="alert">
         <p>

@@ -35,7 +35,7 @@ const fields = [
 
 export function SiteDialog() {
   const app = useApp();
-  const known = useAppState((state) => state.site ?? state.simulation?.weather?.site ?? null);
+  const known = useAppState((state) => state.site);
   const file = useAppState((state) => state.weather?.file ?? 'the weather table');
   const nameId = useId();
   const [name, setName] = useState(known?.name ?? '');

@@ -42,7 +42,8 @@ export function StatusBar() {
             </span>
           )}
           <span>
-            Weather: {weather.place}, {figure(weather.hours)} h, {figure(weather.repairs)} repaired
+            Weather: {weather.place}, {figure(weather.hours)} h, {figure(weather.repairs.length)}{' '}
+            repairs and assumptions
           </span>
         </>
       )}

@@ -1,12 +1,11 @@
 // The whole house: the rooms ranked by the finding shown, the months, and the heat of the year.
 
-import { useMemo } from 'react';
 import { Drawing } from '../chart/drawing.tsx';
 import { FlowPicture, flowRows, flowText } from '../chart/flow-picture.tsx';
 import { noNames, PlotMarginContext } from '../chart/plot-margin.ts';
 import { figureKinds } from '../findings/index.ts';
 import { figure, hourSpan } from '../format/index.ts';
-import { flowsOfYear, houseFlowsOfHour, total } from '../series/year.ts';
+import { houseFlowsOfHour } from '../series/year.ts';
 import type { Simulation } from '../simulation.ts';
 import { useApp, useAppState, useCalendar } from '../state/index.ts';
 import { FigureTabs } from './figure-tabs.tsx';
@@ -20,17 +19,9 @@ export function House({ simulation }: { simulation: Simulation }) {
   const mark = useAppState((state) => state.mark);
   const kind = figureKinds.find((one) => one.key === figureKey) ?? figureKinds[0];
   const { building, rooms } = simulation.findings;
-  const heatingW = useMemo(
-    () => total(simulation.rooms.map((room) => room.heatingW)),
-    [simulation],
-  );
-  const coolingW = useMemo(
-    () => total(simulation.rooms.map((room) => room.coolingW)),
-    [simulation],
-  );
   const pinned = mark?.isPinned ? mark.hour : null;
-  const year = useMemo(() => flowsOfYear(simulation.rooms), [simulation]);
-  const flows = pinned === null ? year : houseFlowsOfHour(simulation, pinned);
+  const flows =
+    pinned === null ? { ...building.balanceKWh, rooms: 0 } : houseFlowsOfHour(simulation, pinned);
   const unit = pinned === null ? 'kWh' : 'W';
   if (!kind) return null;
 
@@ -48,13 +39,12 @@ export function House({ simulation }: { simulation: Simulation }) {
         onChoose={(key) => app.set({ figure: key })}
       />
       <div role="tabpanel" id="figure-panel" aria-labelledby={`tab-${kind.key}`}>
-        <RoomRanking kind={kind} rooms={rooms} series={simulation.rooms} calendar={calendar} />
+        <RoomRanking kind={kind} rooms={rooms} series={simulation.rooms} />
       </div>
       <MonthStrip
         calendar={calendar}
         rooms={simulation.rooms}
-        heatingW={heatingW}
-        coolingW={coolingW}
+        totals={building}
         mark={mark?.isPinned ? mark : null}
       />
       <Drawing

@@ -6,7 +6,7 @@ import { Drawing } from '../chart/drawing.tsx';
 import { evenUnits } from '../chart/measured-edge.ts';
 import { gridLines, hourMark, measuredEdge, type Painter, words } from '../chart/painter.ts';
 import { roundTicks, tickDecimals } from '../chart/ticks.ts';
-import { type Calendar, figure, plain, quantity, whenText } from '../format/index.ts';
+import { figure, plain, quantity, stampText } from '../format/index.ts';
 import { byDuration } from '../series/year.ts';
 import type { RoomSeries, RoomTotals } from '../simulation.ts';
 import type { HourMark } from '../state/index.ts';
@@ -14,7 +14,7 @@ import type { HourMark } from '../state/index.ts';
 export interface LoadDurationProps {
   readonly series: RoomSeries;
   readonly totals: RoomTotals;
-  readonly calendar: Calendar;
+  readonly hours: number;
   readonly mark: HourMark | null;
 }
 
@@ -29,7 +29,7 @@ function pointsOf(curve: Float64Array): Point[] {
   return points;
 }
 
-export function LoadDuration({ series, totals, calendar, mark }: LoadDurationProps) {
+export function LoadDuration({ series, totals, hours, mark }: LoadDurationProps) {
   const heating = useMemo(() => byDuration(series.heatingW), [series]);
   const cooling = useMemo(() => byDuration(series.coolingW), [series]);
   const heatingPoints = useMemo(() => pointsOf(heating), [heating]);
@@ -38,7 +38,7 @@ export function LoadDuration({ series, totals, calendar, mark }: LoadDurationPro
   const most = Math.max(heating[0] ?? 0, cooling[0] ?? 0) / 1000;
   const ticks = roundTicks(0, most || 1, 4);
   const decimals = tickDecimals(ticks);
-  const units = evenUnits(0, calendar.hours, 1000);
+  const units = evenUnits(0, hours, 1000);
 
   const nameCurve =
     (name: string, curve: Float64Array, color: 'heat-in' | 'heat-out'): Painter =>
@@ -70,10 +70,10 @@ export function LoadDuration({ series, totals, calendar, mark }: LoadDurationPro
   };
   const peaks = [
     totals.peakHeatingW > 0
-      ? `Peak heating ${plain(quantity.roomPowerW(totals.peakHeatingW))}, ${whenText(calendar, totals.peakHeatingAt)}`
+      ? `Peak heating ${plain(quantity.roomPowerW(totals.peakHeatingW))}, ${stampText(totals.peakHeatingAt)}`
       : 'No heating called for',
     totals.peakCoolingW > 0
-      ? `peak cooling ${plain(quantity.roomPowerW(totals.peakCoolingW))}, ${whenText(calendar, totals.peakCoolingAt)}`
+      ? `peak cooling ${plain(quantity.roomPowerW(totals.peakCoolingW))}, ${stampText(totals.peakCoolingAt)}`
       : '',
   ]
     .filter(Boolean)
@@ -97,7 +97,7 @@ export function LoadDuration({ series, totals, calendar, mark }: LoadDurationPro
       <ChartBox
         height={176}
         top={20}
-        x={{ min: 0, max: calendar.hours }}
+        x={{ min: 0, max: hours }}
         y={{ min: 0, max: ticks.at(-1) ?? 1 }}
         layers={[
           { kind: 'line', points: coolingPoints, color: (ink) => ink['heat-out'], width: 2.4 },

@@ -8,15 +8,14 @@ import { gridLines, hourMark, measuredEdge, type Painter, words } from '../chart
 import { usePlotMargin } from '../chart/plot-margin.ts';
 import { roundTicks } from '../chart/ticks.ts';
 import { type Calendar, figure } from '../format/index.ts';
-import { monthlyHours, monthlyKWh } from '../series/year.ts';
-import type { RoomSeries } from '../simulation.ts';
+import { monthlyHours } from '../series/year.ts';
+import type { RoomSeries, Totals } from '../simulation.ts';
 import type { HourMark } from '../state/index.ts';
 
 export interface MonthStripProps {
   readonly calendar: Calendar;
   readonly rooms: readonly RoomSeries[];
-  readonly heatingW: Float64Array;
-  readonly coolingW: Float64Array;
+  readonly totals: Totals;
   readonly mark: HourMark | null;
 }
 
@@ -28,12 +27,12 @@ const atLeft =
       words(view, line, 0, y, view.ink['ink-2']);
     });
 
-export function MonthStrip({ calendar, rooms, heatingW, coolingW, mark }: MonthStripProps) {
+export function MonthStrip({ calendar, rooms, totals, mark }: MonthStripProps) {
   const { months, hours } = calendar;
   const margin = usePlotMargin();
   const marked: Painter[] = mark ? [hourMark(mark.hour + 0.5, '', mark.isPinned)] : [];
-  const heating = useMemo(() => monthlyKWh(heatingW, months), [heatingW, months]);
-  const cooling = useMemo(() => monthlyKWh(coolingW, months), [coolingW, months]);
+  const heating = totals.heatingByMonthKWh;
+  const cooling = totals.coolingByMonthKWh;
   const above = useMemo(() => monthlyHours(rooms, months, 1), [rooms, months]);
   const below = useMemo(() => monthlyHours(rooms, months, -1), [rooms, months]);
   const hasCooling = cooling.some((kWh) => kWh > 0);
@@ -43,11 +42,12 @@ export function MonthStrip({ calendar, rooms, heatingW, coolingW, mark }: MonthS
     kind: 'bar',
     width: hasCooling ? 20 : 40,
     color,
-    points: values.map((y, i) => {
-      const month = months[i];
-      const middle = month ? (month.firstHour + month.endHour) / 2 : 0;
-      return { x: middle + shift, y };
-    }),
+    points: months
+      .map((month, i) => ({
+        x: (month.firstHour + month.endHour) / 2 + shift,
+        y: values[i] ?? 0,
+      }))
+      .filter(({ y }) => y > 0),
   });
   const half = hasCooling ? 150 : 0;
   const sum = (values: readonly number[]) => figure(values.reduce((all, one) => all + one, 0));
@@ -99,7 +99,7 @@ export function MonthStrip({ calendar, rooms, heatingW, coolingW, mark }: MonthS
         ]}
         under={[gridLines(ticks.slice(1), (tick) => figure(tick), 'kWh')]}
         over={[
-          atLeft([hasCooling ? 'Heat, cold' : 'Heating'], 'bottom'),
+          atLeft([hasCooling ? 'Each way' : 'Heating'], 'bottom'),
           measuredEdge(monthUnits(months)),
           ...marked,
         ]}

@@ -1,32 +1,19 @@
 import { figure } from '../format/index.ts';
 import type { Simulation } from '../simulation.ts';
 
-/** `53.40° N` */
-function degrees(value: number, positive: string, negative: string): string {
-  return `${figure(Math.abs(value), 2)}° ${value < 0 ? negative : positive}`;
-}
-
 /** One line of what was found in the table. */
 export function ReadingFacts({ simulation }: { simulation: Simulation }) {
-  const { weather, findings } = simulation;
-  const facts: (readonly [string, string])[] = [['Place', findings.weather.place]];
-  if (weather) {
-    const { site, form } = weather;
-    facts.push(
-      ['Latitude', degrees(site.latitudeDeg, 'N', 'S')],
-      ['Longitude', degrees(site.longitudeDeg, 'E', 'W')],
-      ['Elevation', `${figure(site.elevationM)} m`],
-      [
-        'Clock',
-        `UTC ${site.utcOffsetH < 0 ? '\u2212' : '+'} ${figure(Math.abs(site.utcOffsetH), site.utcOffsetH % 1 ? 1 : 0)}`,
-      ],
-      ['Form', form],
-    );
-  }
-  facts.push(
-    ['Hours', figure(findings.weather.hours)],
-    ['Repaired', figure(findings.weather.repairs)],
-  );
+  const { weather } = simulation.findings;
+  const count = (kind: 'repair' | 'assumption') =>
+    weather.repairs.filter((one) => one.kind === kind).reduce((sum, one) => sum + one.count, 0);
+  const facts: readonly (readonly [string, string])[] = [
+    ['Place', weather.place],
+    ['Form', weather.form],
+    ['Calendar', String(simulation.year)],
+    ['Hours', figure(weather.hours)],
+    ['Values repaired', figure(count('repair'))],
+    ['Values assumed', figure(count('assumption'))],
+  ];
   return (
     <dl className="facts">
       {facts.map(([name, value]) => (
@@ -41,7 +28,8 @@ export function ReadingFacts({ simulation }: { simulation: Simulation }) {
 
 /** Everything that was mended or assumed, in one list; nothing is hidden. */
 export function ReadingNotes({ simulation }: { simulation: Simulation }) {
-  const { weatherNotes, assumptions } = simulation;
+  const { weather, assumptions } = simulation.findings;
+  const weatherNotes = weather.repairs;
   const repairs = weatherNotes.filter((one) => one.kind === 'repair');
   const assumed = weatherNotes.filter((one) => one.kind === 'assumption');
   return (

@@ -7,7 +7,7 @@ import { roundTicks, tickDecimals } from '../chart/ticks.ts';
 import { useWidth } from '../chart/use-width.ts';
 import { carpetBand } from '../chart/warm-step.ts';
 import { type FigureKind, rankRooms } from '../findings/index.ts';
-import { type Calendar, figure } from '../format/index.ts';
+import { figure } from '../format/index.ts';
 import type { RoomSeries, RoomTotals } from '../simulation.ts';
 import { useApp, useAppState } from '../state/index.ts';
 
@@ -15,7 +15,6 @@ export interface RoomRankingProps {
   readonly kind: FigureKind;
   readonly rooms: readonly RoomTotals[];
   readonly series: readonly RoomSeries[];
-  readonly calendar: Calendar;
 }
 
 interface Scale {
@@ -49,7 +48,7 @@ function bandOf(series: readonly RoomSeries[], id: string): readonly [number, nu
 /** Step 1 to 5 of the ramp by the share of the largest. */
 const rampStep = (share: number) => Math.min(5, Math.max(1, Math.ceil(share * 5)));
 
-export function RoomRanking({ kind, rooms, series, calendar }: RoomRankingProps) {
+export function RoomRanking({ kind, rooms, series }: RoomRankingProps) {
   const app = useApp();
   const roomId = useAppState((state) => state.roomId);
   const [box, width] = useWidth<HTMLDivElement>(360);
@@ -132,9 +131,7 @@ export function RoomRanking({ kind, rooms, series, calendar }: RoomRankingProps)
               </div>
             </td>
             <td className="number strong">{kind.write(value).figure}</td>
-            <td className="number quiet">
-              {Number.isNaN(value) ? '' : kind.beside(room, calendar)}
-            </td>
+            <td className="number quiet">{Number.isNaN(value) ? '' : kind.beside(room)}</td>
             <td className="number quiet">{figure(room.floorAreaM2, 1)}</td>
           </tr>
         ))}

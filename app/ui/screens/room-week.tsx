@@ -5,6 +5,7 @@ import { ChartBox, type Point } from '../chart/chart-box.tsx';
 import { Drawing } from '../chart/drawing.tsx';
 import { HourSlider } from '../chart/hour-slider.tsx';
 import { useInk } from '../chart/ink.ts';
+import { clearestEnd } from '../chart/label-place.ts';
 import { dayUnits } from '../chart/measured-edge.ts';
 import {
   bandArea,
@@ -57,6 +58,9 @@ export function hourText(series: RoomSeries, outdoorC: Float64Array | null, hour
   return `${plain(quantity.temperatureC(t))}${where}${outside}`;
 }
 
+/** About the width of the band's label on a plot of usual width. */
+const labelHours = 34;
+
 const minOf = (...series: Float64Array[]) => Math.min(...series.map((one) => Math.min(...one)));
 const maxOf = (...series: Float64Array[]) => Math.max(...series.map((one) => Math.max(...one)));
 
@@ -96,11 +100,7 @@ export function RoomWeek(props: RoomTimeProps & { readonly simulation: Simulatio
   const markedDay = isInside ? Math.floor((mark.hour - firstHour) / 24) : -1;
   const lastOf = (values: Float64Array) => values[values.length - 1];
   const bandWords = bandText(limits);
-  const lowest = Math.min(...(limits[0] ?? []));
-  const bandAt = Math.max(
-    0,
-    low.findLastIndex((value) => !Number.isNaN(value)),
-  );
+  const bandAt = clearestEnd(low, [operative, outside], labelHours);
   const isAirApart = Math.abs(lastOf(air) - lastOf(operative)) > 0.3;
 
   return (
@@ -156,8 +156,8 @@ export function RoomWeek(props: RoomTimeProps & { readonly simulation: Simulatio
                   note(
                     bandWords,
                     {
-                      x: firstHour + bandAt + 0.5,
-                      y: lowest + (ticks.at(-1) ?? 1) * 0.012,
+                      x: firstHour + bandAt + 1,
+                      y: low[bandAt] + ((ticks.at(-1) ?? 1) - (ticks[0] ?? 0)) * 0.018,
                       align: 'right',
                     },
                     (i) => i['band-ink'],

@@ -4,7 +4,7 @@ import { useMemo } from 'react';
 import { Drawing } from '../chart/drawing.tsx';
 import { FlowPicture, flowRows, flowText } from '../chart/flow-picture.tsx';
 import { figure, hourSpan } from '../format/index.ts';
-import { flowsOfHour, flowsOfYear, weekAt, weeksOf, worstWeek } from '../series/year.ts';
+import { flowsOfHour, weekAt, weeksOf, worstWeek } from '../series/year.ts';
 import type { Simulation } from '../simulation.ts';
 import { type RoomResult, useApp, useAppState, useCalendar } from '../state/index.ts';
 import { LoadDuration } from './load-duration.tsx';
@@ -48,8 +48,7 @@ export function Room({ simulation, room }: RoomProps) {
   };
   const letGo = () => app.set({ mark: null });
 
-  const year = useMemo(() => flowsOfYear([series]), [series]);
-  const flows = mark ? flowsOfHour(series, mark.hour) : year;
+  const flows = mark ? flowsOfHour(series, mark.hour) : totals.balanceKWh;
   const unit = mark ? 'W' : 'kWh';
   const occupied =
     totals.occupiedHours > 0 ? `occupied ${figure(totals.occupiedHours)} h a year` : 'not occupied';
@@ -107,14 +106,8 @@ export function Room({ simulation, room }: RoomProps) {
       >
         <FlowPicture flows={flows} unit={unit} name={series.name} />
       </Drawing>
-      <MonthStrip
-        calendar={calendar}
-        rooms={[series]}
-        heatingW={series.heatingW}
-        coolingW={series.coolingW}
-        mark={mark}
-      />
-      <LoadDuration series={series} totals={totals} calendar={calendar} mark={mark} />
+      <MonthStrip calendar={calendar} rooms={[series]} totals={totals} mark={mark} />
+      <LoadDuration series={series} totals={totals} mark={mark} hours={calendar.hours} />
     </>
   );
 }

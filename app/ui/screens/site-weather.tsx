@@ -12,7 +12,7 @@ import { RampKey } from '../chart/ramp-key.tsx';
 import { roundTicks } from '../chart/ticks.ts';
 import { stepByCuts } from '../chart/warm-step.ts';
 import { YearCarpet } from '../chart/year-carpet.tsx';
-import { figure, whenText } from '../format/index.ts';
+import { figure, hourText } from '../format/index.ts';
 import type { Simulation } from '../simulation.ts';
 import { useApp, useAppState, useCalendar } from '../state/index.ts';
 import { ReadingFacts, ReadingNotes } from './reading.tsx';
@@ -66,7 +66,7 @@ export function SiteWeather({ simulation }: { simulation: Simulation }) {
       figure(t.high, 1),
     ]);
   const table = { columns: ['Month', 'Lowest, °C', 'Mean, °C', 'Highest, °C'], rows };
-  const words = `Coldest ${figure(outdoorC[coldest], 1)} °C on ${whenText(calendar, coldest)}, mean ${figure(mean, 1)}, hottest ${figure(outdoorC[hottest], 1)} °C on ${whenText(calendar, hottest)}`;
+  const words = `Coldest ${figure(outdoorC[coldest], 1)} °C on ${hourText(calendar, coldest)}, mean ${figure(mean, 1)}, hottest ${figure(outdoorC[hottest], 1)} °C on ${hourText(calendar, hottest)}`;
   const ranges: Painter = ({ ctx, x, y, ink }) => {
     ctx.fillStyle = ink['ink-2'];
     days.forEach(({ low, high }, day) => {
@@ -85,9 +85,6 @@ export function SiteWeather({ simulation }: { simulation: Simulation }) {
         <h1>Site and weather</h1>
         <span className="quiet">{weather?.file}</span>
         <span className="sheet-acts">
-          <button type="button" className="button" onClick={() => app.set({ dialog: 'site' })}>
-            Give the site
-          </button>
           <button type="button" className="button" onClick={() => void app.openWeather()}>
             Read another table
           </button>

@@ -21,11 +21,13 @@ export function Waiting({ screen, onWeather }: { screen: Screen; onWeather: () =
   const sentence =
     run.kind === 'running'
       ? 'The year is being computed; the drawing fills when it is done.'
-      : project === null
-        ? 'No project yet, so no temperatures.'
-        : weather === null
-          ? 'No weather yet, so no temperatures.'
-          : 'No result yet. Run the year to fill this.';
+      : run.kind === 'refused'
+        ? 'Not run. The faults are listed above.'
+        : project === null
+          ? 'No project yet, so no findings.'
+          : weather === null
+            ? 'No weather yet, so no findings.'
+            : 'No result yet. Run the year to fill this.';
   const calendar = makeCalendar(8760);
   return (
     <>
@@ -37,8 +39,8 @@ export function Waiting({ screen, onWeather }: { screen: Screen; onWeather: () =
             height={180}
             layers={[]}
             x={{ min: 0, max: calendar.hours }}
-            y={{ min: 0, max: 20 }}
-            under={[gridLines([0, 10, 20], (tick) => figure(tick), '°C')]}
+            y={{ min: 0, max: 1000 }}
+            under={[gridLines([0, 500, 1000], (tick) => figure(tick), 'kWh')]}
             over={[measuredEdge(monthUnits(calendar.months))]}
           />
           <p>

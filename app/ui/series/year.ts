@@ -5,15 +5,6 @@ import type { Month } from '../format/index.ts';
 import type { RoomSeries, Simulation, Stream } from '../simulation.ts';
 import { streams } from '../simulation.ts';
 
-/** kWh of each month from hourly means in watts. */
-export function monthlyKWh(watts: Float64Array, months: readonly Month[]): number[] {
-  return months.map((month) => {
-    let sum = 0;
-    for (let h = month.firstHour; h < month.endHour; h++) sum += watts[h];
-    return sum / 1000;
-  });
-}
-
 /** Whether an occupied hour lies outside its band, and on which side. */
 export function outsideBand(room: RoomSeries, hour: number): -1 | 0 | 1 {
   if (!room.occupied[hour]) return 0;
@@ -31,12 +22,6 @@ export function monthlyHours(rooms: readonly RoomSeries[], months: readonly Mont
     }
     return count;
   });
-}
-
-export function total(series: readonly Float64Array[]): Float64Array {
-  const sum = new Float64Array(series[0]?.length ?? 0);
-  for (const one of series) for (let h = 0; h < sum.length; h++) sum[h] += one[h];
-  return sum;
 }
 
 /** Largest first: value i was reached or passed in i + 1 hours. */
@@ -113,15 +98,3 @@ const flowsOfNothing: Flows = {
   ...(Object.fromEntries(streams.map((key) => [key, 0])) as Record<Stream, number>),
   storage: 0,
 };
-
-/** Heat of the year in kWh, over one room or several together. */
-export function flowsOfYear(rooms: readonly RoomSeries[]): Flows {
-  const sum: Record<Stream | 'storage', number> = { ...flowsOfNothing };
-  for (const key of [...streams, 'storage'] as const) {
-    for (const room of rooms) {
-      const watts = room.flowsW[key];
-      for (let h = 0; h < watts.length; h++) sum[key] += watts[h] / 1000;
-    }
-  }
-  return rooms.length > 1 ? { ...sum, rooms: 0 } : sum;
-}

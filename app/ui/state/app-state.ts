@@ -51,6 +51,16 @@ export interface AppState {
   readonly notice: string | null;
 }
 
+/** Whether the run was refused because nobody says where the table was measured. */
+export function asksForSite({ run, site }: AppState): boolean {
+  if (site) return true;
+  if (run.kind !== 'refused') return false;
+  return run.faults.some(({ place, expected, mend }) => {
+    const where = 'path' in place ? place.path : place.column;
+    return /\b(site|latitude|longitude|utc)/i.test(`${where} ${expected} ${mend}`);
+  });
+}
+
 export const firstState: AppState = {
   project: null,
   weather: null,

@@ -10,7 +10,7 @@ import { type AppState, firstState, type Screen } from './app-state.ts';
 export interface RunInput {
   readonly projectText: string;
   readonly projectFile: string;
-  readonly weather: OpenedFile | null;
+  readonly weather: OpenedFile;
   /** Stands in for the site where the table has none. */
   readonly site: Site | null;
 }
@@ -51,11 +51,11 @@ export function createApp(desk: Desk, runYear: RunYear, start: Partial<AppState>
 
   async function run() {
     const { project, weather, site } = get();
-    if (!project) return;
+    if (!project || !weather) return;
     running?.abort();
     const mine = new AbortController();
     running = mine;
-    set({ run: { kind: 'running', share: 0, stage: 'Reading' }, notice: null });
+    set({ run: { kind: 'running', share: 0, stage: 'reading' } });
     const isCurrent = () => running === mine;
     try {
       const outcome = await runYear(
@@ -76,6 +76,7 @@ export function createApp(desk: Desk, runYear: RunYear, start: Partial<AppState>
         simulation: outcome.simulation,
         isStale: false,
         run: { kind: 'idle' },
+        notice: null,
         roomId: isKnown ? roomId : (rooms[0]?.id ?? null),
         screen: screen === 'welcome' ? 'house' : screen,
       });
@@ -98,6 +99,8 @@ export function createApp(desk: Desk, runYear: RunYear, start: Partial<AppState>
       weeks: {},
       roomId: null,
       screen: 'house',
+      run: { kind: 'idle' },
+      notice: opened.trouble ?? null,
     });
     void run();
   }

@@ -15,6 +15,7 @@ export type {
   Scheme,
   Screen,
 } from './app-state.ts';
+export { asksForSite } from './app-state.ts';
 export {
   AppContext,
   type RoomResult,

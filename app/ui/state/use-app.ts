@@ -21,7 +21,7 @@ export function useAppState<T>(select: (state: AppState) => T): T {
 
 export function useCalendar(simulation: Simulation | null): Calendar {
   const hours = simulation?.hours ?? 8760;
-  const year = simulation?.weather?.year;
+  const year = simulation?.year;
   return useMemo(() => makeCalendar(hours, year), [hours, year]);
 }
 

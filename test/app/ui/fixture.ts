@@ -1,15 +1,16 @@
 // An invented simulation for drawing and for tests of the window: plausible in shape, computed by no
 // engine. Four rooms, a mild sea climate, one hot spell in July.
 
+import { makeCalendar } from '../../../app/ui/format/index.ts';
 import type {
   RoomSeries,
   RoomTotals,
   Simulation,
   Stream,
-  TemperatureRange,
   Totals,
 } from '../../../app/ui/simulation.ts';
 import { streams } from '../../../app/ui/simulation.ts';
+import { hourName } from '../../../engine/index.ts';
 
 interface Sketch {
   readonly id: string;
@@ -63,6 +64,11 @@ function outdoor(hours: number): Float64Array {
   });
 }
 
+type TemperatureRange = Totals['airTemperatureC'];
+
+const fixtureYear = 2023;
+const stamp = (hour: number, hours: number) => hourName(hour, hours, fixtureYear);
+
 function range(series: Float64Array): TemperatureRange {
   let minAt = 0;
   let maxAt = 0;
@@ -72,12 +78,25 @@ function range(series: Float64Array): TemperatureRange {
     if (t < series[minAt]) minAt = h;
     if (t > series[maxAt]) maxAt = h;
   });
-  return { min: series[minAt], max: series[maxAt], mean: sum / series.length, minAt, maxAt };
+  return {
+    min: series[minAt],
+    max: series[maxAt],
+    mean: sum / series.length,
+    minAt: stamp(minAt, series.length),
+    maxAt: stamp(maxAt, series.length),
+  };
 }
 
 const indexOfMost = (series: Float64Array) =>
   series.reduce((best, value, h) => (value > series[best] ? h : best), 0);
 const sumOf = (series: Float64Array) => series.reduce((sum, value) => sum + value, 0);
+
+const sketchLimit = (id: string) => sketches.find((one) => one.id === id)?.limitW ?? Infinity;
+
+const byMonth = (watts: Float64Array) =>
+  makeCalendar(watts.length, fixtureYear).months.map(
+    (month) => sumOf(watts.subarray(month.firstHour, month.endHour)) / 1000,
+  );
 
 function makeRoom(sketch: Sketch, outdoorC: Float64Array): RoomSeries {
   const hours = outdoorC.length;
@@ -165,9 +184,9 @@ function totalsOf(room: RoomSeries): RoomTotals {
     heatingKWh: kWh('heating'),
     coolingKWh: 0,
     peakHeatingW: room.heatingW[peakHeatingAt],
-    peakHeatingAt,
+    peakHeatingAt: stamp(peakHeatingAt, room.heatingW.length),
     peakCoolingW: 0,
-    peakCoolingAt: null,
+    peakCoolingAt: '',
     airTemperatureC: range(room.airC),
     operativeTemperatureC: range(room.operativeC),
     occupiedHours: room.occupied.reduce((sum, isIn) => sum + isIn, 0),
@@ -175,6 +194,15 @@ function totalsOf(room: RoomSeries): RoomTotals {
     hoursAboveBand: above,
     degreeHoursBelow: degreeBelow,
     degreeHoursAbove: degreeAbove,
+    heatingByMonthKWh: byMonth(room.heatingW),
+    coolingByMonthKWh: byMonth(room.coolingW),
+    worstWeekBelow: null,
+    worstWeekAbove: null,
+    hoursHeatingShort: room.heatingW.reduce(
+      (count, w, h) => count + (w >= sketchLimit(room.id) && room.operativeC[h] < 18 ? 1 : 0),
+      0,
+    ),
+    hoursCoolingShort: 0,
     balanceKWh: {
       ...(Object.fromEntries(into) as Record<Stream, number>),
       storage: kWh('storage'),
@@ -201,9 +229,9 @@ function houseOf(rooms: readonly RoomSeries[], totals: readonly RoomTotals[]): T
     heatingKWh: sum((room) => room.heatingKWh),
     coolingKWh: 0,
     peakHeatingW: together[peakHeatingAt],
-    peakHeatingAt,
+    peakHeatingAt: stamp(peakHeatingAt, together.length),
     peakCoolingW: 0,
-    peakCoolingAt: null,
+    peakCoolingAt: '',
     airTemperatureC: pick('airTemperatureC'),
     operativeTemperatureC: pick('operativeTemperatureC'),
     occupiedHours: sum((room) => room.occupiedHours),
@@ -211,9 +239,11 @@ function houseOf(rooms: readonly RoomSeries[], totals: readonly RoomTotals[]): T
     hoursAboveBand: sum((room) => room.hoursAboveBand),
     degreeHoursBelow: sum((room) => room.degreeHoursBelow),
     degreeHoursAbove: sum((room) => room.degreeHoursAbove),
+    heatingByMonthKWh: byMonth(together),
+    coolingByMonthKWh: byMonth(new Float64Array(together.length)),
     balanceKWh: Object.fromEntries(
       keys.map((key) => [key, sum((room) => room.balanceKWh[key])]),
-    ) as Totals['balanceKWh'],
+    ) as unknown as Totals['balanceKWh'], // one entry a key of the list above
   };
 }
 
@@ -224,42 +254,43 @@ export function makeSimulation(hours = 8760): Simulation {
   return {
     findings: {
       project: 'Saltmarsh Row 3',
-      weather: { place: 'Brackwater', hours, repairs: 6 },
+      weather: {
+        place: 'Brackwater',
+        form: 'plain table, one row an hour',
+        hours,
+        repairs: [
+          {
+            kind: 'repair',
+            text: 'Gap of 6 h on 14 August, 02:00 to 08:00, filled from the hours beside it',
+            count: 6,
+          },
+          {
+            kind: 'assumption',
+            text: 'No infrared from the sky in the table: derived from dew point and cloud',
+            count: 8760,
+          },
+        ],
+      },
       stepMinutes: 15,
       rooms: totals,
       building: houseOf(rooms, totals),
-      quality: { relativeBalanceResidual: 3.1e-12, unconvergedSteps: 0, warmUpDays: 14 },
+      assumptions: [
+        'Ground reflectance 0.2 all year: the weather table has none',
+        'Outside walls: absorptance 0.6, as the project gives none',
+      ],
+      cautions: [],
+      quality: {
+        relativeBalanceResidual: 3.1e-12,
+        unconvergedSteps: 0,
+        warmUpDays: 14,
+        warmUpDriftK: 0.004,
+        nodes: 96,
+      },
       timings: { readMs: 92, assembleMs: 11, runMs: 214 },
     },
     hours,
+    year: fixtureYear,
     outdoorC,
     rooms,
-    weatherNotes: [
-      {
-        kind: 'repair',
-        text: 'Gap of 6 h on 14 August, 02:00 to 08:00, filled from the hours beside it',
-        count: 6,
-      },
-      {
-        kind: 'assumption',
-        text: 'No infrared from the sky in the table: derived from dew point and cloud',
-        count: 8760,
-      },
-    ],
-    assumptions: [
-      'Ground reflectance 0.2 all year: the weather table has none',
-      'Outside walls: absorptance 0.6, as the project gives none',
-    ],
-    weather: {
-      site: {
-        name: 'Brackwater',
-        latitudeDeg: 53.4,
-        longitudeDeg: -2.1,
-        elevationM: 12,
-        utcOffsetH: 0,
-      },
-      form: 'plain table, one row an hour',
-      year: 2023,
-    },
   };
 }

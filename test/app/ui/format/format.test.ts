@@ -4,11 +4,12 @@ import {
   duration,
   figure,
   hourSpan,
+  hourText,
   makeCalendar,
   plain,
   powerOfTen,
   quantity,
-  whenText,
+  stampText,
 } from '../../../../app/ui/format/index.ts';
 
 test('thousands have a comma and the minus is a minus sign', () => {
@@ -48,7 +49,7 @@ test('a small share is written as a power of ten', () => {
 test('an hour is named by weekday, date and clock', () => {
   const hour = 198 * 24 + 16;
   expect(hourSpan(makeCalendar(8760, 2025), hour)).toBe('Fri 18 July, 16:00 to 17:00');
-  expect(whenText(makeCalendar(8760), hour)).toBe('18 July, 16:00');
+  expect(hourText(makeCalendar(8760), hour)).toBe('18 July, 16:00');
 });
 
 test('the last hour of a day ends at 24:00', () => {
@@ -58,4 +59,9 @@ test('the last hour of a day ends at 24:00', () => {
 test('a run time is in milliseconds or seconds', () => {
   expect(duration(42)).toBe('42 ms');
   expect(duration(214)).toBe('0.21 s');
+});
+
+test("the engine's stamp reads as a date, and no stamp stays empty", () => {
+  expect(stampText('2025-01-17T07:00')).toBe('17 January, 07:00');
+  expect(stampText('')).toBe('');
 });

@@ -4,7 +4,6 @@ import {
   byDuration,
   houseFlowsOfHour,
   monthlyHours,
-  monthlyKWh,
   weekAt,
   weeksOf,
   worstWeek,
@@ -12,12 +11,6 @@ import {
 import { makeSimulation } from '../fixture.ts';
 
 const { months } = makeCalendar(8760, 2023);
-
-test('a steady kilowatt is 744 kWh in January and 8,760 kWh in the year', () => {
-  const kWh = monthlyKWh(new Float64Array(8760).fill(1000), months);
-  expect(kWh[0]).toBeCloseTo(744, 9);
-  expect(kWh.reduce((sum, month) => sum + month, 0)).toBeCloseTo(8760, 9);
-});
 
 test('hours above the band by month add up to the finding of the year', () => {
   const { rooms, findings } = makeSimulation();
