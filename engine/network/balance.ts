@@ -24,6 +24,9 @@ export interface Balance {
   /** Capacity of each slot that stores [J/K]. */
   readonly storing: Int32Array;
   readonly capacityJPerK: Float64Array;
+  /** Capacities and conductances to the boundary in all [J/K, W/K]: they set what counts as no flow. */
+  readonly totalJPerK: number;
+  readonly totalWPerK: number;
   /** Running sums of a step [W]. */
   inW: number;
   throughputW: number;
@@ -91,6 +94,8 @@ export function compileBalance(stage: Stage): Balance {
     ),
     storing: Int32Array.from(storing),
     capacityJPerK: Float64Array.from(capacity),
+    totalJPerK: capacity.reduce((a, b) => a + b, 0),
+    totalWPerK: crossing.reduce((a, c) => a + c[2], 0),
     inW: 0,
     throughputW: 0,
   };
@@ -166,7 +171,17 @@ function memberGainW(stage: Stage, m: number, x: Float64Array): number {
   return q;
 }
 
-/** Closes a step: imbalance over throughput (or over what was stored, where that is more). Resets the sums. */
+/**
+ * Below this change of the whole network a step counts as this much [K]: a double near 20 °C is known
+ * to 4e-15 K, so that a smaller change cannot be balanced to 1e-9.
+ */
+const stillK = 1e-5;
+
+/**
+ * Closes a step: imbalance over throughput (or over what stores took up and gave, where that is more,
+ * or over a change of all temperatures by `stillK`, so that a network at rest is not judged by its
+ * rounding). Resets the sums.
+ */
 export function closeStep(
   balance: Balance,
   start: Float64Array,
@@ -182,7 +197,8 @@ export function closeStep(
     moved += Math.abs(q);
   }
   const imbalance = Math.abs(balance.inW - stored / stepS);
-  const through = Math.max(balance.throughputW, moved / stepS);
+  const still = stillK * (balance.totalJPerK / stepS + balance.totalWPerK);
+  const through = Math.max(balance.throughputW, moved / stepS, still);
   balance.inW = 0;
   balance.throughputW = 0;
   return through > 0 ? imbalance / through : 0;

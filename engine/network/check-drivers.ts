@@ -41,8 +41,8 @@ export function checkDrivers(problem: Problem): Breach[] {
   const breaches: Breach[] = [];
   const say = (text: string, nodes: readonly string[] = []) => breaches.push({ text, nodes });
 
-  const mayBeInfinite = new Set(network.plants.flatMap((p) => [p.setPointSeries, p.maxSeries]));
-  const finiteToo = new Set<number>([
+  // Set-points and greatest powers may be infinite; what drives flows may not.
+  const finite = new Set<number>([
     ...network.boundarySeries,
     ...network.sources.series,
     ...network.directed.series,
@@ -54,7 +54,7 @@ export function checkDrivers(problem: Problem): Breach[] {
     if (group.law === 'mixed-film') for (const s of group.forcedSeries) scaling.add(s);
   }
   series.forEach((s, i) => {
-    const infinite = mayBeInfinite.has(i) && !finiteToo.has(i) && !scaling.has(i);
+    const infinite = !finite.has(i) && !scaling.has(i);
     const least = scaling.has(i) ? 0 : -Infinity;
     const bad = s.values.findIndex(
       (v) => !(infinite ? !Number.isNaN(v) : Number.isFinite(v)) || v < least,

@@ -148,11 +148,15 @@ export function nextMode(units: UnitsState, u: number, x: Float64Array): number 
   const { mode, low, zero, high, heatC, coolC, row, bandK } = units;
   const s = sensorC(units, u, x);
   if (bandK[u] > 0) {
-    const centre = units.heatSeries[u] >= 0 ? heatC[u] : coolC[u];
+    // Over the line on the way from none to full: each exchange goes to the neighbouring branch.
+    const heating = units.heatSeries[u] >= 0;
+    const below = heating ? heatC[u] - s : s - coolC[u]; // how far the room is from satisfied
     const half = bandK[u] / 2;
-    if (units.heatSeries[u] >= 0)
-      return s < centre - half ? heatFull : s > centre + half ? off : line;
-    return s > centre + half ? coolFull : s < centre - half ? off : line;
+    const full = heating ? heatFull : coolFull;
+    if (mode[u] === off) return below > -half + slackK ? line : off;
+    if (mode[u] === full) return below < half - slackK ? line : full;
+    if (below > half + slackK) return full;
+    return below < -half - slackK ? off : line;
   }
   const power = x[row[u]];
   const heats = heatC[u] > -Infinity && units.heaterMaxW[u] > 0;

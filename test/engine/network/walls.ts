@@ -1,11 +1,9 @@
 // Layered walls as chains of nodes, for tests: finite volumes with a node on every slice boundary.
 
-export interface Layer {
-  readonly d: number;
-  readonly lambda: number;
-  readonly rho: number;
-  readonly c: number;
-}
+/** A massive layer, or an air layer that only resists. */
+export type Layer =
+  | { readonly d: number; readonly lambda: number; readonly rho: number; readonly c: number }
+  | { readonly R: number };
 
 /** Growing lists of a hand-written network. */
 export interface Draft {
@@ -27,7 +25,14 @@ export function addWall(
   slices: number,
 ): number[] {
   const nodes = [addNode(draft, 0)];
-  for (const { d, lambda, rho, c } of layers) {
+  for (const layer of layers) {
+    if ('R' in layer) {
+      const last = nodes[nodes.length - 1];
+      nodes.push(addNode(draft, 0));
+      draft.links.push([last, nodes[nodes.length - 1], areaM2 / layer.R]);
+      continue;
+    }
+    const { d, lambda, rho, c } = layer;
     const dx = d / slices;
     for (let s = 0; s < slices; s++) {
       const half = (rho * c * areaM2 * dx) / 2;
