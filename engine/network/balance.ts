@@ -24,7 +24,7 @@ export interface Balance {
   /** Capacity of each slot that stores [J/K]. */
   readonly storing: Int32Array;
   readonly capacityJPerK: Float64Array;
-  /** Capacities and conductances to the boundary in all [J/K, W/K]: they set what counts as no flow. */
+  /** All capacities and constant conductances [J/K, W/K]: they set what counts as no flow. */
   readonly totalJPerK: number;
   readonly totalWPerK: number;
   /** Running sums of a step [W]. */
@@ -37,11 +37,13 @@ export function compileBalance(stage: Stage): Balance {
   const { network, rows, firstChain, slotOfNode } = layout;
   const isFixed = (slot: number) => slot >= rows && slot < firstChain;
   const crossing: [number, number, number][] = [];
+  let totalWPerK = 0;
   for (const group of network.links) {
     if (group.law !== 'constant') continue;
     for (let k = 0; k < group.from.length; k++) {
       const a = slotOfNode[group.from[k]];
       const b = slotOfNode[group.to[k]];
+      totalWPerK += group.conductanceWPerK[k];
       if (isFixed(a) === isFixed(b)) continue;
       crossing.push(
         isFixed(a) ? [b, a, group.conductanceWPerK[k]] : [a, b, group.conductanceWPerK[k]],
@@ -95,7 +97,7 @@ export function compileBalance(stage: Stage): Balance {
     storing: Int32Array.from(storing),
     capacityJPerK: Float64Array.from(capacity),
     totalJPerK: capacity.reduce((a, b) => a + b, 0),
-    totalWPerK: crossing.reduce((a, c) => a + c[2], 0),
+    totalWPerK,
     inW: 0,
     throughputW: 0,
   };
@@ -172,10 +174,10 @@ function memberGainW(stage: Stage, m: number, x: Float64Array): number {
 }
 
 /**
- * Below this change of the whole network a step counts as this much [K]: a double near 20 °C is known
- * to 4e-15 K, so that a smaller change cannot be balanced to 1e-9.
+ * Flows below this change or difference of all temperatures count as this much [K]: a double near 20 °C
+ * is known to 4e-15 K and a solve to some of these, so that less cannot be balanced to 1e-9.
  */
-const stillK = 1e-5;
+const stillK = 3e-5;
 
 /**
  * Closes a step: imbalance over throughput (or over what stores took up and gave, where that is more,
@@ -201,5 +203,5 @@ export function closeStep(
   const through = Math.max(balance.throughputW, moved / stepS, still);
   balance.inW = 0;
   balance.throughputW = 0;
-  return through > 0 ? imbalance / through : 0;
+  return through === 0 ? 0 : imbalance / through; // NaN stays
 }

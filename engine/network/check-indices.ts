@@ -1,7 +1,7 @@
 // Lengths and indices of a problem's arrays.
 
 import type { Breach } from './check.ts';
-import type { LinkGroup, MeterTerm, Problem } from './problem.ts';
+import type { LinkGroup, MeterTerm, Problem, Series } from './problem.ts';
 
 /** Arrays of a link group that hold one entry a link, by name. */
 function columns(group: LinkGroup): [string, ArrayLike<number>][] {
@@ -65,7 +65,7 @@ export function checkIndices(problem: Problem): Breach[] {
   length('boundary series', network.boundarySeries, n);
   drivers('boundary series', network.boundarySeries);
   for (const s of series) {
-    length(`series ${s.name}`, s.values, s.hold === 'step' ? stepCount : stepCount + 1);
+    length(`series ${s.name}`, s.values, seriesLength(s.hold, stepCount));
   }
   network.links.forEach((group, g) => {
     const what = `links ${g} (${group.law})`;
@@ -145,4 +145,10 @@ function isThere(problem: Problem, of: MeterTerm['of']): boolean {
     default:
       return of satisfies never;
   }
+}
+
+/** How many values a series has by its way of holding them. */
+function seriesLength(hold: Series['hold'], stepCount: number): number {
+  if (hold === 'ramp') return 2 * stepCount;
+  return hold === 'linear' ? stepCount + 1 : stepCount;
 }

@@ -41,7 +41,8 @@ function* startUp(stepper: Stepper): Generator<Progress, StartUp> {
     return { passes: 0, steps: 0, driftK: 0, failedSlot: -1, failedStep: 0 };
   }
   const { spanSteps, toleranceK, maxPasses } = start;
-  place(steadyState(problem, { kind: 'mean', steps: spanSteps }, method).tempC);
+  const first = problem.stepCount - spanSteps;
+  place(steadyState(problem, { kind: 'mean', steps: spanSteps, from: first }, method).tempC);
   const nodes = problem.network.nodeNames.length;
   const before = new Float64Array(nodes);
   const after = new Float64Array(nodes);
@@ -51,9 +52,15 @@ function* startUp(stepper: Stepper): Generator<Progress, StartUp> {
     toNodes(layout, stepper.x2, before);
     for (let k = 0; k < spanSteps; k++) {
       if (k % reportEvery === 0) yield { phase: 'start-up', step: k, stepCount: spanSteps, pass };
-      const failedSlot = advance(stepper, k, null);
+      const failedSlot = advance(stepper, first + k, null);
       if (failedSlot >= 0) {
-        return { passes: pass, steps: pass * spanSteps + k, driftK, failedSlot, failedStep: k };
+        return {
+          passes: pass,
+          steps: pass * spanSteps + k,
+          driftK,
+          failedSlot,
+          failedStep: first + k,
+        };
       }
     }
     toNodes(layout, stepper.x2, after);

@@ -7,10 +7,12 @@
 // `from` to `to`.
 
 /** A value for every step. `step`: constant over step k (`values[k]`, length stepCount). `linear`: at
- * the step's ends, straight in between (`values[k]` to `values[k + 1]`, length stepCount + 1). */
+ * the step's ends, straight in between (`values[k]` to `values[k + 1]`, length stepCount + 1). `ramp`:
+ * straight within each step, with jumps between them (`values[2k]` to `values[2k + 1]`, length
+ * 2 · stepCount). */
 export interface Series {
   readonly name: string;
-  readonly hold: 'step' | 'linear';
+  readonly hold: 'step' | 'linear' | 'ramp';
   readonly values: Float64Array;
 }
 
@@ -177,8 +179,9 @@ export interface Network {
 /** Where the march begins. */
 export type Start =
   | { readonly kind: 'temperatures'; readonly tempC: Float64Array }
-  /** Steady state of the mean drivers, then the first `spanSteps` steps over and over until every node
-   * comes back to within `toleranceK`, at most `maxPasses` times. */
+  /** Steady state of the mean drivers, then the last `spanSteps` steps over and over until every node
+   * comes back to within `toleranceK`, at most `maxPasses` times: what leads up to the first step in a
+   * year that follows itself. */
   | {
       readonly kind: 'periodic';
       readonly spanSteps: number;

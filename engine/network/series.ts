@@ -7,6 +7,8 @@ import type { Problem, Series } from './problem.ts';
 export function seriesAt(series: Series, step: number, share: number): number {
   const { values } = series;
   if (series.hold === 'step') return values[step];
+  if (series.hold === 'ramp')
+    return values[2 * step] + share * (values[2 * step + 1] - values[2 * step]);
   return values[step] + share * (values[step + 1] - values[step]);
 }
 
@@ -19,8 +21,9 @@ export function readSeries(
 ): void {
   for (let i = 0; i < all.length; i++) {
     const { values, hold } = all[i];
-    const v = values[step];
-    out[i] = hold === 'step' ? v : v + share * (values[step + 1] - v);
+    const at = hold === 'ramp' ? 2 * step : step;
+    const v = values[at];
+    out[i] = hold === 'step' || values[at + 1] === v ? v : v + share * (values[at + 1] - v);
   }
 }
 
@@ -42,7 +45,7 @@ export function seriesMean(series: Series, from: number, to: number): number {
   return count > 0 ? sum / count : infinite;
 }
 
-/** Means of all series over the first `steps` steps. */
-export function seriesMeans(problem: Problem, steps: number): Float64Array {
-  return Float64Array.from(problem.series, (s) => seriesMean(s, 0, steps));
+/** Means of all series over `steps` steps from step `from`. */
+export function seriesMeans(problem: Problem, from: number, steps: number): Float64Array {
+  return Float64Array.from(problem.series, (s) => seriesMean(s, from, from + steps));
 }

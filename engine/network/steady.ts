@@ -7,10 +7,10 @@ import { createStage } from './stage.ts';
 import { type Solved, solveStage } from './stage-solve.ts';
 import { setUnitBounds } from './units-state.ts';
 
-/** Drivers held for ever: those in the middle of one step, or the means of the first `steps` steps. */
+/** Drivers held for ever: those in the middle of one step, or the means of `steps` steps from step `from` (0). */
 export type Held =
   | { readonly kind: 'step'; readonly step: number }
-  | { readonly kind: 'mean'; readonly steps: number };
+  | { readonly kind: 'mean'; readonly steps: number; readonly from?: number };
 
 export interface SteadyState {
   readonly tempC: Float64Array;
@@ -28,7 +28,7 @@ export function steadyState(problem: Problem, held: Held, method: Method): Stead
   const layout = layOut(problem.network);
   const series =
     held.kind === 'mean'
-      ? seriesMeans(problem, held.steps)
+      ? seriesMeans(problem, held.from ?? 0, held.steps)
       : new Float64Array(problem.series.length);
   if (held.kind === 'step') readSeries(problem.series, held.step, 0.5, series);
   const stage = createStage(layout, Infinity);

@@ -121,15 +121,21 @@ function twoCapacity(i: TwoCapacity, stepS: number): Problem {
 }
 
 describe('two-capacity rooms', () => {
-  const all = cases<TwoCapacity, { T_air: number[]; power?: number[] }>(
+  const all = cases<TwoCapacity, { T_air?: number[]; power?: number[] }>(
     '04-two-capacity-room.json',
-    (id) => id.startsWith('network'),
+    () => true,
   );
-  test.each(all)('$id: hourly means, at 5 min steps', ({ inputs: i, expected }) => {
+  // `vdi` rows are the guideline's own (remembered), to its class of 0.1 K and 2 W.
+  test.each(all)('$id: hourly means, at 5 min steps', ({ id, inputs: i, expected }) => {
     const run = march(twoCapacity(i, 300), usual);
     const hour = (h: number) => (i.day - 1) * 24 + h - 1;
-    const tempC = i.hours.map((h) => run.meanC[hour(h)]);
-    expect(largestGap(tempC, expected.T_air)).toBeLessThan(expected.power ? 0.1 : 0.05);
+    const { T_air } = expected;
+    expect(T_air ?? expected.power).toBeDefined();
+    if (T_air) {
+      const tempC = i.hours.map((h) => run.meanC[hour(h)]);
+      const classK = expected.power || id.startsWith('vdi') ? 0.1 : 0.05;
+      expect(largestGap(tempC, T_air)).toBeLessThan(classK);
+    }
     if (expected.power) {
       const powerW = i.hours.map((h) => run.meterW[hour(h)]);
       expect(largestGap(powerW, expected.power)).toBeLessThan(2);
