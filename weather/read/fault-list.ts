@@ -28,7 +28,13 @@ export class FaultList {
     return this.faults.length + this.left + folded;
   }
 
-  cell(row: number, column: string, found: string, expected: string, mend: string): void {
+  /** A cell that is wrong; `text` is what the file has there. */
+  cell(row: number, column: string, text: string, expected: string, mend: string): void {
+    this.row(row, column, quoted(text), expected, mend);
+  }
+
+  /** Something wrong at a row, in our words. */
+  row(row: number, column: string, found: string, expected: string, mend: string): void {
     const key = `${column}\n${expected}`;
     const kind = this.kinds.get(key) ?? { shown: 0, more: 0, lastRow: row };
     this.kinds.set(key, kind);
@@ -38,7 +44,7 @@ export class FaultList {
       return;
     }
     kind.shown++;
-    this.push({ file: this.file, place: { row, column }, found: shown(found), expected, mend });
+    this.push({ file: this.file, place: { row, column }, found, expected, mend });
   }
 
   whole(found: string, expected: string, mend: string, path = ''): void {
@@ -79,7 +85,7 @@ export class FaultList {
 }
 
 /** A cell's text for a message: quoted, cut to a readable length, control characters as dots. */
-function shown(text: string): string {
+function quoted(text: string): string {
   const clean = Array.from(text.slice(0, 40), (c) => (c < ' ' ? '·' : c)).join('');
   return `"${clean}${text.length > 40 ? '…' : ''}"`;
 }

@@ -61,6 +61,7 @@ export function finishYear(job: Finishing, faults: FaultList): WeatherYear | nul
   const columns = new Map<Quantity, WeatherColumn>();
   for (const kept of store.columns) {
     const { quantity, stands } = kept.form;
+    if (job.broken.has(quantity)) continue; // its cells are faults already
     const values = Float64Array.from({ length: hours }, (_, h) => kept.values[rowAt(h)]);
     const gaps = gapsIn(values);
     const long = gaps.filter((gap) => gap.count > longestBridgedGap);
@@ -77,7 +78,7 @@ export function finishYear(job: Finishing, faults: FaultList): WeatherYear | nul
       }
       job.broken.add(quantity);
       for (const gap of long)
-        faults.cell(
+        faults.row(
           rowOf(gap.from),
           kept.heading,
           `${gap.count} hours in a row without a value from ${hourText(gap.from, hours)}`,

@@ -64,7 +64,7 @@ export function createWeatherReader(options: ReadWeatherOptions = {}): WeatherRe
       if (piece.endsWith('\n')) data.pop(); // what follows the last line break
       for (const error of errors)
         if (error.type === 'Quotes')
-          faults.cell(
+          faults.row(
             nextRow + (error.row ?? 0),
             'all',
             'a quotation mark without its partner',
@@ -171,7 +171,7 @@ function finish(
       site,
       stampOffsetH: opened.stampOffsetH ?? site.utcOffsetH,
       year: options.year,
-      broken: new Set(),
+      broken: store.broken,
     },
     faults,
   );

@@ -2,7 +2,7 @@
 // columns, as numbers. A file of any size costs no more memory than this.
 import type { FaultList } from './fault-list.ts';
 import { type ColumnForm, type Head, headingKey, type Opened, plainNumber } from './form.ts';
-import { limits, slack } from './quantities.ts';
+import { limits, type Quantity, slack } from './quantities.ts';
 
 /** Rows kept; beyond them the file holds more than a year or a shorter interval, which is a fault. */
 export const mostRows = 20000;
@@ -34,6 +34,9 @@ export class RowStore {
   isCounted = false;
   readonly columns: readonly KeptColumn[];
   readonly drawnBack = new Map<string, Mended>();
+
+  /** Columns with cells that are faults. */
+  readonly broken = new Set<Quantity>();
 
   private readonly opened: Opened;
   private readonly head: Head;
@@ -118,7 +121,7 @@ export class RowStore {
     while (filled > wanted && cells[filled - 1].trim() === '') filled--;
     const last = this.columns.reduce((most, column) => Math.max(most, column.at), 0);
     if (filled <= wanted && cells.length > last) return true;
-    this.faults.cell(
+    this.faults.row(
       row,
       'all',
       `${filled} cells`,
@@ -170,6 +173,7 @@ export class RowStore {
   private badCell(column: KeptColumn, cell: string, row: number): void {
     const [low, high] = limits[column.form.quantity];
     const { scale } = column.form;
+    this.broken.add(column.form.quantity);
     const round = (v: number) => Number((v / scale).toPrecision(6));
     this.faults.cell(
       row,

@@ -46,7 +46,7 @@ export function timeline(store: RowStore, heading: string, faults: FaultList): T
     let hour = Math.floor(store.minute[i] / 60);
     if (!hasLeapDay && !store.isCounted && hour >= leapTo) hour -= 24;
     if (hour >= hours || store.minute[i] % 60 !== minute) {
-      faults.cell(
+      faults.row(
         store.row[i],
         heading,
         stampText(store, i),
@@ -57,7 +57,7 @@ export function timeline(store: RowStore, heading: string, faults: FaultList): T
     }
     if (rowOfHour[hour] >= 0) twice.push(i);
     else if (hour < last)
-      faults.cell(
+      faults.row(
         store.row[i],
         heading,
         stampText(store, i),
@@ -69,7 +69,7 @@ export function timeline(store: RowStore, heading: string, faults: FaultList): T
   }
   const gaps = gapsOf(rowOfHour);
   if (isClockChange(gaps, twice)) {
-    faults.cell(
+    faults.row(
       store.row[twice[0]],
       heading,
       `${stampText(store, twice[0])} a second time, and no ${hourText(gaps[0].from, hours)}`,
@@ -82,7 +82,7 @@ export function timeline(store: RowStore, heading: string, faults: FaultList): T
     const hour =
       Math.floor(store.minute[i] / 60) -
       (!hasLeapDay && !store.isCounted && store.minute[i] >= leapTo * 60 ? 24 : 0);
-    faults.cell(
+    faults.row(
       store.row[i],
       heading,
       stampText(store, i),
@@ -93,7 +93,7 @@ export function timeline(store: RowStore, heading: string, faults: FaultList): T
   for (const gap of gaps) {
     const toEnd = gap.from + gap.count === hours;
     const after = gap.from === 0 ? 0 : store.row[rowOfHour[gap.from - 1]];
-    faults.cell(
+    faults.row(
       after + 1,
       heading,
       `${gap.count} ${gap.count === 1 ? 'hour' : 'hours'} missing from ${hourText(gap.from, hours)}${toEnd ? ', where the table ends' : ''}`,
@@ -122,7 +122,7 @@ function isHourly(store: RowStore, heading: string, faults: FaultList): boolean 
       most = times;
     }
   if (usual === 60 || most < 2) return true;
-  faults.cell(
+  faults.row(
     store.row[Math.min(1, store.count - 1)],
     heading,
     usual <= 0 ? 'the same or earlier time from row to row' : `a row every ${usual} minutes`,
