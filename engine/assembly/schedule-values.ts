@@ -9,8 +9,8 @@ import {
 } from '../building/index.ts';
 import type { StepClock } from './step-clock.ts';
 
-/** Where in the step the profile is read: set-points hold at its end, shares count by its middle. */
-type At = 'middle' | 'end';
+/** Where in the step the profile is read. At a jump `end` takes the value before it, `start` the one after. */
+type At = 'start' | 'middle' | 'end';
 
 /** Value of the schedule with this id in every step. */
 export function scheduleValues(
@@ -25,11 +25,13 @@ export function scheduleValues(
     profileOf(building, profileOfDay(schedule, monthDay, clock.weekday[d], holidays)),
   );
   const values = new Float64Array(clock.count);
-  const intoStepH = ((at === 'middle' ? 0.5 : 1) * clock.stepS) / 3600;
+  const intoStepH = (intoStep[at] * clock.stepS) / 3600;
   for (let k = 0; k < clock.count; k++)
     values[k] = profileValue(ofDay[clock.day[k]], clock.hourOfDay[k] + intoStepH, at);
   return values;
 }
+
+const intoStep = { start: 0, middle: 0.5, end: 1 };
 
 /** The same for a field that may hold a number instead. */
 export function scheduledValues(
@@ -41,6 +43,22 @@ export function scheduledValues(
   return typeof value === 'number'
     ? new Float64Array(clock.count).fill(value)
     : scheduleValues(building, value.schedule, clock, at);
+}
+
+/** A scheduled value at both ends of every step, for a series that holds ramps: start, end, start, … */
+export function scheduledRamp(
+  building: Building,
+  value: Scheduled,
+  clock: StepClock,
+): Float64Array {
+  const starts = scheduledValues(building, value, clock, 'start');
+  const ends = scheduledValues(building, value, clock, 'end');
+  const both = new Float64Array(2 * clock.count);
+  for (let k = 0; k < clock.count; k++) {
+    both[2 * k] = starts[k];
+    both[2 * k + 1] = ends[k];
+  }
+  return both;
 }
 
 function profileOfDay(
@@ -59,7 +77,7 @@ function profileOfDay(
   return week.profile;
 }
 
-/** Value of a day's profile; at a jump `end` takes the value before it, `middle` the one after. */
+/** Value of a day's profile. */
 function profileValue(profile: Profile, hour: number, at: At): number {
   if (profile.kind === 'hours') {
     const h = at === 'end' ? Math.ceil(hour - 1e-9) - 1 : Math.floor(hour + 1e-9);

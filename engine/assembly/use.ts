@@ -2,7 +2,7 @@
 import type { Building, Heating, Room } from '../building/index.ts';
 import type { NetworkBuilder } from './network-builder.ts';
 import type { Face } from './room-parts.ts';
-import { scheduledValues, scheduleValues } from './schedule-values.ts';
+import { scheduledRamp, scheduleValues } from './schedule-values.ts';
 import type { StepClock } from './step-clock.ts';
 
 /** Nodes that feel a room's heat, and how radiation is shared out between the faces. */
@@ -86,8 +86,8 @@ export function addPlant(
     deliveryShares: delivery.shares,
     setPointSeries: builder.series(
       `${kind} set-point, ${room.name}`,
-      'step',
-      scheduledValues(building, heating.setPointC, clock, 'end'),
+      'ramp',
+      scheduledRamp(building, heating.setPointC, clock),
     ),
     maxSeries: builder.constantSeries(heating.maxW ?? Number.POSITIVE_INFINITY),
     bandK: heating.bandK,

@@ -12,6 +12,8 @@ import { loadUnits, nextMode, settleModes } from './units-state.ts';
 
 /** Slopes are renewed when they lag by more than this share of their node's own entry. */
 const lagLimit = 0.02;
+/** The estimated rest of the iteration may be this share of the tolerance. */
+const tailShare = 0.25;
 /** From this iteration on, slopes are always renewed and the state moves half-way only. */
 const cautious = 12;
 /** From this iteration on, one plant changes its branch at a time. */
@@ -91,15 +93,18 @@ export function solveStage(
       if ((d > change || Number.isNaN(d)) && layout.nodeOfSlot[i] >= 0) change = d; // NaN stays
     }
     const switched = exchangeModes(stage, x, k >= single);
-    if (!switched && (linear || change <= toleranceK)) {
+    // What is left shrinks by the same share as the last change did (a geometric tail).
+    const share = change / lastChange;
+    const left = share < 0.5 ? (change * share) / (1 - share) : change;
+    if (!switched && (linear || left <= tailShare * toleranceK || change <= toleranceK)) {
       solved.converged = true;
       break;
     }
     if (!(change < Infinity)) break;
     slow = change > 0.1 * lastChange;
     lastChange = switched ? Infinity : change;
-    const share = k >= cautious ? 0.5 : 1;
-    for (let i = firstState; i < rows; i++) at[i] += share * (x[i] - at[i]);
+    const way = k >= cautious ? 0.5 : 1;
+    for (let i = firstState; i < rows; i++) at[i] += way * (x[i] - at[i]);
   }
   solveBackward(lu, b, x, 0, firstState);
   sweepBackward(layout.chains, stage.chain, layout.chainSlotA, layout.chainSlotB, firstChain, x);
