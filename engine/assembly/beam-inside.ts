@@ -1,7 +1,15 @@
 // Where the beam through a window lands: on the floor, or on its geometric patch.
 import type { SunTrack } from '../../weather/index.ts';
 import type { Building, Room } from '../building/index.ts';
-import { boxFaces, faceRectangle, patchScratch, patchShare, sunTravel } from '../physics/index.ts';
+import {
+  boxFaces,
+  faceRectangle,
+  patchScratch,
+  patchShare,
+  sunFromWindow,
+  sunlitPieces,
+  sunTravel,
+} from '../physics/index.ts';
 import { boxFaceName, onBox, physicsBox } from './enclosure.ts';
 import type { Face } from './room-parts.ts';
 import type { WindowParts } from './window.ts';
@@ -70,12 +78,23 @@ function addPatch(
   for (let k = 0; k < beamW.length; k++) {
     if (beamW[k] === 0) continue;
     const travel = sunTravel(roomBox.frontAzimuthDeg, sun.azimuthDeg[k], sun.altitudeDeg[k]);
+    const lit = window.shaded
+      ? sunlitPieces(
+          window.shaded,
+          sunFromWindow(
+            window.face.tiltDeg,
+            window.face.azimuthDeg,
+            sun.azimuthDeg[k],
+            sun.altitudeDeg[k],
+          ),
+        )
+      : undefined;
     for (let b = 0; b < boxFaces.length; b++)
-      rest[b] = patchShare(box, opening, travel, whole[b], scratch);
+      rest[b] = patchShare(box, opening, travel, whole[b], scratch, lit);
     for (let f = 0; f < faces.length; f++) {
       const target = placed[f];
       if (!target) continue;
-      share[f] = patchShare(box, opening, travel, target, scratch);
+      share[f] = patchShare(box, opening, travel, target, scratch, lit);
       rest[boxFaces.indexOf(names[f])] -= share[f];
     }
     for (let f = 0; f < faces.length; f++) {

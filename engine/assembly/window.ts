@@ -8,7 +8,13 @@ import {
   type Room,
   type Surface,
 } from '../building/index.ts';
-import { type GlazingAngles, glassPane, glazingAngles, type PaneOptics } from '../physics/index.ts';
+import {
+  type GlazingAngles,
+  glassPane,
+  glazingAngles,
+  type PaneOptics,
+  type ShadedWindow,
+} from '../physics/index.ts';
 import { addOuterExchange, faceHeightM } from './fabric.ts';
 import { gapLaw } from './gap-law.ts';
 import type { NetworkBuilder, Provenance } from './network-builder.ts';
@@ -23,6 +29,8 @@ export interface WindowParts {
   readonly opening: Opening;
   readonly areaM2: number;
   readonly sun: FaceSun;
+  /** The glass with what stands before it, or null. */
+  readonly shaded: ShadedWindow | null;
   /** Outer and inner face node of each pane, outermost first; the same node twice where a pane is one node. */
   readonly paneNodes: readonly (readonly [number, number])[];
   readonly optics: GlazingAngles;
@@ -83,6 +91,7 @@ export function addWindow(
     outside,
     builder,
   );
+  const shaded = shadedOpening(room, surface, opening);
   const fromInside = glass.optics.diffuseFromInside;
   const face: Face = {
     node: glass.paneNodes[glass.paneNodes.length - 1][1],
@@ -105,7 +114,8 @@ export function addWindow(
     face,
     opening,
     areaM2,
-    sun: outside.sunOn(surface, shadedOpening(room, surface, opening)),
+    sun: outside.sunOn(surface, shaded),
+    shaded,
     paneNodes: glass.paneNodes,
     optics: glass.optics,
   };
