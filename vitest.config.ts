@@ -13,6 +13,7 @@ export default defineConfig({
           exclude: ['test/**/*.e2e.test.ts'],
           environment: 'node',
           testTimeout: 30_000,
+          benchmark: { include: [] },
         },
       },
       {
