@@ -1,6 +1,6 @@
 // The invented weather of the invented town of Ostermere: a mild maritime year, the same bytes on
 // every machine. Sun follows its true course over the site; cloud, wind and air masses are random
-// walks from one seed. Nothing here is measured.
+// walks from one start. Nothing here is measured.
 import {
   relativeHumidityFromDewPoint,
   type Site,
@@ -21,8 +21,8 @@ const year = 2025;
 const hours = 8760;
 
 /** mulberry32: 32 bits of state, uniform in [0, 1). Public domain, from memory. */
-function randomStream(seed: number): () => number {
-  let a = seed >>> 0;
+function randomStream(start: number): () => number {
+  let a = start >>> 0;
   return () => {
     a = (a + 0x6d2b79f5) >>> 0;
     let t = Math.imul(a ^ (a >>> 15), a | 1);
@@ -55,7 +55,7 @@ const round = (value: number, digits: number): number => Number(value.toFixed(di
 
 /** The year, ready for `writePlainWeather`. */
 export function ostermereYear(): WeatherYear {
-  const random = randomStream(2025);
+  const random = randomStream(1899);
   const cloud = walk(random, 20);
   const airMass = walk(random, 60);
   const gust = walk(random, 9);
@@ -87,10 +87,10 @@ export function ostermereYear(): WeatherYear {
     const swing = Math.cos((2 * Math.PI * ((h % 24) + 0.5 - 15)) / 24);
     const t = 10.3 + 6.6 * season + swingK * swing + 3.1 * airMass[h] + 0.8 * (c - 0.6) * -season;
     dryBulb[h] = round(t, 1);
-    const depression = Math.max(
-      0.2,
-      2.2 + 3.5 * (1 - c) * (1 + 0.4 * season) + 1.6 * swing * (1 - 0.6 * c),
-    );
+    // Clear nights end near saturation; clear warm afternoons and continental air are dry.
+    const clearness = (1 - c) * (1 + 0.45 * season);
+    const dryK = 1.3 + 3.6 * clearness + 1.1 * Math.max(0, airMass[h]);
+    const depression = Math.max(0.1, dryK + (1.1 + 3.2 * clearness) * swing);
     dewPoint[h] = round(t - depression, 1);
     humidity[h] = round(relativeHumidityFromDewPoint(dryBulb[h], dewPoint[h]), 3);
     pressure[h] = round(100_600 + 950 * weight[h], 0);
