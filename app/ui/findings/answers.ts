@@ -14,8 +14,10 @@ export interface Answer {
 }
 
 /** How many percent of `whole`, as words; empty where there is no whole. */
-const shareOf = (part: number, whole: number) =>
-  whole > 0 ? `${figure((100 * part) / whole)} % of ${figure(whole)} occupied` : 'nobody is in';
+const shareOf = (part: number, whole: number, isHouse: boolean) =>
+  whole > 0
+    ? `${figure((100 * part) / whole)} % of ${figure(whole)} ${isHouse ? 'room hours' : 'occupied'}`
+    : 'nobody is in';
 
 const nameWhere = (
   rooms: readonly RoomTotals[],
@@ -28,7 +30,8 @@ const nameWhere = (
 
 /** `rooms` are the rooms of a house, to say where an extreme lies; empty for a single room. */
 export function findAnswers(totals: Totals, rooms: readonly RoomTotals[]): Answer[] {
-  const power = rooms.length > 0 ? quantity.housePowerW : quantity.roomPowerW;
+  const isHouse = rooms.length > 0;
+  const power = isHouse ? quantity.housePowerW : quantity.roomPowerW;
   const perArea = (kWh: number) => `${figure(kWh / totals.floorAreaM2)} kWh/m²`;
   const range = totals.operativeTemperatureC;
   const highestIn = nameWhere(rooms, (room) => room.operativeTemperatureC.max, range.max);
@@ -45,7 +48,7 @@ export function findAnswers(totals: Totals, rooms: readonly RoomTotals[]): Answe
     },
     {
       key: 'peak',
-      name: rooms.length > 0 ? 'Peak heating, whole house' : 'Peak heating',
+      name: isHouse ? 'Peak heating, whole house' : 'Peak heating',
       aside:
         totals.peakHeatingW > 0 ? `${figure(totals.peakHeatingW / totals.floorAreaM2)} W/m²` : '',
       quantity: power(totals.peakHeatingW),
@@ -55,7 +58,7 @@ export function findAnswers(totals: Totals, rooms: readonly RoomTotals[]): Answe
     {
       key: 'below',
       name: 'Hours below the band',
-      aside: shareOf(totals.hoursBelowBand, totals.occupiedHours),
+      aside: shareOf(totals.hoursBelowBand, totals.occupiedHours, isHouse),
       quantity: quantity.hours(isOccupied ? totals.hoursBelowBand : NaN),
       note: isOccupied ? `${figure(totals.degreeHoursBelow)} K·h in all` : '',
       isMain: true,
@@ -63,7 +66,7 @@ export function findAnswers(totals: Totals, rooms: readonly RoomTotals[]): Answe
     {
       key: 'above',
       name: 'Hours above the band',
-      aside: shareOf(totals.hoursAboveBand, totals.occupiedHours),
+      aside: shareOf(totals.hoursAboveBand, totals.occupiedHours, isHouse),
       quantity: quantity.hours(isOccupied ? totals.hoursAboveBand : NaN),
       note: isOccupied ? `${figure(totals.degreeHoursAbove)} K·h in all` : '',
       isMain: true,

@@ -40,7 +40,7 @@ export function RunProgress() {
         <span style={{ width: `${percent}%` }} />
       </div>
       <div className="note">
-        <span>{run.stage}</span>
+        <span>{run.stage.charAt(0).toUpperCase() + run.stage.slice(1)}</span>
         <span>{figure(percent)} %</span>
       </div>
     </section>

@@ -16,6 +16,9 @@ export function StatusBar() {
     );
   }
   const { quality, timings, weather, stepMinutes } = findings;
+  const repaired = weather.repairs
+    .filter((one) => one.kind === 'repair')
+    .reduce((sum, one) => sum + one.count, 0);
   const closes = powerOfTen(quality.relativeBalanceResidual);
   return (
     <footer className="status">
@@ -42,8 +45,7 @@ export function StatusBar() {
             </span>
           )}
           <span>
-            Weather: {weather.place}, {figure(weather.hours)} h, {figure(weather.repairs.length)}{' '}
-            repairs and assumptions
+            Weather: {weather.place}, {figure(weather.hours)} h, {figure(repaired)} repaired
           </span>
         </>
       )}

@@ -29,21 +29,27 @@ function pointsOf(curve: Float64Array): Point[] {
   return points;
 }
 
+/** Hours of a falling curve before it reaches nought. */
+function hoursOn(curve: Float64Array): number {
+  const end = curve.findIndex((w) => w <= 0);
+  return end < 0 ? curve.length : end;
+}
+
 export function LoadDuration({ series, totals, hours, mark }: LoadDurationProps) {
   const heating = useMemo(() => byDuration(series.heatingW), [series]);
   const cooling = useMemo(() => byDuration(series.coolingW), [series]);
   const heatingPoints = useMemo(() => pointsOf(heating), [heating]);
   const coolingPoints = useMemo(() => pointsOf(cooling), [cooling]);
-  const hoursOn = (curve: Float64Array) => curve.filter((w) => w > 0).length;
+  const heatingOn = useMemo(() => hoursOn(heating), [heating]);
+  const coolingOn = useMemo(() => hoursOn(cooling), [cooling]);
   const most = Math.max(heating[0] ?? 0, cooling[0] ?? 0) / 1000;
   const ticks = roundTicks(0, most || 1, 4);
   const decimals = tickDecimals(ticks);
   const units = evenUnits(0, hours, 1000);
 
   const nameCurve =
-    (name: string, curve: Float64Array, color: 'heat-in' | 'heat-out'): Painter =>
+    (name: string, curve: Float64Array, on: number, color: 'heat-in' | 'heat-out'): Painter =>
     (view) => {
-      const on = hoursOn(curve);
       if (on === 0) return;
       const at = Math.round(on * 0.28);
       const text = `${name}, on for ${figure(on)} h`;
@@ -83,7 +89,7 @@ export function LoadDuration({ series, totals, hours, mark }: LoadDurationProps)
     <Drawing
       title="Load duration"
       note={peaks}
-      equivalent={`${peaks}. Heating is on for ${figure(hoursOn(heating))} hours, cooling for ${figure(hoursOn(cooling))}.`}
+      equivalent={`${peaks}. Heating is on for ${figure(heatingOn)} hours, cooling for ${figure(coolingOn)}.`}
       table={{
         columns: ['Hours of the year', 'Heating at least, kW', 'Cooling at least, kW'],
         rows: () =>
@@ -105,8 +111,8 @@ export function LoadDuration({ series, totals, hours, mark }: LoadDurationProps)
         ]}
         under={[gridLines(ticks, (tick) => figure(tick, decimals), 'kW')]}
         over={[
-          nameCurve('Heating', heating, 'heat-in'),
-          nameCurve('Cooling', cooling, 'heat-out'),
+          nameCurve('Heating', heating, heatingOn, 'heat-in'),
+          nameCurve('Cooling', cooling, coolingOn, 'heat-out'),
           measuredEdge(units),
           ...marked,
           hourWords,

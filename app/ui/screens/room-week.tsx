@@ -101,7 +101,7 @@ export function RoomWeek(props: RoomTimeProps & { readonly simulation: Simulatio
   const lastOf = (values: Float64Array) => values[values.length - 1];
   const bandWords = bandText(limits);
   const bandAt = clearestEnd(low, [operative, outside], labelHours);
-  const isAirApart = Math.abs(lastOf(air) - lastOf(operative)) > 0.3;
+  const isAirApart = air.some((t, i) => Math.abs(t - operative[i]) > 0.3);
 
   return (
     <Drawing

@@ -53,19 +53,21 @@ export function RoomYear(props: RoomTimeProps) {
     return steps[step] ?? 'warm-3';
   };
   const unit = band && !band.constant ? 'K' : '°C';
-  const share = (wanted: -1 | 0 | 1) => {
-    let count = 0;
-    for (let h = 0; h < calendar.hours; h++) {
-      if (series.occupied[h] && outsideBand(series, h) === wanted) count++;
+  const occupied = useMemo(() => {
+    const count = { below: 0, inside: 0, above: 0 };
+    for (let h = 0; h < series.occupied.length; h++) {
+      if (!series.occupied[h]) continue;
+      const side = outsideBand(series, h);
+      count[side < 0 ? 'below' : side > 0 ? 'above' : 'inside']++;
     }
     return count;
-  };
+  }, [series]);
 
   return (
     <Drawing
       title="The year"
       note="each hour, operative temperature"
-      equivalent={`The year of the room, hour of day upward and days across, shaded by temperature against the band. Occupied hours: ${figure(share(-1))} below, ${figure(share(0))} inside, ${figure(share(1))} above.`}
+      equivalent={`The year of the room, hour of day upward and days across, shaded by temperature against the band. Occupied hours: ${figure(occupied.below)} below, ${figure(occupied.inside)} inside, ${figure(occupied.above)} above.`}
       aside={
         <RampKey
           steps={steps}

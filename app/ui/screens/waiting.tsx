@@ -32,7 +32,7 @@ export function Waiting({ screen, onWeather }: { screen: Screen; onWeather: () =
   return (
     <>
       <h1>{titles[screen]}</h1>
-      {weather && <p className="quiet">{weather.file} is held ready.</p>}
+      {weather && project === null && <p className="quiet">{weather.file} is held ready.</p>}
       <Drawing title="Month by month" equivalent={sentence}>
         <div className="empty">
           <ChartBox
