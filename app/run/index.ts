@@ -2,4 +2,3 @@ export { type AskOptions, RunRefused, type RunWorker } from './ask.ts';
 export type { RunProgress } from './protocol.ts';
 export type { RunRequest } from './request.ts';
 export { runSimulation } from './run-simulation.ts';
-export { simulationWork } from './simulation-work.ts';
