@@ -14,30 +14,35 @@ import { boxFaceName, onBox, physicsBox } from './enclosure.ts';
 import type { Face } from './room-parts.ts';
 import type { WindowParts } from './window.ts';
 
+/** Light that meets the faces first in fixed shares, which add up to 1. */
+export interface Rays {
+  readonly shares: Float64Array;
+  /** In each step [W]. */
+  readonly lightW: Float64Array;
+}
+
 /**
- * Adds the beam of one window to the light that meets each face first.
+ * The beam of one window, by the faces that it meets first.
  *
  * The patch needs a box and the window's rectangle; without them the beam falls on the floor.
  * @param beamW transmitted beam in each step [W]
- * @param firstW light that meets face f first in step k, `firstW[f][k]`, added to [W]
  */
-export function addBeam(
+export function beamRays(
   building: Building,
   room: Room,
   faces: readonly Face[],
   window: WindowParts,
   beamW: Float64Array,
   sun: SunTrack,
-  firstW: readonly Float64Array[],
-): void {
-  if (building.physics.beamInside === 'patch' && room.box && window.opening.rectangle) {
-    addPatch(room.box, faces, window, beamW, sun, firstW);
-    return;
-  }
-  floorShares(faces).forEach((share, f) => {
-    if (share === 0) return;
-    for (let k = 0; k < beamW.length; k++) firstW[f][k] += share * beamW[k];
-  });
+): Rays[] {
+  if (building.physics.beamInside !== 'patch' || !room.box || !window.opening.rectangle)
+    return [{ shares: floorShares(faces), lightW: beamW }];
+  const ofFace = faces.map(() => new Float64Array(beamW.length));
+  addPatch(room.box, faces, window, beamW, sun, ofFace);
+  return ofFace.map((lightW, f) => ({
+    shares: Float64Array.from(faces, (_, j) => (j === f ? 1 : 0)),
+    lightW,
+  }));
 }
 
 /** The floor by area, or all opaque faces where there is none. */

@@ -63,6 +63,11 @@ export function outdoors(
     0,
     builder.series('sky temperature', 'linear', steps.skyTemperatureC),
   );
+  const stationMPerS = Float64Array.from(
+    { length: steps.count },
+    (_, k) => (steps.windMPerS[k] + steps.windMPerS[k + 1]) / 2,
+  );
+  let forced: { windward: Float64Array; leeward: Float64Array } | undefined;
   const films = new Map<string, number>();
   const planes = new Map<string, PlaneIrradiance>();
   const sunlight = new Map<string, number>();
@@ -70,19 +75,28 @@ export function outdoors(
   const terrain = terrains[building.site.terrain];
 
   function film(heightM: number, tiltDeg: number, azimuthDeg: number): Float64Array {
-    const values = new Float64Array(steps.count);
-    for (let k = 0; k < steps.count; k++) {
-      const stationMPerS = (steps.windMPerS[k] + steps.windMPerS[k + 1]) / 2;
-      const windMPerS = windAtHeightMPerS(stationMPerS, heightM, terrain);
-      if (method === 'iso-6946') values[k] = standardOutsideFilmWPerM2K(windMPerS);
-      else if (method === 'mcadams') values[k] = roughPlateFilmWPerM2K(windMPerS);
-      else
-        values[k] = forcedFilmWPerM2K(
-          windMPerS,
-          isWindward(steps.windFromDeg[k], azimuthDeg, tiltDeg),
-        );
-    }
-    return values;
+    const atHeight = windAtHeightMPerS(1, heightM, terrain); // the profile is linear in the wind
+    if (method === 'iso-6946')
+      return stationMPerS.map((v) => standardOutsideFilmWPerM2K(v * atHeight));
+    if (method === 'mcadams') return stationMPerS.map((v) => roughPlateFilmWPerM2K(v * atHeight));
+    // Power laws: their value at the height is that at the station times that of the profile.
+    const { windward, leeward } = stationFilms();
+    const toWindward = forcedFilmWPerM2K(atHeight, true) / forcedFilmWPerM2K(1, true);
+    const toLeeward = forcedFilmWPerM2K(atHeight, false) / forcedFilmWPerM2K(1, false);
+    return windward.map((h, k) =>
+      isWindward(steps.windFromDeg[k], azimuthDeg, tiltDeg)
+        ? h * toWindward
+        : leeward[k] * toLeeward,
+    );
+  }
+
+  /** Wind-driven film of either kind at the station's wind, computed once. */
+  function stationFilms(): { windward: Float64Array; leeward: Float64Array } {
+    forced ??= {
+      windward: stationMPerS.map((v) => forcedFilmWPerM2K(v, true)),
+      leeward: stationMPerS.map((v) => forcedFilmWPerM2K(v, false)),
+    };
+    return forced;
   }
 
   function planeOf({ tiltDeg, azimuthDeg }: Facing): PlaneIrradiance {

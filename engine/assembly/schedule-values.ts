@@ -12,13 +12,16 @@ import type { StepClock } from './step-clock.ts';
 /** Where in the step the profile is read. At a jump `end` takes the value before it, `start` the one after. */
 type At = 'start' | 'middle' | 'end';
 
-/** Value of the schedule with this id in every step. */
+/** Value of the schedule with this id in every step; asked for twice it is the same array. */
 export function scheduleValues(
   building: Building,
   id: string,
   clock: StepClock,
   at: At = 'middle',
 ): Float64Array {
+  const key = `${id} ${at}`;
+  const known = clock.laidOut.get(key);
+  if (known) return known;
   const schedule = scheduleOf(building, id);
   const holidays = new Set(building.calendar.holidays);
   const ofDay = clock.monthDay.map((monthDay, d) =>
@@ -28,6 +31,7 @@ export function scheduleValues(
   const intoStepH = (intoStep[at] * clock.stepS) / 3600;
   for (let k = 0; k < clock.count; k++)
     values[k] = profileValue(ofDay[clock.day[k]], clock.hourOfDay[k] + intoStepH, at);
+  clock.laidOut.set(key, values);
   return values;
 }
 

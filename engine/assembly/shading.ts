@@ -14,8 +14,8 @@ import {
   horizonAltitudeDeg,
   type ShadedWindow,
   sunFromWindow,
-  sunlitFraction,
 } from '../physics/index.ts';
+import { sunlitTable } from './sunlit-table.ts';
 
 /** Sunlight on a face by kind, means over the steps, shades taken off. */
 export interface FaceSun {
@@ -41,9 +41,10 @@ export function faceSun(
   const { beamWPerM2, isotropicWPerM2, horizonWPerM2, groundWPerM2, cosIncidence } = plane;
   const isFree = shaded === null && horizon.length === 0;
   const bare: ShadedWindow = shaded ?? { widthM: 1, heightM: 1, revealM: 0 };
+  const litAt = sunlitTable(bare);
   const left = isFree
     ? { sky: 1, horizon: 1, ground: 1 }
-    : diffuseShading(bare, face.tiltDeg, face.azimuthDeg, horizon);
+    : diffuseShading(bare, face.tiltDeg, face.azimuthDeg, horizon, litAt);
   const diffuse = isotropicWPerM2.map(
     (dome, k) => left.sky * dome + left.horizon * horizonWPerM2[k] + left.ground * groundWPerM2[k],
   );
@@ -59,7 +60,7 @@ export function faceSun(
           sun.azimuthDeg[k],
           sun.altitudeDeg[k],
         );
-        return value * sunlitFraction(bare, towards);
+        return value * litAt(towards);
       });
   return { beamWPerM2: beam, diffuseWPerM2: diffuse, cosIncidence };
 }

@@ -13,6 +13,8 @@ export interface StepClock {
   readonly weekday: Int8Array;
   /** "MM-DD" of each day of the year. */
   readonly monthDay: readonly string[];
+  /** Schedules already laid out on these steps, by id and place in the step. */
+  readonly laidOut: Map<string, Float64Array>;
 }
 
 const daysInMonth = [31, 28, 31, 30, 31, 30, 31, 31, 30, 31, 30, 31];
@@ -46,5 +48,5 @@ export function stepClock(
   });
   const first = firstWeekday(year);
   const weekday = Int8Array.from({ length: days }, (_, d) => ((first - 1 + d) % 7) + 1);
-  return { stepS, count, day, hourOfDay, weekday, monthDay };
+  return { stepS, count, day, hourOfDay, weekday, monthDay, laidOut: new Map() };
 }

@@ -2,8 +2,8 @@
 // end, and what the panes keep.
 
 import type { Building, Room } from '../building/index.ts';
-import { beamAbsorptance, beamTransmittance, lightMatrix } from '../physics/index.ts';
-import { addBeam } from './beam-inside.ts';
+import { beamAbsorptance, beamTransmittance, lightMatrix, spreadLight } from '../physics/index.ts';
+import { beamRays, type Rays } from './beam-inside.ts';
 import type { FaceViews } from './enclosure.ts';
 import type { NetworkBuilder } from './network-builder.ts';
 import type { Outdoors } from './outdoors.ts';
@@ -32,16 +32,15 @@ interface Transmitted {
 export function addRoomSun(task: SunTask): void {
   const { room, faces, windows, builder, meters } = task;
   if (windows.length === 0) return;
-  const firstW = faces.map(() => new Float64Array(task.outside.count));
+  const rays: Rays[] = [];
   for (const window of windows) {
     const light = transmitted(window);
-    addBeam(task.building, room, faces, window, light.beamW, task.outside.sun, firstW);
-    viewShares(task.views, faces.indexOf(window.face)).forEach((share, f) => {
-      addScaled(share, light.diffuseW, firstW[f]);
-    });
+    rays.push(...beamRays(task.building, room, faces, window, light.beamW, task.outside.sun));
+    const shares = viewShares(task.views, faces.indexOf(window.face));
+    rays.push({ shares, lightW: light.diffuseW });
     addPaneSun(window, builder);
   }
-  const totalW = followed(faces, task.views, firstW);
+  const totalW = followed(faces, task.views, rays, task.outside.count);
   faces.forEach((face, f) => {
     const name = `${face.name} light from inside`;
     if (face.opening === undefined) {
@@ -67,22 +66,25 @@ export function addRoomSun(task: SunTask): void {
 }
 
 /**
- * Light that meets each face in the end, all reflections followed, from what meets them first. What
+ * Light that meets each face in the end, all reflections followed, from the rays that come in. What
  * faces absorb and glass lets out is this times their shares.
  */
 function followed(
   faces: readonly Face[],
   views: FaceViews,
-  firstW: readonly Float64Array[],
+  rays: readonly Rays[],
+  steps: number,
 ): Float64Array[] {
   const n = faces.length;
   const reflectance = faces.map(({ light }) => 1 - light.absorbed - light.transmitted);
   const matrix = lightMatrix(views.areaM2, views.exchangeM2, reflectance);
-  return faces.map((_, i) => {
-    const total = new Float64Array(firstW[i].length);
-    for (let j = 0; j < n; j++) addScaled(matrix[i * n + j], firstW[j], total);
-    return total;
-  });
+  const totalW = faces.map(() => new Float64Array(steps));
+  const spread = new Float64Array(n);
+  for (const { shares, lightW } of rays) {
+    spreadLight(matrix, shares, spread);
+    for (let i = 0; i < n; i++) addScaled(spread[i], lightW, totalW[i]);
+  }
+  return totalW;
 }
 
 function addScaled(factor: number, values: Float64Array, into: Float64Array): void {

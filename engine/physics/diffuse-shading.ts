@@ -1,6 +1,6 @@
 // What shading leaves of the light that comes from sky and ground: computed once a window.
 import { type Horizon, horizonAltitudeDeg } from './horizon.ts';
-import { type ShadedWindow, sunlitFraction } from './window-shading.ts';
+import { type ShadedWindow, type SunFromWindow, sunlitFraction } from './window-shading.ts';
 
 /** Shares of what the bare window would get, 0 to 1. */
 export interface DiffuseShading {
@@ -27,6 +27,7 @@ const degPerRad = 180 / Math.PI;
  * surroundings. 24 × 64 directions of equal weight; the error is under 0.005.
  *
  * @param tiltDeg 0 flat roof, 90 wall, @param azimuthDeg where the window looks [°]
+ * @param litAt share of the window that a ray from there reaches; the exact shadow if left out
  *
  * Source: definition of the view factor to a visible part of the sky.
  */
@@ -35,6 +36,7 @@ export function diffuseShading(
   tiltDeg: number,
   azimuthDeg: number,
   horizon: Horizon = [],
+  litAt: (sun: SunFromWindow) => number = (sun) => sunlitFraction(window, sun),
 ): DiffuseShading {
   const [c, s] = [Math.cos(tiltDeg / degPerRad), Math.sin(tiltDeg / degPerRad)];
   const seen = { sky: 0, ground: 0 };
@@ -53,20 +55,19 @@ export function diffuseShading(
         horizon,
         azimuthDeg + Math.atan2(sun.right, ahead) * degPerRad,
       );
-      if (where === 'ground' || altitude * degPerRad > skyline)
-        seen[where] += sunlitFraction(window, sun);
+      if (where === 'ground' || altitude * degPerRad > skyline) seen[where] += litAt(sun);
     }
   }
   return {
     sky: whole.sky > 0 ? seen.sky / whole.sky : 1,
-    horizon: bandShading(window, s, c, azimuthDeg, horizon),
+    horizon: bandShading(litAt, s, c, azimuthDeg, horizon),
     ground: whole.ground > 0 ? seen.ground / whole.ground : 1,
   };
 }
 
 /** Share of a band at altitude 0 that is left, weighted by the cosine of incidence. */
 function bandShading(
-  window: ShadedWindow,
+  litAt: (sun: SunFromWindow) => number,
   s: number,
   c: number,
   azimuthDeg: number,
@@ -81,7 +82,7 @@ function bandShading(
     if (out <= 0) continue;
     whole += out;
     if (horizonAltitudeDeg(horizon, azimuthDeg + turn * degPerRad) > 0) continue;
-    seen += out * sunlitFraction(window, { right: Math.sin(turn), up: -c * ahead, out });
+    seen += out * litAt({ right: Math.sin(turn), up: -c * ahead, out });
   }
   return whole > 0 ? seen / whole : 1;
 }

@@ -25,8 +25,13 @@ export function civilAheadH(
   if (zone === undefined) return ahead;
   const startMs = Date.UTC(year, 0, 1) - utcOffsetH * 3_600_000;
   const clock = IANAZone.create(zone);
-  for (let h = 0; h < hours; h++)
-    ahead[h] = clock.offset(startMs + h * 3_600_000) / 60 - utcOffsetH;
+  const at = (h: number) => clock.offset(startMs + h * 3_600_000) / 60 - utcOffsetH;
+  // Asking for an offset is slow. A day that begins and ends with the same one holds it throughout.
+  for (let h = 0, from = at(0); h < hours; h += 24) {
+    const to = at(h + 24);
+    for (let i = h; i < Math.min(h + 24, hours); i++) ahead[i] = from === to ? from : at(i);
+    from = to;
+  }
   return ahead;
 }
 
