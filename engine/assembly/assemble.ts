@@ -12,7 +12,7 @@ import {
 import { type Building, constructionOf, type Room, type Surface } from '../building/index.ts';
 import type { Problem } from '../network/index.ts';
 import { type AirProperties, addOutdoorAir, addRoomAir, airCapacityJPerK } from './air.ts';
-import { comfortHours, hourlySetPoint } from './comfort-hours.ts';
+import { comfortHours } from './comfort-hours.ts';
 import { faceViews } from './enclosure.ts';
 import {
   addChain,
@@ -25,16 +25,17 @@ import {
   type OuterFace,
   roughnessOf,
 } from './fabric.ts';
+import { addGains } from './gains.ts';
 import { addInsideFilm, addInsideLongWave } from './inside-exchange.ts';
 import { addInternalMass } from './internal-mass.ts';
 import { NetworkBuilder, type Provenance } from './network-builder.ts';
 import { type Outdoors, outdoors } from './outdoors.ts';
+import { addPlants } from './plant.ts';
 import type { Face, RoomMeters, RoomParts } from './room-parts.ts';
 import { scheduledValues } from './schedule-values.ts';
 import { shadedSurface } from './shading.ts';
 import { type StepClock, stepClock } from './step-clock.ts';
 import { addRoomSun } from './sun-inside.ts';
-import { addGains, addPlant } from './use.ts';
 import { addWindow, type WindowParts } from './window.ts';
 
 /** How to cut the year and the walls. */
@@ -43,6 +44,8 @@ export interface AssemblyOptions {
   readonly stepMinutes: number;
   /** Multiplies the cells of every layer. */
   readonly refine: number;
+  /** Set-points of heating by room at both ends of every step, in place of the schedule's. */
+  readonly heatingRamps?: ReadonlyMap<string, Float64Array>;
 }
 
 export interface Assembly {
@@ -85,9 +88,20 @@ export function assemble(
   const air = siteAir(weather.site.elevationM);
   const fineness: Fineness = { stepS, refine: options.refine };
   const chains = new Map<string, Chain>();
-  const assumptions: string[] = [];
+  const assumptions: string[] = [...(building.fromLibrary ?? [])];
   const rooms = building.rooms.map((room) =>
-    addRoom({ building, room, air, fineness, chains, outside, clock, builder, assumptions }),
+    addRoom({
+      building,
+      room,
+      air,
+      fineness,
+      chains,
+      outside,
+      clock,
+      builder,
+      assumptions,
+      heatingRamps: options.heatingRamps,
+    }),
   );
   addRoomAir(building, rooms, air, outside, clock, builder);
   const recordNodes = new Set<number>([outside.airNode]);
@@ -129,6 +143,7 @@ interface RoomTask {
   readonly clock: StepClock;
   readonly builder: NetworkBuilder;
   readonly assumptions: string[];
+  readonly heatingRamps: AssemblyOptions['heatingRamps'];
 }
 
 function addRoom(task: RoomTask): RoomParts {
@@ -167,20 +182,18 @@ function addRoom(task: RoomTask): RoomParts {
   );
   addRoomSun({ building, room, faces, windows, views, outside, builder, meters, faceMeter });
   const nodes = { airNode, faces };
-  addGains(building, room, nodes, clock, builder, meters, faceMeter);
-  for (const [kind, plant] of [
-    ['heater', room.heating],
-    ['chiller', room.cooling],
-  ] as const) {
-    if (!plant) continue;
-    const index = addPlant(building, room, plant, kind, nodes, clock, builder);
-    const sign = kind === 'heater' ? 1 : -1;
-    builder.count(kind === 'heater' ? meters.heating : meters.cooling, sign, {
-      kind: 'plant',
-      index,
-    });
-    countRadiantPlant(builder, faces, faceMeter, index, sign * (1 - plant.convectiveShare));
-  }
+  const gains = addGains(building, room, nodes, clock, builder, meters, faceMeter);
+  const heatingRamp = task.heatingRamps?.get(room.id);
+  const plants = addPlants({
+    building,
+    room,
+    nodes,
+    clock,
+    builder,
+    meters,
+    faceMeter,
+    heatingRamp,
+  });
   addOutdoorAir(building, room, { airNode, meters }, air, outside, clock, builder);
   return {
     room,
@@ -189,30 +202,9 @@ function addRoom(task: RoomTask): RoomParts {
     faces,
     meters,
     comfort: comfortHours(building, room, clock),
-    heatSetC: room.heating
-      ? hourlySetPoint(scheduledValues(building, room.heating.setPointC, clock), clock)
-      : null,
-    coolSetC: room.cooling
-      ? hourlySetPoint(scheduledValues(building, room.cooling.setPointC, clock), clock)
-      : null,
+    plants,
+    ...gains,
   };
-}
-
-/** Radiant heat that plant puts on the faces comes back as their heat: take it off their lines. */
-function countRadiantPlant(
-  builder: NetworkBuilder,
-  faces: readonly Face[],
-  faceMeter: (face: Face) => number,
-  plant: number,
-  radiantShare: number,
-): void {
-  if (radiantShare === 0) return;
-  const total = faces.reduce((sum, face) => sum + face.areaM2, 0);
-  for (const face of faces)
-    builder.count(faceMeter(face), (-radiantShare * face.areaM2) / total, {
-      kind: 'plant',
-      index: plant,
-    });
 }
 
 function roomMeters(room: Room, builder: NetworkBuilder): RoomMeters {
@@ -245,12 +237,14 @@ function addSurface(task: RoomTask, surface: Surface): Face {
       chains.set(`${boundary.room}/${boundary.surface}`, {
         outerNode: chain.innerNode,
         innerNode: chain.outerNode,
+        layerNodes: chain.layerNodes,
       });
     else addOuterSide(task, surface, chain.outerNode);
   }
   const otherWay = surface.reversed;
   return {
     node: chain.innerNode,
+    layerNodes: chain.layerNodes,
     surface: surface.id,
     name: key,
     areaM2: netAreaM2(surface),

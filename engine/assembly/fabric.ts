@@ -29,6 +29,8 @@ export interface Fineness {
 export interface Chain {
   readonly outerNode: number;
   readonly innerNode: number;
+  /** For each layer of the construction, in its order, the node with mass nearest to the layer's middle. */
+  readonly layerNodes: readonly number[];
 }
 
 /** Layers of a construction in the terms of the physics, outside to inside. */
@@ -85,8 +87,7 @@ export function addChain(
     inputs,
   });
   const last = mesh.capacityJPerM2K.length - 1;
-  let outerNode = -1;
-  let node = -1;
+  const nodes: number[] = [];
   for (let i = 0; i <= last; i++) {
     const place = i === 0 ? 'outer face' : i === last ? 'inner face' : `node ${i}`;
     const next = builder.node(
@@ -99,10 +100,9 @@ export function addChain(
       },
       mesh.capacityJPerM2K[i] * areaM2,
     );
-    if (i === 0) outerNode = next;
-    else
+    if (i > 0)
       builder.constantLink(
-        node,
+        nodes[i - 1],
         next,
         mesh.conductanceWPerM2K[i - 1] * areaM2,
         about(layerText(building, construction, mesh, i - 1, surface.reversed), {
@@ -110,9 +110,26 @@ export function addChain(
           conductanceWPerM2K: mesh.conductanceWPerM2K[i - 1],
         }),
       );
-    node = next;
+    nodes.push(next);
   }
-  return { outerNode, innerNode: node };
+  const layerNodes = middleNodes(mesh).map((i) => nodes[i]);
+  if (surface.reversed) layerNodes.reverse();
+  return { outerNode: nodes[0], innerNode: nodes[last], layerNodes };
+}
+
+/** For each layer of the mesh the node with mass nearest to its middle, on the scale of resistance. */
+function middleNodes(mesh: ConductionMesh): number[] {
+  const { interfaceResistanceM2KPerW: edges, nodeResistanceM2KPerW: at, capacityJPerM2K } = mesh;
+  return Array.from({ length: edges.length - 1 }, (_, layer) => {
+    const middle = (edges[layer] + edges[layer + 1]) / 2;
+    let best = 0;
+    for (let i = 1; i < at.length; i++) {
+      if (capacityJPerM2K[i] === 0 && capacityJPerM2K[best] > 0) continue;
+      const closer = Math.abs(at[i] - middle) < Math.abs(at[best] - middle);
+      if (closer || (capacityJPerM2K[best] === 0 && capacityJPerM2K[i] > 0)) best = i;
+    }
+    return best;
+  });
 }
 
 /** Which layer a link of the mesh lies in. */

@@ -1,5 +1,7 @@
 // What the parts of the assembly hand to each other about one room.
 import type { Boundary, Rectangle, Room } from '../building/index.ts';
+import type { DrawnHours, PeopleHours } from './gains.ts';
+import type { PlantParts } from './plant.ts';
 
 /** To which line of the room's heat balance the heat through a face belongs. */
 export type FaceBalance = 'opaque' | 'glazing' | 'ground' | 'rooms';
@@ -7,6 +9,8 @@ export type FaceBalance = 'opaque' | 'glazing' | 'ground' | 'rooms';
 /** One face that looks into the room: the inside of a surface, or of a window. */
 export interface Face {
   readonly node: number;
+  /** Node in each layer of the construction, where the face is one of a construction. */
+  readonly layerNodes?: readonly number[];
   readonly surface: string;
   /** Id of the opening where the face is glass. */
   readonly opening?: string;
@@ -61,7 +65,9 @@ export interface RoomParts {
   readonly faces: readonly Face[];
   readonly meters: RoomMeters;
   readonly comfort: ComfortHours | null;
-  /** Set-point in each hour, or null without heater or chiller. */
-  readonly heatSetC: Float64Array | null;
-  readonly coolSetC: Float64Array | null;
+  /** Heaters and chillers, the main heater before its backup. */
+  readonly plants: readonly PlantParts[];
+  readonly people: readonly PeopleHours[];
+  /** Power that gains draw from carriers. */
+  readonly drawn: readonly DrawnHours[];
 }

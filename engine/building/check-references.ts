@@ -1,7 +1,8 @@
 // Ids that are used twice or name nothing, and partitions that only one room knows of.
 import type { Fault } from '../../weather/index.ts';
 import type { Building } from './schema-project.ts';
-import type { Room, Scheduled } from './schema-room.ts';
+import type { Scheduled } from './schema-plant.ts';
+import type { Room } from './schema-room.ts';
 
 /** Every reference that leads nowhere and every id that stands twice. */
 export function referenceFaults(building: Building, file: string): Fault[] {
@@ -39,7 +40,12 @@ export function referenceFaults(building: Building, file: string): Fault[] {
     const hint = near
       ? `Did you mean "${near}"?`
       : `Define it under ${plural[kind]}, or correct the name.`;
-    add(path, `"${id}"`, `the id of a ${kind} in this file`, hint);
+    add(
+      path,
+      `"${id}"`,
+      `the id of a ${kind} in this file${inLibrary.has(kind) ? ' or the generic library' : ''}`,
+      hint,
+    );
   };
   const scheduled = (value: Scheduled, path: string) => {
     if (typeof value === 'object') refer('schedule', value.schedule, `${path}.schedule`);
@@ -146,6 +152,9 @@ export function referenceFaults(building: Building, file: string): Fault[] {
   }
 }
 
+/** Kinds that the parser looks up in the library too. */
+const inLibrary = new Set(['material', 'construction', 'glazing']);
+
 const plural = {
   material: 'materials',
   construction: 'constructions',
@@ -156,7 +165,7 @@ const plural = {
 };
 
 /** A known id within two keystrokes of the wrong one, for the hint. */
-function nearest(id: string, known: ReadonlySet<string>): string | undefined {
+export function nearest(id: string, known: ReadonlySet<string>): string | undefined {
   let best: string | undefined;
   let least = 3;
   for (const other of known) {

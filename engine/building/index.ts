@@ -10,16 +10,18 @@ export {
   surfaceOf,
 } from './find.ts';
 export { parseProject, parseProjectDocument } from './parse-project.ts';
+export type { Comfort, LocalComfort, Votes } from './schema-comfort.ts';
+export type { Carrier, Energy, Supply, SupplyOf } from './schema-energy.ts';
+export type { Gain, Usage } from './schema-gains.ts';
+export type { Emitter, Heating, Radiator, Scheduled } from './schema-plant.ts';
 export type { Construction, Glazing, Layer, Material, Pane, PaneGlazing } from './schema-fabric.ts';
 export { schemaFaults } from './schema-faults.ts';
 export { type Building, type Physics, projectSchema } from './schema-project.ts';
 export type {
   Boundary,
-  Heating,
   Opening,
   Rectangle,
   Room,
-  Scheduled,
   Shading,
   Surface,
 } from './schema-room.ts';

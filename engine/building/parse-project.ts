@@ -1,7 +1,10 @@
 // Text of a project file → Building, or every fault in it. Past this door nothing is checked again.
 import type { Fault, Parsed } from '../../weather/index.ts';
 import { geometryFaults } from './check-geometry.ts';
+import { plantFaults } from './check-plant.ts';
 import { referenceFaults } from './check-references.ts';
+import { useFaults } from './check-use.ts';
+import { withLibrary } from './from-library.ts';
 import { schemaFaults } from './schema-faults.ts';
 import { type Building, projectSchema } from './schema-project.ts';
 
@@ -46,9 +49,11 @@ export function parseProjectDocument(document: unknown, file: string): Parsed<Bu
   if (door.length > 0) return { ok: false, faults: door };
   const parsed = projectSchema.safeParse(document);
   if (!parsed.success) return { ok: false, faults: schemaFaults(parsed.error, document, file) };
-  const building = parsed.data;
+  const building = withLibrary(parsed.data);
   const references = referenceFaults(building, file);
-  const faults = references.length > 0 ? references : geometryFaults(building, file);
+  const later = [geometryFaults, useFaults, plantFaults];
+  const faults =
+    references.length > 0 ? references : later.flatMap((check) => check(building, file));
   return faults.length > 0 ? { ok: false, faults } : { ok: true, value: building };
 }
 

@@ -1,5 +1,6 @@
 // The whole project file: one JSON document, checked by one schema.
 import { z } from 'zod';
+import { energySchema } from './schema-energy.ts';
 import { constructionSchema, glazingSchema, materialSchema } from './schema-fabric.ts';
 import { airExchangeSchema, airPathSchema, roomSchema } from './schema-room.ts';
 import { calendarSchema, profileSchema, scheduleSchema } from './schema-use.ts';
@@ -68,11 +69,15 @@ export const projectSchema = z.strictObject({
   profiles: z.array(profileSchema).default([]),
   schedules: z.array(scheduleSchema).default([]),
   rooms: z.array(roomSchema).min(1),
+  energy: energySchema.prefault({}),
   airPaths: z.array(airPathSchema).default([]),
   airExchanges: z.array(airExchangeSchema).default([]),
   options: z.array(optionSchema).default([]),
 });
 
 /** The project with every default filled in. */
-export type Building = z.infer<typeof projectSchema>;
+export type Building = z.infer<typeof projectSchema> & {
+  /** What the parser took from the generic library, as sentences; no field of the file. */
+  readonly fromLibrary?: readonly string[];
+};
 export type Physics = Building['physics'];

@@ -1,5 +1,8 @@
 // One room: faces, openings, masses, use, air and plant.
 import { z } from 'zod';
+import { comfortSchema } from './schema-comfort.ts';
+import { gainSchema, usageSchema } from './schema-gains.ts';
+import { heatingSchema } from './schema-plant.ts';
 import { between, id, positive, scheduled, share, temperatureC, text } from './schema-values.ts';
 
 /** Lower left corner and size on the wall as seen from inside, or on the floor seen from above. */
@@ -88,35 +91,6 @@ const internalMassSchema = z.strictObject({
   areaM2: positive(1e5),
 });
 
-const gainSchema = z.strictObject({
-  id,
-  name: text.optional(),
-  kind: z.enum(['people', 'lighting', 'equipment']),
-  /** Sensible heat at schedule value 1. */
-  powerW: between(0, 1e6),
-  /** Multiplies the power; left out: always on. */
-  schedule: id.optional(),
-  radiantShare: share.default(0.5),
-});
-
-const heatingSchema = z.strictObject({
-  setPointC: scheduled(temperatureC),
-  /** Left out: without limit. */
-  maxW: between(0, 1e7).optional(),
-  /** The rest reaches the room's surfaces as radiation, by area. */
-  convectiveShare: share.default(1),
-  sensor: z.enum(['air', 'operative']).default('air'),
-  /** 0: ideal control to the set-point. */
-  bandK: between(0, 10).default(0),
-});
-
-const comfortSchema = z.strictObject({
-  bandLowC: scheduled(temperatureC),
-  bandHighC: scheduled(temperatureC),
-  /** Occupied where the value is above 0; left out: every hour. */
-  occupied: id.optional(),
-});
-
 const ventilationSchema = z.strictObject({
   id,
   name: text.optional(),
@@ -146,12 +120,16 @@ export const roomSchema = z.strictObject({
     .optional(),
   surfaces: z.array(surfaceSchema).min(1),
   internalMasses: z.array(internalMassSchema).default([]),
+  /** What goes on in it, by a usage profile of the library; its gains come on top of `gains`. */
+  usage: usageSchema.optional(),
   gains: z.array(gainSchema).default([]),
   infiltration: z
     .strictObject({ airChangesPerH: between(0, 100), schedule: id.optional() })
     .default({ airChangesPerH: 0 }),
   ventilation: z.array(ventilationSchema).default([]),
   heating: heatingSchema.optional(),
+  /** Takes over where `heating` gives all it has; needs `maxW`. */
+  backupHeating: heatingSchema.optional(),
   cooling: heatingSchema.optional(),
   comfort: comfortSchema.optional(),
 });
@@ -177,5 +155,3 @@ export type Opening = Surface['openings'][number];
 export type Boundary = Surface['boundary'];
 export type Shading = z.infer<typeof shadingSchema>;
 export type Rectangle = z.infer<typeof rectangleSchema>;
-export type Heating = NonNullable<Room['heating']>;
-export type Scheduled = Heating['setPointC'];

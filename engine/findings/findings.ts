@@ -1,7 +1,7 @@
 // Run → figures. Everything here is arithmetic on the run's hourly records.
 
 import type { WeatherYear } from '../../weather/index.ts';
-import type { Assembly } from '../assembly/index.ts';
+import type { Assembly, PlantParts } from '../assembly/index.ts';
 import type { Run } from '../network/index.ts';
 import { cautions } from './cautions.ts';
 import { bandFindings } from './comfort-band.ts';
@@ -39,16 +39,7 @@ export function simulationOf(
 ): Simulation {
   const rooms = assembly.rooms.map((parts) => roomHours(run, parts));
   const year = assembly.building.calendar.year ?? weather.year;
-  const figures = rooms.map((hours, r) =>
-    roomFindings(
-      hours,
-      year,
-      assembly.rooms[r].room.heating?.maxW,
-      assembly.rooms[r].room.cooling?.maxW,
-      assembly,
-      r,
-    ),
-  );
+  const figures = rooms.map((hours, r) => roomFindings(hours, year, assembly.rooms[r].plants));
   const building = wholeFindings(rooms, figures, year);
   const worstRoom = Math.max(
     0,
@@ -89,14 +80,7 @@ function outdoorHours(assembly: Assembly, run: Run): Float64Array {
   );
 }
 
-function roomFindings(
-  hours: RoomHours,
-  year: number,
-  maxHeatingW: number | undefined,
-  maxCoolingW: number | undefined,
-  assembly: Assembly,
-  r: number,
-): RoomFindings {
+function roomFindings(hours: RoomHours, year: number, plants: readonly PlantParts[]): RoomFindings {
   return {
     id: hours.id,
     name: hours.name,
@@ -107,33 +91,27 @@ function roomFindings(
     ...bandFindings(hours, year),
     hoursHeatingShort: hoursShort(
       hours.heatingW,
-      maxHeatingW,
-      hours.airC,
-      assembly.rooms[r].heatSetC,
-      1,
+      plants.filter((one) => one.field !== 'cooling'),
+      hours,
     ),
     hoursCoolingShort: hoursShort(
       hours.coolingW,
-      maxCoolingW,
-      hours.airC,
-      assembly.rooms[r].coolSetC,
-      -1,
+      plants.filter((one) => one.field === 'cooling'),
+      hours,
     ),
   };
 }
 
-/** Hours at full power with the set-point missed by more than 0.2 K. */
-function hoursShort(
-  powerW: Float64Array,
-  maxW: number | undefined,
-  airC: Float64Array,
-  setC: Float64Array | null,
-  sign: 1 | -1,
-): number {
-  if (maxW === undefined || setC === null) return 0;
+/** Hours in which these plants gave all they had and the first one's set-point was missed by over 0.2 K. */
+function hoursShort(powerW: Float64Array, plants: readonly PlantParts[], room: RoomHours): number {
+  if (plants.length === 0) return 0;
+  const [{ field, plant, setPointC }] = plants;
+  const sensorC = plant.sensor === 'air' ? room.airC : room.operativeC;
+  const sign = field === 'cooling' ? -1 : 1;
+  const maxW = plants.reduce((sum, one) => sum + one.maxW, 0);
   let count = 0;
   for (let h = 0; h < powerW.length; h++)
-    if (powerW[h] >= maxW * (1 - 1e-6) && sign * (setC[h] - airC[h]) > 0.2) count++;
+    if (powerW[h] >= maxW * (1 - 1e-6) && sign * (setPointC[h] - sensorC[h]) > 0.2) count++;
   return count;
 }
 
