@@ -14,10 +14,8 @@ export interface Answer {
 }
 
 /** How many percent of `whole`, as words; empty where there is no whole. */
-const shareOf = (part: number, whole: number, isHouse: boolean) =>
-  whole > 0
-    ? `${figure((100 * part) / whole)} % of ${figure(whole)} ${isHouse ? 'room hours' : 'occupied'}`
-    : 'nobody is in';
+const shareOf = (part: number, whole: number) =>
+  whole > 0 ? `${figure((100 * part) / whole)} % of ${figure(whole)} occupied` : 'nobody is in';
 
 const nameWhere = (
   rooms: readonly RoomTotals[],
@@ -58,7 +56,7 @@ export function findAnswers(totals: Totals, rooms: readonly RoomTotals[]): Answe
     {
       key: 'below',
       name: 'Hours below the band',
-      aside: shareOf(totals.hoursBelowBand, totals.occupiedHours, isHouse),
+      aside: shareOf(totals.hoursBelowBand, totals.occupiedHours),
       quantity: quantity.hours(isOccupied ? totals.hoursBelowBand : NaN),
       note: isOccupied ? `${figure(totals.degreeHoursBelow)} K·h in all` : '',
       isMain: true,
@@ -66,7 +64,7 @@ export function findAnswers(totals: Totals, rooms: readonly RoomTotals[]): Answe
     {
       key: 'above',
       name: 'Hours above the band',
-      aside: shareOf(totals.hoursAboveBand, totals.occupiedHours, isHouse),
+      aside: shareOf(totals.hoursAboveBand, totals.occupiedHours),
       quantity: quantity.hours(isOccupied ? totals.hoursAboveBand : NaN),
       note: isOccupied ? `${figure(totals.degreeHoursAbove)} K·h in all` : '',
       isMain: true,

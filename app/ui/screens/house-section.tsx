@@ -1,5 +1,7 @@
 // A drawn section of a two-storey house: the picture is the index of the words used by the tool.
 
+import { useWidth } from '../chart/use-width.ts';
+
 const labels = [
   { x: 112, y: 230, end: true, name: 'Outside wall', note: 'layers, U-value' },
   { x: 112, y: 372, end: true, name: 'Infiltration', note: 'air through gaps' },
@@ -34,76 +36,83 @@ const walls = [
 
 const insulation = Array.from({ length: 36 }, (_, i) => `${210 + i * 10} ${i % 2 ? 183.5 : 170.5}`);
 
+/** Width that the drawing is laid out for; narrower, it shrinks, but its words do not. */
+const drawnWidth = 770;
+
 export function HouseSection() {
+  const [box, width] = useWidth<HTMLDivElement>(drawnWidth);
+  const grow = Math.max(1, drawnWidth / Math.max(width, 1));
   return (
-    <svg
-      viewBox="0 0 770 548"
-      className="house-section"
-      role="img"
-      aria-label="Section through a two-storey house with the ways that heat comes and goes: sun through glass, gains and heater bring it in; roof, outside wall, window, infiltration and ground let it out."
-    >
-      <defs>
-        <pattern id="soil" width="16" height="10" patternUnits="userSpaceOnUse">
-          <path d="M2 3h4M10 7h4" className="soil" />
-        </pattern>
-      </defs>
-      <rect y="462" width="770" height="56" fill="url(#soil)" />
-      <path d="M0 462H770" className="ground" />
-      <rect x="205" y="332" width="360" height="130" className="room-fill" />
-      <rect x="205" y="192" width="360" height="130" className="room-fill" />
-      <path d="M205 184.5L385 47L565 184.5Z" className="loft-fill" />
-      <path d="M572.5 217V274.5L450 322H325Z" className="beam" />
-      <path d="M572.5 357V417L470 459.5H320Z" className="beam" />
-      {walls.map(([x, y, width, height]) => (
-        <rect key={`${x} ${y}`} x={x} y={y} width={width} height={height} className="wall-fill" />
-      ))}
-      <path
-        d="M565 217h15v57.5h-15zM570 217v57.5M575 217v57.5M565 357h15v60h-15zM570 357v60M575 357v60"
-        className="wall-line"
-      />
-      <path d="M170 202L385 37L600 202" className="roof-line" />
-      <rect x="210" y="169.5" width="350" height="15" className="insulation" />
-      <path d={`M${insulation.join('L')}`} className="insulation-line" />
-      <circle cx="732" cy="64" r="17" className="sun-disc" />
-      <path d="M700 74L594.3 223.9M707 84L598.5 236.5M714 94L602.7 249.1" className="ray" />
-      {arrows.map(({ d, head, width }) => (
-        <g key={d} className="loss">
-          <path d={d} strokeWidth={width} />
-          <path d={head} className="loss-head" />
-        </g>
-      ))}
-      {[502.5, 510.5, 518.5, 526.5, 534.5].map((x) => (
-        <rect key={x} x={x} y="424.5" width="6" height="27.5" className="heater" />
-      ))}
-      <circle cx="420" cy="404" r="7" className="ink-fill" />
-      <path d="M412 414h16v26h-4v22h-8v-22h-4z" className="ink-fill" />
-      <path d="M150 246L116 226M150 387.5L116 368.5M547.5 438L633.5 420.5" className="leader" />
-      {labels.map(({ x, y, end, name, note }) => (
-        <g key={name} className={end ? 'end' : ''}>
-          <text x={x} y={y} className="body dark medium">
-            {name}
-          </text>
-          <text x={x} y={y + 14}>
-            {note}
-          </text>
-        </g>
-      ))}
-      {[0, 1, 2, 3, 4, 5, 6, 7].map((i) => (
-        <rect
-          key={i}
-          x={190 + i * 50}
-          y="524"
-          width={i === 7 ? 40 : 50}
-          height="4"
-          className={i % 2 ? 'edge-open' : 'edge-full'}
+    <div ref={box} className="house-section">
+      <svg
+        viewBox="0 0 770 548"
+        style={{ fontSize: `${11 * grow}px` }}
+        role="img"
+        aria-label="Section through a two-storey house with the ways that heat comes and goes: sun through glass, gains and heater bring it in; roof, outside wall, window, infiltration and ground let it out."
+      >
+        <defs>
+          <pattern id="soil" width="16" height="10" patternUnits="userSpaceOnUse">
+            <path d="M2 3h4M10 7h4" className="soil" />
+          </pattern>
+        </defs>
+        <rect y="462" width="770" height="56" fill="url(#soil)" />
+        <path d="M0 462H770" className="ground" />
+        <rect x="205" y="332" width="360" height="130" className="room-fill" />
+        <rect x="205" y="192" width="360" height="130" className="room-fill" />
+        <path d="M205 184.5L385 47L565 184.5Z" className="loft-fill" />
+        <path d="M572.5 217V274.5L450 322H325Z" className="beam" />
+        <path d="M572.5 357V417L470 459.5H320Z" className="beam" />
+        {walls.map(([x, y, width, height]) => (
+          <rect key={`${x} ${y}`} x={x} y={y} width={width} height={height} className="wall-fill" />
+        ))}
+        <path
+          d="M565 217h15v57.5h-15zM570 217v57.5M575 217v57.5M565 357h15v60h-15zM570 357v60M575 357v60"
+          className="wall-line"
         />
-      ))}
-      <text x="190" y="541" className="middle">
-        0
-      </text>
-      <text x="440" y="541" className="middle">
-        5 m
-      </text>
-    </svg>
+        <path d="M170 202L385 37L600 202" className="roof-line" />
+        <rect x="210" y="169.5" width="350" height="15" className="insulation" />
+        <path d={`M${insulation.join('L')}`} className="insulation-line" />
+        <circle cx="732" cy="64" r="17" className="sun-disc" />
+        <path d="M700 74L594.3 223.9M707 84L598.5 236.5M714 94L602.7 249.1" className="ray" />
+        {arrows.map(({ d, head, width }) => (
+          <g key={d} className="loss">
+            <path d={d} strokeWidth={width} />
+            <path d={head} className="loss-head" />
+          </g>
+        ))}
+        {[502.5, 510.5, 518.5, 526.5, 534.5].map((x) => (
+          <rect key={x} x={x} y="424.5" width="6" height="27.5" className="heater" />
+        ))}
+        <circle cx="420" cy="404" r="7" className="ink-fill" />
+        <path d="M412 414h16v26h-4v22h-8v-22h-4z" className="ink-fill" />
+        <path d="M150 246L116 226M150 387.5L116 368.5M547.5 438L633.5 420.5" className="leader" />
+        {labels.map(({ x, y, end, name, note }) => (
+          <g key={name} className={end ? 'end' : ''}>
+            <text x={x} y={y} className="body dark medium">
+              {name}
+            </text>
+            <text x={x} y={y + 13.5 * grow}>
+              {note}
+            </text>
+          </g>
+        ))}
+        {[0, 1, 2, 3, 4, 5, 6, 7].map((i) => (
+          <rect
+            key={i}
+            x={190 + i * 50}
+            y="524"
+            width={i === 7 ? 40 : 50}
+            height="4"
+            className={i % 2 ? 'edge-open' : 'edge-full'}
+          />
+        ))}
+        <text x="190" y="541" className="middle">
+          0
+        </text>
+        <text x="440" y="541" className="middle">
+          5 m
+        </text>
+      </svg>
+    </div>
   );
 }

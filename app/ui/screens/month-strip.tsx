@@ -23,7 +23,8 @@ const atLeft =
   (lines: readonly string[], from: 'top' | 'bottom'): Painter =>
   (view) =>
     lines.forEach((line, i) => {
-      const y = from === 'top' ? view.top + 12 + i * 14 : view.bottom - 4;
+      const y =
+        from === 'top' ? view.top + 12 + i * 14 : view.bottom - 4 - (lines.length - 1 - i) * 14;
       words(view, line, 0, y, view.ink['ink-2']);
     });
 
@@ -99,7 +100,7 @@ export function MonthStrip({ calendar, rooms, totals, mark }: MonthStripProps) {
         ]}
         under={[gridLines(ticks.slice(1), (tick) => figure(tick), 'kWh')]}
         over={[
-          atLeft([hasCooling ? 'Each way' : 'Heating'], 'bottom'),
+          atLeft(hasCooling ? ['Heating,', 'cooling'] : ['Heating'], 'bottom'),
           measuredEdge(monthUnits(months)),
           ...marked,
         ]}
