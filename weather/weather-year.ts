@@ -18,7 +18,8 @@ export interface Site {
 
 /**
  * What one value of a column says about its hour: the mean over it, or a reading at one moment,
- * `at` = 0 at its start, 0.5 in its middle, 1 at its end.
+ * `at` = 0 at its start, 0.5 in its middle, 1 at its end; a little outside where a file's moments are.
+ * A radiation reading stands for the hour centred on its moment.
  */
 export type Stands = { readonly kind: 'mean' } | { readonly kind: 'reading'; readonly at: number };
 

@@ -52,17 +52,19 @@ export function exceeded(sorted: Float64Array, share: number): number {
   return sorted[low] + (sorted[high] - sorted[low]) * (at - low);
 }
 
-/** Mean wet bulb of the hours within half a kelvin of a dry bulb. */
+/** Mean wet bulb of the hours within half a kelvin of a dry bulb, or of the nearest where none are. */
 function coincidentWetBulbC(year: WeatherYear, dryBulbC: number): number {
+  const air = year.dryBulbC.values;
+  const nearest = air.reduce((least, t) => Math.min(least, Math.abs(t - dryBulbC)), Infinity);
+  const width = Math.max(0.5, nearest);
   let total = 0;
   let count = 0;
   for (let h = 0; h < year.hours; h++) {
-    const t = year.dryBulbC.values[h];
-    if (Math.abs(t - dryBulbC) > 0.5) continue;
+    if (Math.abs(air[h] - dryBulbC) > width) continue;
     const pressure = year.pressurePa.values[h];
     const ratio = humidityRatio(saturationPressurePa(year.dewPointC.values[h]), pressure);
-    total += Math.min(t, wetBulbC(t, ratio, pressure));
+    total += Math.min(air[h], wetBulbC(air[h], ratio, pressure));
     count++;
   }
-  return count > 0 ? total / count : Number.NaN;
+  return total / count;
 }

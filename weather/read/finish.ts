@@ -43,7 +43,9 @@ export function finishYear(job: Finishing, faults: FaultList): WeatherYear | nul
   const moved = Math.floor(shiftH + 1e-9);
   const within = shiftH - moved + (opened.minuteMeaning === 'moment' ? time.minute / 60 : 0);
   const rowAt = (h: number) => time.rowOfHour[(((h - moved) % hours) + hours) % hours];
-  const sourceYear = Int16Array.from({ length: hours }, (_, h) => store.year[rowAt(h)]);
+  const stampedYear = Int16Array.from({ length: hours }, (_, h) => store.year[rowAt(h)]);
+  const calendar = calendarOf(stampedYear, hours, job.year ?? opened.year, faults);
+  const { sourceYear } = calendar;
   if (shiftH !== 0)
     notes.push({
       kind: 'assumption',
@@ -107,7 +109,6 @@ export function finishYear(job: Finishing, faults: FaultList): WeatherYear | nul
   addHumidity(columns, job, faults, notes);
   addRadiation(columns, job, faults, notes, sunFor);
   addAir(columns, job, faults, notes);
-  const calendar = calendarOf(sourceYear, hours, job.year ?? opened.year, faults);
   if (calendar.note) notes.push(calendar.note);
   if (!faults.isEmpty) return null;
 
@@ -124,7 +125,7 @@ export function finishYear(job: Finishing, faults: FaultList): WeatherYear | nul
     form: job.formName,
     year: calendar.year,
     hours,
-    sourceYear: calendar.sourceYear,
+    sourceYear,
     dryBulbC: need('dryBulbC'),
     dewPointC: need('dewPointC'),
     relativeHumidity: need('relativeHumidity'),

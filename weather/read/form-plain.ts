@@ -75,7 +75,8 @@ export const plain: Form = {
       stamp(cells: readonly string[]) {
         const cell = (at: number) => (at < 0 ? '' : (cells[at] ?? '').trim());
         const sourceYear = plainNumber(cell(yearAt));
-        const known = Number.isInteger(sourceYear) ? sourceYear : year;
+        const hasYear = Number.isInteger(sourceYear) && sourceYear >= 1900 && sourceYear <= 2200;
+        const known = hasYear ? sourceYear : year;
         if (hourAt >= 0) {
           const hour = plainNumber(cell(hourAt));
           if (!Number.isInteger(hour) || hour < 0 || hour > 8783)
@@ -86,7 +87,7 @@ export const plain: Form = {
         if (found === null) return 'local standard time like 2019-01-31T14:00';
         const [y, month, day, hour, minute] = found.slice(1).map(Number);
         return {
-          year: Number.isInteger(sourceYear) ? sourceYear : y,
+          year: hasYear ? sourceYear : y,
           month,
           day,
           minute: hour * 60 + minute,
