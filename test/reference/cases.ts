@@ -11,6 +11,7 @@
 // test cannot compute is named in `leaveOut` with its reason, so that nothing is skipped in silence.
 import { readFileSync } from 'node:fs';
 import { expect } from 'vitest';
+import { record } from './record.ts';
 
 /** How far from the expected value counts as equal: in its own unit, or as a share of it. */
 export type Tolerance =
@@ -87,29 +88,51 @@ export function expectCase(
   leaveOut: Readonly<Record<string, string>> = {},
 ): void {
   const misses: string[] = [];
-  let compared = 0;
+  const worst: Worst = { share: null, key: '' };
+  const compared: string[] = [];
   for (const [key, expected] of Object.entries(one.expected)) {
     if (key in leaveOut) continue;
     const value = found[key];
     const tolerance = one.tolerance[key] ?? one.tolerance['*'];
     if (value === undefined) misses.push(`${key}: not computed`);
     else if (tolerance === undefined) misses.push(`${key}: the case states no tolerance`);
-    else compare(key, value, expected, tolerance, misses);
-    compared++;
+    else compare(key, value, expected, tolerance, misses, worst);
+    compared.push(key);
   }
   for (const key of Object.keys(found))
     if (!(key in one.expected)) misses.push(`${key}: not among the case's expected values`);
-  expect(compared, `${one.id}: values compared`).toBeGreaterThan(0);
+  record({
+    file: one.file,
+    id: one.id,
+    worstShare: worst.share,
+    key: worst.key,
+    compared,
+    leftOut: leaveOut,
+  });
+  expect(compared.length, `${one.id}: values compared`).toBeGreaterThan(0);
   expect(misses, `${one.file}#${one.id} (${one.source})`).toEqual([]);
 }
 
-function compare(key: string, found: Value, expected: Value, tol: Tolerance, misses: string[]) {
+/** Largest distance found so far as a share of its tolerance. */
+interface Worst {
+  share: number | null;
+  key: string;
+}
+
+function compare(
+  key: string,
+  found: Value,
+  expected: Value,
+  tol: Tolerance,
+  misses: string[],
+  worst: Worst,
+) {
   if (isList(expected)) {
     if (!isList(found) || found.length !== expected.length)
       misses.push(`${key}: found ${describe(found)}, expected a list of ${expected.length}`);
     else
       for (let i = 0; i < expected.length; i++)
-        compare(`${key}[${i}]`, found[i] as Value, expected[i] as Value, tol, misses);
+        compare(`${key}[${i}]`, found[i] as Value, expected[i] as Value, tol, misses, worst);
     return;
   }
   const seconds = instantS(expected);
@@ -117,7 +140,12 @@ function compare(key: string, found: Value, expected: Value, tol: Tolerance, mis
     const want = seconds ?? (expected as number);
     const have = seconds === null ? found : (instantS(found) ?? found);
     const width = 'abs' in tol ? tol.abs : tol.rel * Math.abs(want);
-    if (typeof have === 'number' && Math.abs(have - want) <= width + 1e-15) return;
+    const share = typeof have === 'number' ? Math.abs(have - want) / (width + 1e-15) : Infinity;
+    if (!(share <= (worst.share ?? -1))) {
+      worst.share = share;
+      worst.key = key;
+    }
+    if (share <= 1) return;
     const gap = typeof have === 'number' ? `, off by ${have - want}` : '';
     misses.push(
       `${key}: found ${describe(found)}, expected ${expected} within ${width}${gap} (${tol.reason})`,
