@@ -12,6 +12,7 @@ import {
 import { type Building, constructionOf, type Room, type Surface } from '../building/index.ts';
 import type { Problem } from '../network/index.ts';
 import { type AirProperties, addOutdoorAir, addRoomAir, airCapacityJPerK } from './air.ts';
+import { addBridges } from './bridges.ts';
 import { comfortHours } from './comfort-hours.ts';
 import { faceViews } from './enclosure.ts';
 import {
@@ -26,6 +27,8 @@ import {
   roughnessOf,
 } from './fabric.ts';
 import { addGains } from './gains.ts';
+import { addGround } from './ground.ts';
+import { type GroundClimate, groundClimate } from './ground-climate.ts';
 import { addInsideFilm, addInsideLongWave } from './inside-exchange.ts';
 import { addInternalMass } from './internal-mass.ts';
 import { NetworkBuilder, type Provenance } from './network-builder.ts';
@@ -89,6 +92,7 @@ export function assemble(
   const fineness: Fineness = { stepS, refine: options.refine };
   const chains = new Map<string, Chain>();
   const assumptions: string[] = [...(building.fromLibrary ?? [])];
+  const climate = groundClimate(steps, clock);
   const rooms = building.rooms.map((room) =>
     addRoom({
       building,
@@ -98,6 +102,7 @@ export function assemble(
       chains,
       outside,
       clock,
+      climate,
       builder,
       assumptions,
       heatingRamps: options.heatingRamps,
@@ -105,9 +110,7 @@ export function assemble(
   );
   addRoomAir(building, rooms, air, outside, clock, builder);
   const recordNodes = new Set<number>([outside.airNode]);
-  for (const parts of rooms)
-    for (const node of [parts.airNode, ...parts.massNodes, ...parts.faces.map((face) => face.node)])
-      recordNodes.add(node);
+  for (const parts of rooms) for (const node of recordedOf(parts)) recordNodes.add(node);
   return {
     building,
     rooms,
@@ -132,6 +135,11 @@ export function assemble(
   };
 }
 
+function recordedOf(parts: RoomParts): number[] {
+  const bodies = parts.plants.map((one) => one.bodyNode).filter((node) => node >= 0);
+  return [parts.airNode, ...parts.massNodes, ...bodies, ...parts.faces.map((face) => face.node)];
+}
+
 interface RoomTask {
   readonly building: Building;
   readonly room: Room;
@@ -141,6 +149,7 @@ interface RoomTask {
   readonly chains: Map<string, Chain>;
   readonly outside: Outdoors;
   readonly clock: StepClock;
+  readonly climate: GroundClimate;
   readonly builder: NetworkBuilder;
   readonly assumptions: string[];
   readonly heatingRamps: AssemblyOptions['heatingRamps'];
@@ -194,6 +203,7 @@ function addRoom(task: RoomTask): RoomParts {
     faceMeter,
     heatingRamp,
   });
+  addBridges(building, room, { airNode, meters }, outside, clock, builder);
   addOutdoorAir(building, room, { airNode, meters }, air, outside, clock, builder);
   return {
     room,
@@ -237,21 +247,21 @@ function addSurface(task: RoomTask, surface: Surface): Face {
       chains.set(`${boundary.room}/${boundary.surface}`, {
         outerNode: chain.innerNode,
         innerNode: chain.outerNode,
-        layerNodes: chain.layerNodes,
+        layers: chain.layers,
       });
     else addOuterSide(task, surface, chain.outerNode);
   }
   const otherWay = surface.reversed;
   return {
     node: chain.innerNode,
-    layerNodes: chain.layerNodes,
+    layers: chain.layers,
     surface: surface.id,
     name: key,
     areaM2: netAreaM2(surface),
     tiltDeg: surface.tiltDeg,
     azimuthDeg: surface.azimuthDeg,
     emissivity: otherWay ? construction.outsideEmissivity : construction.insideEmissivity,
-    balance: boundary.kind === 'room' ? 'rooms' : boundary.kind === 'ground' ? 'ground' : 'opaque',
+    balance: balanceOf(boundary.kind),
     boundary: boundary.kind,
     light: {
       absorbed: otherWay
@@ -260,6 +270,11 @@ function addSurface(task: RoomTask, surface: Surface): Face {
       transmitted: 0,
     },
   };
+}
+
+function balanceOf(boundary: Surface['boundary']['kind']): Face['balance'] {
+  if (boundary === 'room') return 'rooms';
+  return boundary === 'ground' || boundary === 'ground-contact' ? 'ground' : 'opaque';
 }
 
 const unheatedFilmM2KPerW = 0.13; // ISO 6946, horizontal heat flow
@@ -292,6 +307,7 @@ function addOuterSide(task: RoomTask, surface: Surface, outerNode: number): void
     addOuterExchange(building, face, outside, builder);
     addOuterSun(construction, face, shadedSurface(room, surface), outside, builder);
   }
+  if (boundary.kind === 'ground-contact') addGround(task, surface, boundary.contact, outerNode);
   if (boundary.kind === 'ground') {
     const series = builder.series(
       `${name} ground`,

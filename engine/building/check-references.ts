@@ -1,7 +1,7 @@
 // Ids that are used twice or name nothing, and partitions that only one room knows of.
 import type { Fault } from '../../weather/index.ts';
-import type { Building } from './schema-project.ts';
 import type { Scheduled } from './schema-plant.ts';
+import type { Building } from './schema-project.ts';
 import type { Room } from './schema-room.ts';
 
 /** Every reference that leads nowhere and every id that stands twice. */

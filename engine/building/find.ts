@@ -1,6 +1,7 @@
 // Looking things up by id in a building that has been checked.
 
 import type { Construction, Glazing, Material } from './schema-fabric.ts';
+import type { GroundContact } from './schema-ground.ts';
 import type { Building } from './schema-project.ts';
 import type { Room, Surface } from './schema-room.ts';
 import type { Profile, Schedule } from './schema-use.ts';
@@ -19,3 +20,5 @@ export const profileOf = (b: Building, id: string): Profile => found(b.profiles,
 export const scheduleOf = (b: Building, id: string): Schedule => found(b.schedules, id, 'schedule');
 export const roomOf = (b: Building, id: string): Room => found(b.rooms, id, 'room');
 export const surfaceOf = (room: Room, id: string): Surface => found(room.surfaces, id, 'surface');
+export const groundContactOf = (b: Building, id: string): GroundContact =>
+  found(b.groundContacts, id, 'ground contact');

@@ -3,6 +3,7 @@ export { type Box, boxFaceAreasM2, boxFaceOf } from './box-face.ts';
 export {
   constructionOf,
   glazingOf,
+  groundContactOf,
   materialOf,
   profileOf,
   roomOf,
@@ -10,12 +11,22 @@ export {
   surfaceOf,
 } from './find.ts';
 export { parseProject, parseProjectDocument } from './parse-project.ts';
+export type {
+  AirControl,
+  AirOpening,
+  AirUnit,
+  Doorway,
+  Leakage,
+} from './schema-air.ts';
+export type { ThermalBridge } from './schema-bridges.ts';
 export type { Comfort, LocalComfort, Votes } from './schema-comfort.ts';
 export type { Carrier, Energy, Supply, SupplyOf } from './schema-energy.ts';
-export type { Gain, Usage } from './schema-gains.ts';
-export type { Emitter, Heating, Radiator, Scheduled } from './schema-plant.ts';
 export type { Construction, Glazing, Layer, Material, Pane, PaneGlazing } from './schema-fabric.ts';
 export { schemaFaults } from './schema-faults.ts';
+export type { Gain, Usage } from './schema-gains.ts';
+export type { GroundContact } from './schema-ground.ts';
+export type { Moisture } from './schema-moisture.ts';
+export type { Emitter, Heating, Radiator, Scheduled } from './schema-plant.ts';
 export { type Building, type Physics, projectSchema } from './schema-project.ts';
 export type {
   Boundary,

@@ -1,6 +1,8 @@
 // Text of a project file → Building, or every fault in it. Past this door nothing is checked again.
 import type { Fault, Parsed } from '../../weather/index.ts';
+import { airReferenceFaults } from './check-air-references.ts';
 import { geometryFaults } from './check-geometry.ts';
+import { groundFaults } from './check-ground.ts';
 import { plantFaults } from './check-plant.ts';
 import { referenceFaults } from './check-references.ts';
 import { useFaults } from './check-use.ts';
@@ -50,8 +52,8 @@ export function parseProjectDocument(document: unknown, file: string): Parsed<Bu
   const parsed = projectSchema.safeParse(document);
   if (!parsed.success) return { ok: false, faults: schemaFaults(parsed.error, document, file) };
   const building = withLibrary(parsed.data);
-  const references = referenceFaults(building, file);
-  const later = [geometryFaults, useFaults, plantFaults];
+  const references = [...referenceFaults(building, file), ...airReferenceFaults(building, file)];
+  const later = [geometryFaults, groundFaults, useFaults, plantFaults];
   const faults =
     references.length > 0 ? references : later.flatMap((check) => check(building, file));
   return faults.length > 0 ? { ok: false, faults } : { ok: true, value: building };

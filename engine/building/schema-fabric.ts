@@ -18,6 +18,8 @@ const solidLayer = z.strictObject({ material: id, thicknessM: positive(10) });
 const resistanceLayer = z.strictObject({
   name: text.default('resistance'),
   resistanceM2KPerW: positive(200),
+  /** Diffusion-equivalent air layer thickness s_d; only for moisture (0.01 for an air layer). */
+  vapourSdM: between(0, 10_000).optional(),
 });
 
 /** Layers run from outside to inside (from the other room to this one in a partition). */

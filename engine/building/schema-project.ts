@@ -1,7 +1,9 @@
 // The whole project file: one JSON document, checked by one schema.
 import { z } from 'zod';
+import { airUnitSchema, doorwaySchema } from './schema-air.ts';
 import { energySchema } from './schema-energy.ts';
 import { constructionSchema, glazingSchema, materialSchema } from './schema-fabric.ts';
+import { groundContactSchema } from './schema-ground.ts';
 import { airExchangeSchema, airPathSchema, roomSchema } from './schema-room.ts';
 import { calendarSchema, profileSchema, scheduleSchema } from './schema-use.ts';
 import { between, id, share, text } from './schema-values.ts';
@@ -72,6 +74,9 @@ export const projectSchema = z.strictObject({
   energy: energySchema.prefault({}),
   airPaths: z.array(airPathSchema).default([]),
   airExchanges: z.array(airExchangeSchema).default([]),
+  airUnits: z.array(airUnitSchema).default([]),
+  doorways: z.array(doorwaySchema).default([]),
+  groundContacts: z.array(groundContactSchema).default([]),
   options: z.array(optionSchema).default([]),
 });
 

@@ -1,9 +1,12 @@
 // One room: faces, openings, masses, use, air and plant.
 import { z } from 'zod';
+import { airControlSchema, airOpeningSchema, leakageSchema, recoveryFields } from './schema-air.ts';
+import { thermalBridgeSchema } from './schema-bridges.ts';
 import { comfortSchema } from './schema-comfort.ts';
 import { gainSchema, usageSchema } from './schema-gains.ts';
+import { moistureSchema } from './schema-moisture.ts';
 import { heatingSchema } from './schema-plant.ts';
-import { between, id, positive, scheduled, share, temperatureC, text } from './schema-values.ts';
+import { between, id, positive, scheduled, temperatureC, text } from './schema-values.ts';
 
 /** Lower left corner and size on the wall as seen from inside, or on the floor seen from above. */
 const rectangleSchema = z.strictObject({
@@ -57,6 +60,8 @@ const boundarySchema = z.discriminatedUnion('kind', [
     kind: z.literal('ground'),
     temperatureC: z.union([temperatureC, z.array(temperatureC).length(12)]),
   }),
+  /** On the ground as described by one of the project's ground contacts. */
+  z.strictObject({ kind: z.literal('ground-contact'), contact: id }),
   /** The other room lists the same partition and names this surface. */
   z.strictObject({ kind: z.literal('room'), room: id, surface: id }),
   z.strictObject({ kind: z.literal('fixed'), temperatureC: scheduled(temperatureC) }),
@@ -94,11 +99,14 @@ const internalMassSchema = z.strictObject({
 const ventilationSchema = z.strictObject({
   id,
   name: text.optional(),
-  /** Outdoor air brought in and the same taken out. */
+  /** Outdoor air brought in. */
   flowM3PerS: between(0, 1000),
+  /** Air taken out to outdoors; left out: as much as is brought in. */
+  extractM3PerS: between(0, 1000).optional(),
   schedule: id.optional(),
-  /** Sensible effectiveness. */
-  heatRecovery: share.default(0),
+  ...recoveryFields,
+  /** For a fan that runs on conditions, as in night cooling. */
+  control: airControlSchema.optional(),
 });
 
 export const roomSchema = z.strictObject({
@@ -126,7 +134,12 @@ export const roomSchema = z.strictObject({
   infiltration: z
     .strictObject({ airChangesPerH: between(0, 100), schedule: id.optional() })
     .default({ airChangesPerH: 0 }),
+  /** Leaks driven by wind and stack, in place of fixed air changes. */
+  leakage: leakageSchema.optional(),
   ventilation: z.array(ventilationSchema).default([]),
+  airOpenings: z.array(airOpeningSchema).default([]),
+  thermalBridges: z.array(thermalBridgeSchema).default([]),
+  moisture: moistureSchema.optional(),
   heating: heatingSchema.optional(),
   /** Takes over where `heating` gives all it has; needs `maxW`. */
   backupHeating: heatingSchema.optional(),
