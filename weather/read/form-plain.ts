@@ -106,7 +106,7 @@ function preambleOf(head: Head, faults: FaultList) {
     const found = /^"?#\s*([^:]+?)\s*:\s*(.*?)[\s,;"]*$/.exec(line);
     if (found === null) return;
     const [name, text] = [found[1], found[2]];
-    const number = plainNumber(text);
+    const number = plainNumber(head.delimiter === ',' ? text : text.replace(',', '.'));
     const want = (low: number, high: number): number | undefined => {
       if (number >= low && number <= high) return number;
       faults.cell(i + 1, name, text, `a number from ${low} to ${high}`, 'Correct the line.');
