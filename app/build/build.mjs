@@ -2,6 +2,7 @@
 //
 // Everything goes into a new folder that takes the place of dist/ when it is whole, so that a failed
 // build leaves the last good one. Run by `npm run build`, and by every other command when it is stale.
+import { spawnSync } from 'node:child_process';
 import { existsSync, renameSync, rmSync, writeFileSync } from 'node:fs';
 import { join } from 'node:path';
 import { dist, root, stampFile } from './paths.mjs';
@@ -14,6 +15,7 @@ const programs = {
   start: 'app/host/start.ts',
   'electron-main': 'app/host/electron/main.ts',
   demo: 'demo/run.ts',
+  'demo-weather': 'demo/write-weather.ts',
 };
 /** A sandboxed preload must be one CommonJS file. */
 const preload = { preload: 'app/host/electron/preload.ts' };
@@ -76,6 +78,14 @@ export async function bundleForNode(input, outDir) {
   await vite.build(nodeBuild(input, 'esm', 'js', outDir));
 }
 
+/** So that the demo's project runs without the demo having been run. */
+function makeDemoWeather() {
+  const { status } = spawnSync(process.execPath, [join(dist, 'demo-weather.js')], {
+    stdio: ['ignore', 2, 2],
+  });
+  if (status !== 0) throw new Error("the demo's weather could not be written");
+}
+
 export async function build() {
   const vite = await import('vite');
   const stamp = sourcesStamp(); // before the build: an edit during it makes the result stale
@@ -89,5 +99,6 @@ export async function build() {
     await vite.build(await rendererBuild(fresh));
   rmSync(dist, { recursive: true, force: true });
   renameSync(fresh, dist);
+  makeDemoWeather();
   writeFileSync(stampFile, stamp);
 }

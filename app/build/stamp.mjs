@@ -1,9 +1,9 @@
 // The stamp of a build: a hash of every file it was made from. A build is stale when the stamp that
 // it carries is not the one of the files as they are now.
 import { createHash } from 'node:crypto';
-import { readdirSync, readFileSync } from 'node:fs';
+import { existsSync, readdirSync, readFileSync } from 'node:fs';
 import { join } from 'node:path';
-import { root, stampFile } from './paths.mjs';
+import { demoWeather, root, stampFile } from './paths.mjs';
 
 const folders = ['app', 'demo', 'engine', 'weather'];
 const source = /\.(ts|tsx|mts|mjs|cjs|js|css|html|svg|json|woff2|png)$/;
@@ -31,7 +31,7 @@ export function sourcesStamp() {
 
 export function buildIsFresh() {
   try {
-    return readFileSync(stampFile, 'utf8') === sourcesStamp();
+    return existsSync(demoWeather) && readFileSync(stampFile, 'utf8') === sourcesStamp();
   } catch {
     return false;
   }

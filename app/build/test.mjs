@@ -30,7 +30,12 @@ const vitest = spawnSync(
     ...(browser ? [] : ['--project=unit', '--project=ui']),
     ...process.argv.slice(2),
   ],
-  { cwd: root, stdio: 'inherit', env: { ...process.env, INGLENOOK_BROWSER: browser ?? '' } },
+  {
+    cwd: root,
+    stdio: 'inherit',
+    // A build in this process leaves NODE_ENV at production, with which React's test tools do not work.
+    env: { ...process.env, NODE_ENV: 'test', INGLENOOK_BROWSER: browser ?? '' },
+  },
 );
 if (vitest.status !== 0) failed.push('tests');
 
