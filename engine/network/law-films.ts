@@ -6,17 +6,24 @@ import type { BuoyantLinks, MixedFilmLinks } from './problem.ts';
 
 type Target = Omit<StateLinks, 'laws'>;
 
-/** h = z^(n/2) for z = ΔT² (+ ε); roots where the exponent is a usual one, since `pow` is slow. */
-function raise(z: Float64Array, h: Float64Array, exponent: number): void {
-  const n = z.length;
-  if (exponent === 1 / 3) for (let k = 0; k < n; k++) h[k] = Math.cbrt(Math.sqrt(z[k]));
-  else if (exponent === 1 / 4)
-    for (let k = 0; k < n; k++) h[k] = Math.sqrt(Math.sqrt(Math.sqrt(z[k])));
-  else if (exponent === 1 / 2) for (let k = 0; k < n; k++) h[k] = Math.sqrt(Math.sqrt(z[k]));
-  else if (exponent === 1) for (let k = 0; k < n; k++) h[k] = Math.sqrt(z[k]);
-  else if (exponent === 2 / 3) for (let k = 0; k < n; k++) h[k] = Math.cbrt(z[k]);
-  else if (exponent === 0) h.fill(1);
-  else for (let k = 0; k < n; k++) h[k] = z[k] ** (exponent / 2);
+/** z^(exponent/2) for z = ΔT² (+ ε): by roots where the exponent is a usual one, since `pow` is slow. */
+type Root = 'third' | 'quarter' | 'half' | 'one' | 'two thirds' | 'any';
+
+function rootOf(exponent: number): Root {
+  if (exponent === 1 / 3) return 'third';
+  if (exponent === 1 / 4) return 'quarter';
+  if (exponent === 1 / 2) return 'half';
+  if (exponent === 1) return 'one';
+  return exponent === 2 / 3 ? 'two thirds' : 'any';
+}
+
+function raise(z: number, root: Root, exponent: number): number {
+  if (root === 'third') return Math.cbrt(Math.sqrt(z));
+  if (root === 'one') return Math.sqrt(z);
+  if (root === 'quarter') return Math.sqrt(Math.sqrt(Math.sqrt(z)));
+  if (root === 'half') return Math.sqrt(Math.sqrt(z));
+  if (root === 'two thirds') return Math.cbrt(z);
+  return z ** (exponent / 2);
 }
 
 /**
@@ -26,24 +33,20 @@ export function buoyantLaw(group: BuoyantLinks, set: Target, at: number): Law {
   const { warmerFrom, coolerFrom, exponent, softeningK2, baseSeries, baseWPerK } = group;
   const n = group.from.length;
   const { from, to, slopeFrom, slopeTo, flowW } = set;
-  const z = new Float64Array(n);
-  const h = new Float64Array(n);
+  const root = rootOf(exponent);
   return (x, series) => {
-    for (let k = 0; k < n; k++) {
-      const d = x[from[at + k]] - x[to[at + k]];
-      z[k] = d * d + softeningK2;
-    }
-    raise(z, h, exponent);
     for (let k = 0; k < n; k++) {
       const l = at + k;
       const d = x[from[l]] - x[to[l]];
-      const natural = (d > 0 ? warmerFrom[k] : coolerFrom[k]) * h[k];
-      const base = baseSeries[k] < 0 ? baseWPerK[k] : baseWPerK[k] * series[baseSeries[k]];
-      const share = z[k] > 0 ? (d * d) / z[k] : 0;
-      const slope = base + natural * (1 + exponent * share);
+      const square = d * d;
+      const z = square + softeningK2;
+      const natural = (d > 0 ? warmerFrom[k] : coolerFrom[k]) * raise(z, root, exponent);
+      const s = baseSeries[k];
+      const film = natural + (s < 0 ? baseWPerK[k] : baseWPerK[k] * series[s]);
+      const slope = z > 0 ? film + (exponent * natural * square) / z : film;
       slopeFrom[l] = slope;
       slopeTo[l] = slope;
-      flowW[l] = (base + natural) * d;
+      flowW[l] = film * d;
     }
   };
 }
@@ -56,18 +59,12 @@ export function mixedFilmLaw(group: MixedFilmLinks, set: Target, at: number): La
   const { areaM2, warmerFrom, coolerFrom, exponent, forcedSeries, roughness } = group;
   const n = group.from.length;
   const { from, to, slopeFrom, slopeTo, flowW } = set;
-  const z = new Float64Array(n);
-  const h = new Float64Array(n);
+  const root = rootOf(exponent);
   return (x, series) => {
-    for (let k = 0; k < n; k++) {
-      const d = x[from[at + k]] - x[to[at + k]];
-      z[k] = d * d;
-    }
-    raise(z, h, exponent);
     for (let k = 0; k < n; k++) {
       const l = at + k;
       const d = x[from[l]] - x[to[l]];
-      const natural = (d > 0 ? warmerFrom[k] : coolerFrom[k]) * h[k];
+      const natural = (d > 0 ? warmerFrom[k] : coolerFrom[k]) * raise(d * d, root, exponent);
       const forced = series[forcedSeries[k]];
       const rough = roughness[k];
       const joined = Math.sqrt(natural * natural + forced * forced);

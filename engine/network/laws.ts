@@ -70,17 +70,13 @@ export function compileLaws(network: Network, slotOf: Int32Array, firstFixed: nu
   return { ...set, laws };
 }
 
-/** Evaluates all laws at state `x`. */
+/** Evaluates all laws at state `x`. Slopes at boundary ends are left in: mask them by `freeFrom`, `freeTo`. */
 export function evaluateLaws(
   set: StateLinks,
   x: Float64Array,
   series: Float64Array,
   step: number,
 ): void {
-  const { laws, slopeFrom, slopeTo, freeFrom, freeTo, count } = set;
+  const { laws } = set;
   for (let i = 0; i < laws.length; i++) laws[i](x, series, step);
-  for (let l = 0; l < count; l++) {
-    slopeFrom[l] *= freeFrom[l];
-    slopeTo[l] *= freeTo[l];
-  }
 }

@@ -1,7 +1,7 @@
 // Keeps the matrix of a stage up to date: drivers, slopes, plant rows, factors.
 
 import { assembleDriven } from './driven-links.ts';
-import { assembleEnclosures } from './enclosures.ts';
+import { addEnclosureRest, assembleEnclosures } from './enclosures.ts';
 import { factorFrom } from './sparse-lu.ts';
 import type { Stage } from './stage.ts';
 import { assembleUnits, coolSet, heatSet, off, type UnitsState } from './units-state.ts';
@@ -17,22 +17,37 @@ export function loadDrivers(stage: Stage): void {
   stage.loaded = false; // the upper layer was overwritten
 }
 
-/** How far the slopes in the matrix lag behind, as a share of the nodes' own entries (largest). */
-export function slopeLag(stage: Stage): number {
-  const { laws, slopeFrom, slopeTo, lightness, enclosures } = stage;
-  const { from, to, count } = laws;
+/**
+ * Adds to the right-hand side what the linearisations at state `at` leave, with the slopes in the
+ * matrix, and tells how far these lag behind, as a share of their nodes' own entries (largest).
+ */
+export function addRests(stage: Stage): number {
+  const { laws, slopeFrom, slopeTo, rest, at, b, lightness, enclosures } = stage;
+  const { from, to, flowW, count, freeFrom, freeTo } = laws;
+  const nowFrom = laws.slopeFrom;
+  const nowTo = laws.slopeTo;
   let worst = 0;
   for (let l = 0; l < count; l++) {
-    const a = Math.abs(laws.slopeFrom[l] - slopeFrom[l]) * lightness[from[l]];
-    const b = Math.abs(laws.slopeTo[l] - slopeTo[l]) * lightness[to[l]];
-    if (a > worst) worst = a;
-    if (b > worst) worst = b;
+    const f = from[l];
+    const t = to[l];
+    const sf = slopeFrom[l];
+    const st = slopeTo[l];
+    const q = flowW[l] - sf * at[f] + st * at[t];
+    rest[l] = q;
+    b[f] -= q;
+    b[t] += q;
+    const lagFrom = Math.abs(nowFrom[l] * freeFrom[l] - sf) * lightness[f];
+    const lagTo = Math.abs(nowTo[l] * freeTo[l] - st) * lightness[t];
+    if (lagFrom > worst) worst = lagFrom;
+    if (lagTo > worst) worst = lagTo;
   }
   const { slot, slope, slopeNow, rowSumM2 } = enclosures;
+  if (slot.length === 0) return worst;
   for (let m = 0; m < slot.length; m++) {
-    const a = Math.abs(slopeNow[m] - slope[m]) * rowSumM2[m] * lightness[slot[m]];
-    if (a > worst) worst = a;
+    const lag = Math.abs(slopeNow[m] - slope[m]) * rowSumM2[m] * lightness[slot[m]];
+    if (lag > worst) worst = lag;
   }
+  addEnclosureRest(enclosures, at, b);
   return worst;
 }
 
@@ -42,8 +57,10 @@ export function loadSlopes(stage: Stage, fresh: boolean): void {
   const first = lu.rowStart[layout.firstState];
   matrix.set(withDrivers.subarray(first), first);
   if (fresh) {
-    slopeFrom.set(laws.slopeFrom);
-    slopeTo.set(laws.slopeTo);
+    for (let l = 0; l < laws.count; l++) {
+      slopeFrom[l] = laws.slopeFrom[l] * laws.freeFrom[l];
+      slopeTo[l] = laws.slopeTo[l] * laws.freeTo[l];
+    }
     enclosures.slope.set(enclosures.slopeNow);
   }
   const { ownFrom, ownTo, atFrom, atTo } = stage.lawEntry;

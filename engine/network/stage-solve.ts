@@ -3,17 +3,20 @@
 
 import { sweepBackward, sweepForward } from './chain-sweeps.ts';
 import { driveLinks } from './driven-links.ts';
-import { addEnclosureRest, evaluateEmission } from './enclosures.ts';
+import { evaluateEmission } from './enclosures.ts';
 import { evaluateLaws } from './laws.ts';
 import { solveBackward, solveForward } from './sparse-lu.ts';
 import type { Stage } from './stage.ts';
-import { loadDrivers, loadSlopes, refresh, slopeLag } from './stage-matrix.ts';
+import { addRests, loadDrivers, loadSlopes, refresh } from './stage-matrix.ts';
 import { loadUnits, nextMode, settleModes } from './units-state.ts';
 
-/** Slopes are renewed when they lag by more than this share of their node's own entry. */
-const lagLimit = 0.02;
+/**
+ * Slopes are renewed when they lag by more than this share of their node's own entry: about one
+ * factorisation a stage and two iterations on the benchmark rooms, a good trade for small cores.
+ */
+const lagLimit = 0.003;
 /** The estimated rest of the iteration may be this share of the tolerance. */
-const tailShare = 0.25;
+const tailShare = 0.1;
 /** From this iteration on, slopes are always renewed and the state moves half-way only. */
 const cautious = 12;
 /** From this iteration on, one plant changes its branch at a time. */
@@ -63,25 +66,27 @@ export function solveStage(
   const linear = laws.count === 0 && enclosures.slot.length === 0;
   for (let i = firstState; i < rows; i++) at[i] = x[i];
 
-  let forwarded = false;
   let lastChange = Infinity;
   let slow = false;
   for (let k = 1; k <= maxIterations; k++) {
+    for (let i = firstState; i < rows; i++) b[i] = before[i];
     if (!linear) {
       evaluateLaws(laws, at, series, step);
       evaluateEmission(enclosures, at);
-      const renew = slow || k >= cautious || slopeLag(stage) > lagLimit;
+      const lag = addRests(stage);
+      const renew = slow || k >= cautious || !(lag <= lagLimit);
       if (renew || !stage.loaded) loadSlopes(stage, renew);
+      if (renew) {
+        for (let i = firstState; i < rows; i++) b[i] = before[i];
+        addRests(stage);
+      }
     } else if (!stage.loaded) loadSlopes(stage, true);
     solved.singularRow = refresh(stage);
     if (solved.singularRow >= 0) return;
-    if (!forwarded) {
+    if (k === 1) {
       solveForward(lu, before, 0, firstState);
       for (let i = 0; i < firstState; i++) b[i] = before[i];
-      forwarded = true;
     }
-    for (let i = firstState; i < rows; i++) b[i] = before[i];
-    if (!linear) addRests(stage);
     loadUnits(units, x, b, firstFixed);
     solveForward(lu, b, firstState, rows);
     solveBackward(lu, b, x, firstState, rows);
@@ -95,7 +100,8 @@ export function solveStage(
     const switched = exchangeModes(stage, x, k >= single);
     // What is left shrinks by the same share as the last change did (a geometric tail).
     const share = change / lastChange;
-    const left = share < 0.5 ? (change * share) / (1 - share) : change;
+    const known = lastChange < Infinity && share < 0.5;
+    const left = known ? (change * share) / (1 - share) : change;
     if (!switched && (linear || left <= tailShare * toleranceK || change <= toleranceK)) {
       solved.converged = true;
       break;
@@ -143,21 +149,6 @@ function loadHistory(
   }
   const { factor, series: of } = layout.network.sources;
   for (let k = 0; k < sourceSlot.length; k++) before[sourceSlot[k]] += factor[k] * series[of[k]];
-}
-
-/** Adds to the right-hand side what the linearisations at state `at` leave. */
-function addRests(stage: Stage): void {
-  const { laws, slopeFrom, slopeTo, rest, at, b } = stage;
-  const { from, to, flowW, count } = laws;
-  for (let l = 0; l < count; l++) {
-    const f = from[l];
-    const t = to[l];
-    const q = flowW[l] - slopeFrom[l] * at[f] + slopeTo[l] * at[t];
-    rest[l] = q;
-    b[f] -= q;
-    b[t] += q;
-  }
-  addEnclosureRest(stage.enclosures, at, b);
 }
 
 /** Moves units to the branch they belong on; true where any moved. */

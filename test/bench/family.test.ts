@@ -113,8 +113,8 @@ describe.skipIf(!there)('benchmark family (needs ../shared/weather/tmy3-725650.c
       cool += r.meterW[2 * h + 1] / 1000;
     }
     console.log(n, kind, heat, heat - heating, cool, cool - cooling);
-    expect(Math.abs(heat - heating)).toBeLessThan(0.002 * heating);
-    expect(Math.abs(cool - cooling)).toBeLessThan(0.002 * cooling);
+    expect(Math.abs(heat - heating)).toBeLessThan(0.001 * heating);
+    expect(Math.abs(cool - cooling)).toBeLessThan(0.001 * cooling);
     expect(r.quality.relativeBalanceResidual).toBeLessThan(1e-9);
     expect(r.quality.unconvergedSteps).toBe(0);
   });

@@ -24,7 +24,7 @@ import {
   tight,
   usual,
 } from './problems.ts';
-import { cases, largestGap } from './reference.ts';
+import { cases, largestGap, meetsCase } from './reference.ts';
 
 const at = (node: number) => ({
   sensorNodes: Int32Array.of(node),
@@ -131,6 +131,10 @@ describe('two-capacity rooms', () => {
     const hour = (h: number) => (i.day - 1) * 24 + h - 1;
     const { T_air } = expected;
     expect(T_air ?? expected.power).toBeDefined();
+    meetsCase('04-two-capacity-room.json', id, {
+      ...(T_air ? { T_air: i.hours.map((h) => run.meanC[hour(h)]) } : {}),
+      ...(expected.power ? { power: i.hours.map((h) => run.meterW[hour(h)]) } : {}),
+    });
     if (T_air) {
       const tempC = i.hours.map((h) => run.meanC[hour(h)]);
       const classK = expected.power || id.startsWith('vdi') ? 0.1 : 0.05;
@@ -159,7 +163,7 @@ describe('coupled rooms in steady state', () => {
     '12-hourly-room-and-zones.json',
     (id) => id.startsWith('multi-room'),
   );
-  test.each(all)('$id: temperatures and heater powers', ({ inputs: i, expected }) => {
+  test.each(all)('$id: temperatures and heater powers', ({ id, inputs: i, expected }) => {
     const n = i.H_out.length;
     const outside = n;
     const series: Series[] = [
@@ -198,6 +202,17 @@ describe('coupled rooms in steady state', () => {
       return p < 0 ? 0 : s.plantW[p];
     });
     expect(largestGap(powerW, expected.heater)).toBeLessThan(0.01);
+    const [first] = i.fixed;
+    const theta = Array.from(s.tempC.subarray(0, n));
+    meetsCase('12-hourly-room-and-zones.json', id, {
+      theta,
+      heater: powerW,
+      b_factor: theta.map((t, room) =>
+        first === undefined || i.fixed.some(([held]) => held === room)
+          ? null
+          : (first[1] - t) / (first[1] - i.theta_e),
+      ),
+    });
   });
 });
 
@@ -339,7 +354,20 @@ describe('complementarity', () => {
           [...caps, 0],
           { [2 * n]: 0 },
           {
-            links: [constantLinks(links)],
+            links: [
+              constantLinks(links),
+              {
+                law: 'buoyant',
+                from: Int32Array.from({ length: n }, (_, r) => 2 * r + 1),
+                to: Int32Array.from({ length: n }, (_, r) => 2 * r),
+                warmerFrom: new Float64Array(n).fill(draw(0, 80)),
+                coolerFrom: new Float64Array(n).fill(draw(0, 80)),
+                exponent: 1 / 3,
+                softeningK2: 0,
+                baseSeries: new Int32Array(n).fill(-1),
+                baseWPerK: new Float64Array(n),
+              },
+            ],
             directed: directedLinks(flows),
             plants,
           },

@@ -1,6 +1,7 @@
 // Reads the external check values; each case carries its source.
 
 import { readFileSync } from 'node:fs';
+import { expectCase, referenceCase, type Value } from '../../reference/cases.ts';
 
 export interface Case<I, E> {
   readonly id: string;
@@ -27,3 +28,16 @@ export function largestGap(a: ArrayLike<number>, b: ArrayLike<number>): number {
   }
   return worst;
 }
+
+/** Holds what was computed to the case's own tolerance, and keeps it for the table of checks. */
+export function meetsCase(
+  file: string,
+  id: string,
+  found: Readonly<Record<string, Value>>,
+  leaveOut: Readonly<Record<string, string>> = {},
+): void {
+  expectCase(referenceCase(file, id), found, leaveOut);
+}
+
+/** Reason to leave out a key that the test beside compares. */
+export const besides = 'compared by the test beside';
