@@ -26,13 +26,12 @@ export function delivery(
   const { emitter } = plant;
   if (!emitter) return toRoom(plant.convectiveShare, nodes);
   if (emitter.kind === 'radiator') return byRadiator(room, emitter, name, nodes, builder);
-  const face = nodes.faces.find(
-    (one) => one.surface === emitter.surface && one.layerNodes !== undefined,
-  );
-  if (!face?.layerNodes) throw new Error(`${room.id}/${emitter.surface} has no layers`); // checked
+  const face = nodes.faces.find((one) => one.surface === emitter.surface && one.layers);
+  const middle = face?.layers?.[emitter.layer];
+  if (!face || !middle) throw new Error(`${room.id}/${emitter.surface} has no such layer`); // checked
   return {
-    nodes: Int32Array.of(face.layerNodes[emitter.layer]),
-    shares: Float64Array.of(1),
+    nodes: Int32Array.from(middle.nodes),
+    shares: Float64Array.from(middle.shares),
     bodyNode: -1,
     onFaces: [{ face, share: 1 }],
     toFaces: [],

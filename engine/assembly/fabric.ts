@@ -25,12 +25,21 @@ export interface Fineness {
   readonly refine: number;
 }
 
+/**
+ * Two neighbouring nodes between which a layer's middle lies, and the share of each: heat put in by
+ * these shares flows to both sides as if it came in at the middle itself.
+ */
+export interface LayerMiddle {
+  readonly nodes: readonly [number, number];
+  readonly shares: readonly [number, number];
+}
+
 /** The chain of one surface, outer to inner face. */
 export interface Chain {
   readonly outerNode: number;
   readonly innerNode: number;
-  /** For each layer of the construction, in its order, the node with mass nearest to the layer's middle. */
-  readonly layerNodes: readonly number[];
+  /** The middle of each layer of the construction, in its order. */
+  readonly layers: readonly LayerMiddle[];
 }
 
 /** Layers of a construction in the terms of the physics, outside to inside. */
@@ -112,23 +121,20 @@ export function addChain(
       );
     nodes.push(next);
   }
-  const layerNodes = middleNodes(mesh).map((i) => nodes[i]);
-  if (surface.reversed) layerNodes.reverse();
-  return { outerNode: nodes[0], innerNode: nodes[last], layerNodes };
+  const layerMiddles = middles(mesh, nodes);
+  if (surface.reversed) layerMiddles.reverse();
+  return { outerNode: nodes[0], innerNode: nodes[last], layers: layerMiddles };
 }
 
-/** For each layer of the mesh the node with mass nearest to its middle, on the scale of resistance. */
-function middleNodes(mesh: ConductionMesh): number[] {
-  const { interfaceResistanceM2KPerW: edges, nodeResistanceM2KPerW: at, capacityJPerM2K } = mesh;
+/** The middle of each layer of the mesh on the scale of resistance. */
+function middles(mesh: ConductionMesh, nodes: readonly number[]): LayerMiddle[] {
+  const { interfaceResistanceM2KPerW: edges, nodeResistanceM2KPerW: at } = mesh;
   return Array.from({ length: edges.length - 1 }, (_, layer) => {
     const middle = (edges[layer] + edges[layer + 1]) / 2;
-    let best = 0;
-    for (let i = 1; i < at.length; i++) {
-      if (capacityJPerM2K[i] === 0 && capacityJPerM2K[best] > 0) continue;
-      const closer = Math.abs(at[i] - middle) < Math.abs(at[best] - middle);
-      if (closer || (capacityJPerM2K[best] === 0 && capacityJPerM2K[i] > 0)) best = i;
-    }
-    return best;
+    let i = 0;
+    while (i < at.length - 2 && at[i + 1] < middle) i++;
+    const share = (middle - at[i]) / (at[i + 1] - at[i]);
+    return { nodes: [nodes[i], nodes[i + 1]], shares: [1 - share, share] };
   });
 }
 

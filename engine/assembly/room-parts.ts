@@ -1,5 +1,6 @@
 // What the parts of the assembly hand to each other about one room.
 import type { Boundary, Rectangle, Room } from '../building/index.ts';
+import type { LayerMiddle } from './fabric.ts';
 import type { DrawnHours, PeopleHours } from './gains.ts';
 import type { PlantParts } from './plant.ts';
 
@@ -9,8 +10,8 @@ export type FaceBalance = 'opaque' | 'glazing' | 'ground' | 'rooms';
 /** One face that looks into the room: the inside of a surface, or of a window. */
 export interface Face {
   readonly node: number;
-  /** Node in each layer of the construction, where the face is one of a construction. */
-  readonly layerNodes?: readonly number[];
+  /** The middle of each layer, where the face is one of a construction. */
+  readonly layers?: readonly LayerMiddle[];
   readonly surface: string;
   /** Id of the opening where the face is glass. */
   readonly opening?: string;
