@@ -11,6 +11,7 @@ import {
   type ConductionMesh,
   type Layer,
   meshConstruction,
+  outsideViews,
   roughnessFactor,
   type ShadedWindow,
   thirdPowerFilm,
@@ -192,17 +193,15 @@ export function addOuterExchange(
       filmAbout,
     );
   } else builder.scaledLink(node, outside.airNode, areaM2, series, filmAbout);
-  const skyView = (1 + Math.cos((tiltDeg * Math.PI) / 180)) / 2;
-  // Walton 1983: the sky near the horizon is seen through so much air that it counts at air temperature.
-  const coldShare = building.physics.outsideLongWave === 'low-sky-at-air' ? Math.sqrt(skyView) : 1;
-  const toSkyM2 = areaM2 * emissivity * skyView * coldShare;
+  const views = outsideViews(tiltDeg, building.physics.outsideLongWave === 'low-sky-at-air');
+  const toSkyM2 = areaM2 * emissivity * views.sky;
   const toAirM2 = areaM2 * emissivity - toSkyM2;
   const about = (what: string): Provenance => ({
     ...face.about,
     what,
     method:
       'grey face to black surroundings by tilt view factor; low sky at air temperature (Walton 1983)',
-    inputs: { areaM2, emissivity, skyViewFactor: skyView, coldShare },
+    inputs: { areaM2, emissivity, skyViewShare: views.sky },
   });
   if (toSkyM2 > 0)
     builder.radiantLink(node, outside.skyNode, toSkyM2, about('radiation to the sky'));

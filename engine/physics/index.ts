@@ -37,6 +37,7 @@ export * from './lumped-room.ts';
 export * from './moisture-buffer.ts';
 export * from './operative-temperature.ts';
 export * from './outside-film.ts';
+export * from './outside-long-wave.ts';
 export * from './pane-optics.ts';
 export * from './people-gains.ts';
 export * from './plant-efficiency.ts';
