@@ -42,8 +42,8 @@ function onGround(contact: Json): Json {
     id: 'floor',
     name: 'Floor',
     layers: [
-      { material: 'concrete', thicknessM: 0.15 },
       { name: 'insulation', resistanceM2KPerW: 4 },
+      { material: 'concrete', thicknessM: 0.15 },
     ],
   });
   return project;
@@ -106,10 +106,10 @@ describe('a slab by ISO 13370', () => {
       ),
     );
     const swing = (Math.max(...standard) - Math.min(...standard)) / 2;
-    // 1 MJ/(m²·K) of soil between 1 and 4 m²·K/W has a time constant τ of 10 days: it shifts a yearly
-    // swing by ω·τ = 0.17 of itself; the room's own swing adds 0.03.
+    // 1 MJ/(m²·K) of soil between 1.1 and 4.5 m²·K/W delays by C·R·R'/(R + R') = 10 days, the slab above
+    // by 2 more: 0.2 of a yearly swing. The room's own swing adds 0.03, the monthly steps some more.
     months.forEach((flow, m) => {
-      expect(Math.abs(flow - standard[m])).toBeLessThan(0.2 * swing);
+      expect(Math.abs(flow - standard[m])).toBeLessThan(0.25 * swing);
     });
   });
 
