@@ -41,6 +41,7 @@ function nodeBuild(input, format, extension, outDir) {
       sourcemap: true,
       minify: false,
       rolldownOptions: {
+        checks: { pluginTimings: false },
         input,
         output: {
           format,
@@ -68,6 +69,7 @@ async function rendererBuild(outDir) {
       assetsInlineLimit: 0,
       modulePreload: { polyfill: false },
       chunkSizeWarningLimit: 1500,
+      rolldownOptions: { checks: { pluginTimings: false } },
     },
   };
 }

@@ -47,7 +47,7 @@ async function runCommand(args: readonly string[], { out, err }: Streams): Promi
 }
 
 /** Says why it ended, and gives the exit status. */
-function explain(error: unknown, { err, env }: Streams): number {
+export function explain(error: unknown, { err, env }: Streams): number {
   const say = (text: string) => err.write(`${text}\n`);
   if (error instanceof InputFaults) {
     for (const fault of error.faults) say(faultText(fault));

@@ -1,8 +1,14 @@
-import { monthOfHour } from '../../engine/index.ts';
-import type { WeatherColumn, WeatherYear } from '../../weather/index.ts';
+import { hourName } from '../../engine/index.ts';
+import {
+  type ClimateSummary,
+  climateSummary,
+  type MonthClimate,
+  type WeatherColumn,
+  type WeatherYear,
+} from '../../weather/index.ts';
 import type { Command } from './command.ts';
 import { openWeather } from './inputs.ts';
-import { table, wrap } from './table.ts';
+import { figure, table, wrap } from './table.ts';
 
 interface ColumnEntry {
   readonly column: string;
@@ -17,6 +23,9 @@ function isColumn(value: unknown): value is WeatherColumn {
   return typeof value === 'object' && value !== null && 'values' in value && 'stands' in value;
 }
 
+const readingAt = (at: number) =>
+  at === 0 ? 'reading at its start' : at === 1 ? 'reading at its end' : `reading ${at} h into it`;
+
 function columnsOf(year: WeatherYear): readonly ColumnEntry[] {
   return Object.entries(year).flatMap(([column, value]: readonly [string, unknown]) => {
     if (!isColumn(value)) return [];
@@ -26,37 +35,8 @@ function columnsOf(year: WeatherYear): readonly ColumnEntry[] {
     const mean = finite.reduce((sum, one) => sum + one, 0) / finite.length;
     const min = finite.reduce((a, b) => Math.min(a, b), Number.POSITIVE_INFINITY);
     const max = finite.reduce((a, b) => Math.max(a, b), Number.NEGATIVE_INFINITY);
-    const said = stands.kind === 'mean' ? 'mean of the hour' : `reading at ${stands.at} h`;
+    const said = stands.kind === 'mean' ? 'mean of the hour' : readingAt(stands.at);
     return [{ column, origin, stands: said, min, mean, max }];
-  });
-}
-
-interface MonthEntry {
-  readonly month: number;
-  readonly meanC: number;
-  readonly minC: number;
-  readonly maxC: number;
-  readonly ghiKWhPerM2: number;
-  readonly dniKWhPerM2: number;
-  readonly meanWindMPerS: number;
-}
-
-function monthsOf(year: WeatherYear): readonly MonthEntry[] {
-  const hoursOf = Array.from({ length: 12 }, (): number[] => []);
-  for (let h = 0; h < year.hours; h++) hoursOf[monthOfHour(h, year.hours)].push(h);
-  return hoursOf.map((hours, m) => {
-    const of = (column: WeatherColumn) => hours.map((h) => column.values[h]);
-    const sum = (values: readonly number[]) => values.reduce((a, b) => a + b, 0);
-    const tempC = of(year.dryBulbC);
-    return {
-      month: m + 1,
-      meanC: sum(tempC) / hours.length,
-      minC: Math.min(...tempC),
-      maxC: Math.max(...tempC),
-      ghiKWhPerM2: sum(of(year.ghiWPerM2)) / 1000,
-      dniKWhPerM2: sum(of(year.dniWPerM2)) / 1000,
-      meanWindMPerS: sum(of(year.windMPerS)) / hours.length,
-    };
   });
 }
 
@@ -71,12 +51,27 @@ function weatherDocument(file: string, sha256: string, year: WeatherYear) {
     year: year.year,
     hours: year.hours,
     columns: columnsOf(year),
-    months: monthsOf(year),
+    climate: climateSummary(year),
     notes: year.notes,
   };
 }
 
 type WeatherDocument = ReturnType<typeof weatherDocument>;
+
+function climateText(climate: ClimateSummary, hours: number, year: number): string {
+  const { design } = climate;
+  const c = (value: number) => `${figure(value, 1)} °C`;
+  const at = (hour: number) => hourName(hour, hours, year).slice(5).replace('T', ' ');
+  const spell = ({ firstDay, days, meanDryBulbC }: ClimateSummary['coldestSpell']) =>
+    `${days} days from ${at(firstDay * 24).slice(0, 5)}, mean ${c(meanDryBulbC)}`;
+  return `Year: mean ${c(climate.meanDryBulbC)}; coldest hour ${c(climate.minDryBulbC)} at ${at(climate.coldestHour)}, hottest ${c(climate.maxDryBulbC)} at ${at(climate.hottestHour)}
+Coldest spell: ${spell(climate.coldestSpell)}; hottest: ${spell(climate.hottestSpell)}
+Degree days to 18 °C, from daily means: ${figure(climate.heatingDegreeDays18Kd, 0)} K·d below, ${figure(climate.coolingDegreeDays18Kd, 0)} K·d above
+Heating design: ${c(design.heating996C)} exceeded in 99.6 % of the hours, ${c(design.heating99C)} in 99 %
+Cooling design, dry bulb / wet bulb: ${c(design.cooling04C)} / ${c(design.wetBulbAtCooling04C)} exceeded in 0.4 % of the hours, ${c(design.cooling1C)} / ${c(design.wetBulbAtCooling1C)} in 1 %, ${c(design.cooling2C)} / ${c(design.wetBulbAtCooling2C)} in 2 %
+One year gives milder design values than a climate table of many years, which sizing for people who
+could come to harm should use.`;
+}
 
 function weatherText({ site, form, year, hours, sha256, ...rest }: WeatherDocument): string {
   const side = (deg: number, plus: string, minus: string) =>
@@ -88,18 +83,19 @@ function weatherText({ site, form, year, hours, sha256, ...rest }: WeatherDocume
   return [
     `${site.name}, ${side(site.latitudeDeg, 'N', 'S')}, ${side(site.longitudeDeg, 'E', 'W')}, ${site.elevationM} m, ${zone}
 Form: ${form}. ${hours} hours, calendar of ${year}. SHA-256 ${sha256}`,
-    table<MonthEntry>(
+    table<MonthClimate>(
       [
         { head: 'Month', of: (row) => months[row.month - 1] },
-        { head: 'Mean air', unit: '°C', digits: 1, of: (row) => row.meanC },
-        { head: 'Coldest', unit: '°C', digits: 1, of: (row) => row.minC },
-        { head: 'Warmest', unit: '°C', digits: 1, of: (row) => row.maxC },
-        { head: 'Sun, horizontal', unit: 'kWh/m²', digits: 1, of: (row) => row.ghiKWhPerM2 },
-        { head: 'Sun, beam', unit: 'kWh/m²', digits: 1, of: (row) => row.dniKWhPerM2 },
+        { head: 'Mean air', unit: '°C', digits: 1, of: (row) => row.meanDryBulbC },
+        { head: 'Coldest', unit: '°C', digits: 1, of: (row) => row.minDryBulbC },
+        { head: 'Warmest', unit: '°C', digits: 1, of: (row) => row.maxDryBulbC },
+        { head: 'Sun, horizontal', unit: 'kWh/m²', digits: 1, of: (row) => row.ghiJPerM2 / 3.6e6 },
+        { head: 'Sun, beam', unit: 'kWh/m²', digits: 1, of: (row) => row.dniJPerM2 / 3.6e6 },
         { head: 'Mean wind', unit: 'm/s', digits: 1, of: (row) => row.meanWindMPerS },
       ],
-      rest.months,
+      rest.climate.months,
     ),
+    climateText(rest.climate, hours, year),
     table<ColumnEntry>(
       [
         { head: 'Column', of: (row) => row.column },

@@ -338,7 +338,8 @@ describe('weather and network', () => {
     const meanC = rows.reduce((sum, row) => sum + Number(row.split(',')[1]), 0) / rows.length;
     const column = document.columns.find((one: { column: string }) => one.column === 'dryBulbC');
     expect(column.mean).toBeCloseTo(meanC, 9);
-    expect(document.months).toHaveLength(12);
+    expect(document.climate.months).toHaveLength(12);
+    expect(document.climate.meanDryBulbC).toBeCloseTo(meanC, 9);
   });
 
   test('a table that is no weather is a fault of the file', async () => {
