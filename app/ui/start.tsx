@@ -21,10 +21,15 @@ export function startWindow(desk: Desk, runYear: RunYear) {
   app.store.subscribe((now, before) => {
     if (now.scheme !== before.scheme) localStorage.setItem(schemeKey, now.scheme);
   });
-  void desk.recent().then(
-    (recent) => app.set({ recent }),
-    () => app.set({ notice: 'The list of recent projects could not be read.' }),
-  );
+  const readRecent = () =>
+    void desk.recent().then(
+      (recent) => app.set({ recent }),
+      () => app.set({ notice: 'The list of recent projects could not be read.' }),
+    );
+  readRecent();
+  app.store.subscribe((now, before) => {
+    if (now.project !== before.project) readRecent();
+  });
   createRoot(place).render(
     <StrictMode>
       <Window app={app} />

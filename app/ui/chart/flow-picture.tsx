@@ -49,6 +49,9 @@ export function flowRows(flows: Flows): string[][] {
   ];
 }
 
+/** Kept while the pointer runs over hours with few or many streams, so that nothing below moves. */
+const leastHeight = 180;
+
 export interface FlowPictureProps {
   readonly flows: Flows;
   readonly unit: string;
@@ -82,7 +85,11 @@ export function FlowPicture(props: FlowPictureProps) {
 
   return (
     <div ref={box}>
-      <svg width={width} height={top + picture.height + 12} aria-hidden="true">
+      <svg
+        width={width}
+        height={top + Math.max(picture.height, leastHeight) + 12}
+        aria-hidden="true"
+      >
         <text x={x0 - 8} y={12} className="end">
           {wordsInto}
         </text>

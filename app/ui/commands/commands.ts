@@ -129,9 +129,3 @@ export const commands: readonly Command[] = [
     run: (app) => app.set({ dialog: 'shortcuts' }),
   },
 ];
-
-export function commandById(id: string): Command {
-  const command = commands.find((one) => one.id === id);
-  if (!command) throw new Error(`No command is called ${id}.`);
-  return command;
-}

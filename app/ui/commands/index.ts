@@ -5,5 +5,5 @@ export {
   type MenuName,
   mayActWhileTyping,
 } from './command.ts';
-export { commandById, commands } from './commands.ts';
+export { commands } from './commands.ts';
 export { allHits, findHits, type Hit } from './search.ts';

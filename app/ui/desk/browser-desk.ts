@@ -3,13 +3,11 @@
 
 import type { Desk, OpenedFile, OpenedProject } from './desk.ts';
 
-export const projectEnding = '.inglenook.json';
-
-export async function readDropped(file: File): Promise<OpenedFile> {
+async function readDropped(file: File): Promise<OpenedFile> {
   return { file: file.name, text: await file.text() };
 }
 
-export function isProject(file: string): boolean {
+function isProject(file: string): boolean {
   return file.toLowerCase().endsWith('.json');
 }
 

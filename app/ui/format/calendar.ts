@@ -47,7 +47,7 @@ export function makeCalendar(hours: number, year?: number): Calendar {
   return { hours, days, months, firstWeekday };
 }
 
-export function monthOf(calendar: Calendar, hour: number): number {
+function monthOf(calendar: Calendar, hour: number): number {
   const at = calendar.months.findIndex((month) => hour < month.endHour);
   return at < 0 ? 11 : at;
 }

@@ -7,7 +7,6 @@ export {
   hourText,
   type Month,
   makeCalendar,
-  monthOf,
   stampText,
 } from './calendar.ts';
 export {
