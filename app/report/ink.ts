@@ -1,0 +1,30 @@
+// The light colours of the window's look (app/ui/look/tokens.css), which the report is printed in.
+// test/app/report/ink.test.ts holds the two lists together.
+
+export const ink = {
+  sheet: '#fcfdfc',
+  line: '#cbd3d0',
+  ink: '#17232b',
+  'ink-2': '#47565e',
+  'ink-3': '#5a686f',
+  'heat-in': '#b84a1f',
+  'heat-out': '#1b5a86',
+  sun: '#e3b23c',
+  'sun-ink': '#805600',
+  band: '#dde9dd',
+  'band-ink': '#3f6a4d',
+  air: '#5a686f',
+  warn: '#845600',
+  ghost: '#a9b4b5',
+  'amount-1': '#f7e7db',
+  'amount-2': '#f0cbb2',
+  'chill-2': '#c0d7e6',
+  'warm-0': '#174e75',
+  'warm-1': '#6b9fc2',
+  'warm-2': '#bdd5e3',
+  'warm-3': '#edf3ed',
+  'warm-4': '#d9e6d9',
+  'warm-5': '#edbe9e',
+  'warm-6': '#d97f52',
+  'warm-7': '#a8441b',
+} as const;
