@@ -1,9 +1,9 @@
 import { type ChildProcess, spawn } from 'node:child_process';
-import { existsSync, mkdirSync, mkdtempSync, readFileSync, rmSync, writeFileSync } from 'node:fs';
-import { createRequire } from 'node:module';
+import { existsSync, mkdirSync, mkdtempSync, rmSync, writeFileSync } from 'node:fs';
 import { tmpdir } from 'node:os';
 import { join } from 'node:path';
 import { fileURLToPath } from 'node:url';
+import axe from 'axe-core';
 import { type Browser, chromium, type Page } from 'playwright-core';
 import { afterAll, beforeAll, describe, expect, test } from 'vitest';
 import { findBrowser } from '../../../app/host/find-browser.mjs';
@@ -13,7 +13,6 @@ import { sampleText, sampleWeather } from '../sample.ts';
 // drawn for, judged by axe-core (WCAG 2 A and AA, and its best practices), and used by keyboard alone.
 
 const program = fileURLToPath(new URL('../../../dist/start.js', import.meta.url));
-const axe = readFileSync(createRequire(import.meta.url).resolve('axe-core/axe.min.js'), 'utf8');
 let folder: string;
 let host: ChildProcess;
 let browser: Browser;
@@ -62,7 +61,7 @@ const title = () => page.getByRole('heading', { level: 1 }).textContent();
 
 /** What axe-core finds wrong with the page as it stands, as lines. */
 async function wrongs(): Promise<string[]> {
-  return page.evaluate(`${axe};
+  return page.evaluate(`${axe.source};
     axe.run(document).then(({ violations }) =>
       violations.map((v) => v.id + ': ' + v.nodes.map((n) => n.html.slice(0, 120)).join(' | ')))`);
 }

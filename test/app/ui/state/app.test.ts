@@ -1,7 +1,12 @@
 import { expect, test, vi } from 'vitest';
 import type { Desk } from '../../../../app/ui/desk/index.ts';
-import { createApp, type RunYear, type Watch } from '../../../../app/ui/state/index.ts';
-import type { Fault } from '../../../../weather/index.ts';
+import {
+  asksForSite,
+  createApp,
+  type RunYear,
+  type Watch,
+} from '../../../../app/ui/state/index.ts';
+import { type Fault, readWeather } from '../../../../weather/index.ts';
 import { makeSimulation } from '../fixture.ts';
 
 const weather = { file: 'table.csv', text: 'a' };
@@ -136,4 +141,27 @@ test('closing the project keeps the colours and drops the rest', async () => {
   app.closeProject();
   const state = app.store.getState();
   expect([state.scheme, state.project, state.screen]).toEqual(['dark', null, 'welcome']);
+});
+
+test('a table without a site asks for one; other faults do not', async () => {
+  const headings = 'time,dryBulbC,relativeHumidity,windMPerS,ghiWPerM2';
+  const read = readWeather(`${headings}\n2023-01-01 00:00,4,0.8,2,0\n`, { file: 'table.csv' });
+  if (read.ok) throw new Error('one row is no year');
+  const stateWith = (faults: readonly Fault[]) => ({
+    ...createApp(desk(), succeed).store.getState(),
+    run: { kind: 'refused' as const, faults },
+  });
+  const siteFaults = read.faults.filter(({ mend }) => mend.includes('site'));
+  expect(siteFaults.length).toBeGreaterThan(0);
+  expect(asksForSite(stateWith(siteFaults))).toBe(true);
+  const others: Fault[] = [
+    {
+      file: 'a',
+      place: { path: 'rooms[0].name' },
+      found: '',
+      expected: 'a name',
+      mend: 'Name it.',
+    },
+  ];
+  expect(asksForSite(stateWith(others))).toBe(false);
 });
