@@ -49,6 +49,11 @@ export function FindingsColumn({ simulation }: { simulation: Simulation }) {
       <p className="quiet">
         {isStale ? 'From before the last change' : `${simulation.findings.weather.place}, one year`}
       </p>
+      <p className="unseen" role="status">
+        {run.kind === 'running'
+          ? 'Running the year'
+          : `${answers[0]?.name ?? ''}: ${plain(answers[0]?.quantity ?? quantity.energyKWh(NaN))}`}
+      </p>
       <div className={isStale ? 'is-stale' : ''}>
         {answers.map((answer) => (
           <AnswerRow key={answer.key} answer={answer} />

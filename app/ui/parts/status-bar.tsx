@@ -22,9 +22,8 @@ export function StatusBar() {
   const closes = powerOfTen(quality.relativeBalanceResidual);
   return (
     <footer className="status">
-      {notice ? (
-        <span role="status">{notice}</span>
-      ) : (
+      <span role="status">{notice}</span>
+      {!notice && (
         <>
           <span>
             Year run in {duration(timings.runMs)}, {figure(stepMinutes)} min steps

@@ -127,7 +127,12 @@ export function createApp(desk: Desk, runYear: RunYear, start: Partial<AppState>
     store,
     set,
     go(screen, roomId) {
-      set({ screen, isDrawerOpen: false, ...(roomId === undefined ? {} : { roomId }) });
+      set({
+        screen,
+        isDrawerOpen: false,
+        notice: null,
+        ...(roomId === undefined ? {} : { roomId }),
+      });
     },
     openDemo: () =>
       ask(desk.demo, show, 'The example did not come with this copy. Open a project.'),
