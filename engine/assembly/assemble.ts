@@ -80,7 +80,7 @@ export function assemble(
   options: AssemblyOptions,
 ): Assembly {
   const stepS = options.stepMinutes * 60;
-  const steps = weatherSteps(weather, stepS);
+  const steps = weatherSteps(weather, stepS, { skyMethod: building.physics.skyTemperature });
   const clock = stepClock(
     building.calendar,
     { year: weather.year, hours: weather.hours, utcOffsetH: weather.site.utcOffsetH },

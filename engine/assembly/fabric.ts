@@ -219,6 +219,7 @@ const outsideFilmMethod = {
     'Yazdanian & Klems 1994 wind term, joined with natural convection (Walton 1983)',
   'iso-6946': 'ISO 6946, 4 + 4·v',
   mcadams: 'McAdams 1954, rough plate',
+  constant: 'constant 20 W/(m²·K), as ISO 6946 has it at 4 m/s',
 };
 
 /** Sunlight absorbed by an opaque face outdoors, as a source at its node. */

@@ -78,6 +78,7 @@ export function outdoors(
     const atHeight = windAtHeightMPerS(1, heightM, terrain); // the profile is linear in the wind
     if (method === 'iso-6946')
       return stationMPerS.map((v) => standardOutsideFilmWPerM2K(v * atHeight));
+    if (method === 'constant') return stationMPerS.map(() => standardOutsideFilmWPerM2K(4));
     if (method === 'mcadams') return stationMPerS.map((v) => roughPlateFilmWPerM2K(v * atHeight));
     // Power laws: their value at the height is that at the station times that of the profile.
     const { windward, leeward } = stationFilms();

@@ -5,6 +5,7 @@ import type { GroundContact } from './schema-ground.ts';
 import type { Building } from './schema-project.ts';
 import type { Room, Surface } from './schema-room.ts';
 import type { Profile, Schedule } from './schema-use.ts';
+import type { Covering } from './schema-window.ts';
 
 function found<T extends { readonly id: string }>(list: readonly T[], id: string, what: string): T {
   const item = list.find((one) => one.id === id);
@@ -15,6 +16,7 @@ function found<T extends { readonly id: string }>(list: readonly T[], id: string
 export const materialOf = (b: Building, id: string): Material => found(b.materials, id, 'material');
 export const constructionOf = (b: Building, id: string): Construction =>
   found(b.constructions, id, 'construction');
+export const coveringOf = (b: Building, id: string): Covering => found(b.coverings, id, 'covering');
 export const glazingOf = (b: Building, id: string): Glazing => found(b.glazings, id, 'glazing');
 export const profileOf = (b: Building, id: string): Profile => found(b.profiles, id, 'profile');
 export const scheduleOf = (b: Building, id: string): Schedule => found(b.schedules, id, 'schedule');

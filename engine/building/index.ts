@@ -2,6 +2,7 @@
 export { type Box, boxFaceAreasM2, boxFaceOf } from './box-face.ts';
 export {
   constructionOf,
+  coveringOf,
   glazingOf,
   groundContactOf,
   materialOf,
@@ -37,3 +38,11 @@ export type {
   Surface,
 } from './schema-room.ts';
 export type { Calendar, Profile, Schedule } from './schema-use.ts';
+export type {
+  BlindAtWindow,
+  Covering,
+  CoveringControl,
+  CoveringOf,
+  Frame,
+  NightInsulation,
+} from './schema-window.ts';

@@ -6,6 +6,7 @@ import { groundFaults } from './check-ground.ts';
 import { plantFaults } from './check-plant.ts';
 import { referenceFaults } from './check-references.ts';
 import { useFaults } from './check-use.ts';
+import { windowFaults, windowReferenceFaults } from './check-windows.ts';
 import { withLibrary } from './from-library.ts';
 import { schemaFaults } from './schema-faults.ts';
 import { type Building, projectSchema } from './schema-project.ts';
@@ -52,8 +53,12 @@ export function parseProjectDocument(document: unknown, file: string): Parsed<Bu
   const parsed = projectSchema.safeParse(document);
   if (!parsed.success) return { ok: false, faults: schemaFaults(parsed.error, document, file) };
   const building = withLibrary(parsed.data);
-  const references = [...referenceFaults(building, file), ...airReferenceFaults(building, file)];
-  const later = [geometryFaults, groundFaults, useFaults, plantFaults];
+  const references = [
+    ...referenceFaults(building, file),
+    ...airReferenceFaults(building, file),
+    ...windowReferenceFaults(building, file),
+  ];
+  const later = [geometryFaults, windowFaults, groundFaults, useFaults, plantFaults];
   const faults =
     references.length > 0 ? references : later.flatMap((check) => check(building, file));
   return faults.length > 0 ? { ok: false, faults } : { ok: true, value: building };

@@ -7,16 +7,27 @@ import { groundContactSchema } from './schema-ground.ts';
 import { airExchangeSchema, airPathSchema, roomSchema } from './schema-room.ts';
 import { calendarSchema, profileSchema, scheduleSchema } from './schema-use.ts';
 import { between, id, share, text } from './schema-values.ts';
+import { coveringSchema } from './schema-window.ts';
 
 /** Which published method computes what; the defaults are the first of each list. */
 const physicsSchema = z.strictObject({
   conduction: z.enum(['fine', 'coarse']).default('fine'),
   insideConvection: z.enum(['walton', 'alamdari-hammond', 'iso-6946']).default('walton'),
-  outsideConvection: z.enum(['yazdanian-klems', 'iso-6946', 'mcadams']).default('yazdanian-klems'),
+  outsideConvection: z
+    .enum(['yazdanian-klems', 'iso-6946', 'mcadams', 'constant'])
+    .default('yazdanian-klems'),
   insideLongWave: z.enum(['grey-enclosure', 'mean-radiant-node']).default('grey-enclosure'),
   outsideLongWave: z.enum(['low-sky-at-air', 'unmixed-sky']).default('low-sky-at-air'),
+  /** `auto`: horizontal infrared of the table, else Berdahl & Martin from dew point and cloud. */
+  skyTemperature: z
+    .enum(['auto', 'berdahl-martin', 'clark-allen', 'brunt', 'air-11'])
+    .default('auto'),
   diffuseSky: z.enum(['perez', 'hay-davies', 'isotropic']).default('perez'),
   beamInside: z.enum(['floor', 'patch']).default('floor'),
+  /** Where diffuse light meets the faces first: as the window sees them, or sky light down and ground light up. */
+  diffuseInside: z.enum(['view-factors', 'sky-and-ground']).default('view-factors'),
+  /** `fixed-shares`: no reflections are followed and no light is lost through glass. */
+  solarInside: z.enum(['radiosity', 'fixed-shares']).default('radiosity'),
 });
 
 const siteSchema = z.strictObject({
@@ -68,6 +79,8 @@ export const projectSchema = z.strictObject({
   materials: z.array(materialSchema).default([]),
   constructions: z.array(constructionSchema).default([]),
   glazings: z.array(glazingSchema).default([]),
+  /** Blinds and shutters that windows refer to. */
+  coverings: z.array(coveringSchema).default([]),
   profiles: z.array(profileSchema).default([]),
   schedules: z.array(scheduleSchema).default([]),
   rooms: z.array(roomSchema).min(1),

@@ -7,6 +7,7 @@ import { gainSchema, usageSchema } from './schema-gains.ts';
 import { moistureSchema } from './schema-moisture.ts';
 import { heatingSchema } from './schema-plant.ts';
 import { between, id, positive, scheduled, temperatureC, text } from './schema-values.ts';
+import { blindAtWindowSchema, frameSchema, nightInsulationSchema } from './schema-window.ts';
 
 /** Lower left corner and size on the wall as seen from inside, or on the floor seen from above. */
 const rectangleSchema = z.strictObject({
@@ -46,11 +47,16 @@ const openingSchema = z.strictObject({
   id,
   name: text.optional(),
   glazing: id,
+  /** Of the whole window, frame included. */
   areaM2: positive(1000),
   /** Place on the face; its size must give `areaM2`. Used for view factors, shading and the sun's patch. */
   rectangle: rectangleSchema.optional(),
   /** Left out: what shades the wall shades the opening too, where both have their place on a box. */
   shading: shadingSchema.optional(),
+  /** Left out: the whole opening is glass. */
+  frame: frameSchema.optional(),
+  blind: blindAtWindowSchema.optional(),
+  nightInsulation: nightInsulationSchema.optional(),
 });
 
 const boundarySchema = z.discriminatedUnion('kind', [
