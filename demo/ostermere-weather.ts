@@ -51,7 +51,8 @@ function walk(random: () => number, memoryH: number): Float64Array {
 /** Share of the sky, from a walk: half the hours nearly clear or overcast, as maritime skies are. */
 const coverOf = (x: number): number => Math.min(1, Math.max(0, 0.62 + 0.55 * x));
 
-const round = (value: number, digits: number): number => Number(value.toFixed(digits));
+/** To so many decimals; never a negative nought. */
+const round = (value: number, digits: number): number => Number(value.toFixed(digits)) + 0;
 
 /** The year, ready for `writePlainWeather`. */
 export function ostermereYear(): WeatherYear {
