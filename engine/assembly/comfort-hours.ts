@@ -23,6 +23,15 @@ export function comfortHours(
     bandLowC: hourly(scheduledValues(building, comfort.bandLowC, clock)),
     bandHighC: hourly(scheduledValues(building, comfort.bandHighC, clock)),
     occupied,
+    votes: comfort.votes
+      ? {
+          clothingClo:
+            comfort.votes.clothingClo === 'by-weather'
+              ? null
+              : hourly(scheduledValues(building, comfort.votes.clothingClo, clock)),
+          metRate: hourly(scheduledValues(building, comfort.votes.metRate, clock)),
+        }
+      : null,
   };
 }
 

@@ -56,6 +56,11 @@ export interface ComfortHours {
   readonly bandLowC: Float64Array;
   readonly bandHighC: Float64Array;
   readonly occupied: Uint8Array;
+  /** What people wear (null: by the weather) and do, where votes are asked for. */
+  readonly votes: {
+    readonly clothingClo: Float64Array | null;
+    readonly metRate: Float64Array;
+  } | null;
 }
 
 /** A room as node and meter numbers: findings map results back through it. */

@@ -194,7 +194,7 @@ function supplyFaults(building: Building, supply: Supply, path: string, add: Add
   carrierFault(building, supply.backup?.carrier, `${path}.backup.carrier`, add);
   // No machine that heats a room delivers below 20 °C, so this limit holds for all of them.
   supply.cop?.forEach((point, i) => {
-    const coldC = supply.sourceC ?? point.outdoorC;
+    const coldC = point.outdoorC;
     if (coldC >= 20) return;
     const limit = carnotHeatingCop(coldC, 20);
     if (point.value > limit)

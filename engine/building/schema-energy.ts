@@ -61,10 +61,10 @@ export const supplySchema = z.discriminatedUnion('kind', [
     ...common,
     /** Constant temperature of ground or water; left out: outdoor air. */
     sourceC: temperatureC.optional(),
-    /** Either tested values or a share of Carnot. */
+    /** Either tested values by the temperature of the source or a share of Carnot. */
     cop: points(between(1, 20)).optional(),
     carnot: carnotSchema.optional(),
-    /** Greatest heat output by outdoor temperature; left out: without limit. */
+    /** Greatest heat output by the temperature of the source; left out: without limit. */
     capacityW: points(between(0, 1e8)).optional(),
     leastShare,
     cycling: cycling.default('water'),

@@ -1,11 +1,20 @@
 // Run → figures. Everything here is arithmetic on the run's hourly records.
 
 import type { WeatherYear } from '../../weather/index.ts';
-import type { Assembly, PlantParts } from '../assembly/index.ts';
+import {
+  type Assembly,
+  type PeopleHours,
+  type PlantParts,
+  referenceVapourPa,
+} from '../assembly/index.ts';
 import type { Run } from '../network/index.ts';
+import { personGain } from '../physics/index.ts';
 import { cautions } from './cautions.ts';
+import { runningMeanHoursC } from './comfort-adaptive.ts';
 import { bandFindings } from './comfort-band.ts';
+import { finalEnergy } from './final-energy.ts';
 import { hourName, monthOfHour } from './hour-name.ts';
+import { roomComfort } from './room-comfort.ts';
 import { roomHours } from './room-hours.ts';
 import type {
   BalanceKWh,
@@ -37,10 +46,27 @@ export function simulationOf(
   run: Run,
   timings: Findings['timings'],
 ): Simulation {
-  const rooms = assembly.rooms.map((parts) => roomHours(run, parts));
   const year = assembly.building.calendar.year ?? weather.year;
-  const figures = rooms.map((hours, r) => roomFindings(hours, year, assembly.rooms[r].plants));
-  const building = wholeFindings(rooms, figures, year);
+  const outdoorC = outdoorHours(assembly, run);
+  const runningMeanC = runningMeanHoursC(outdoorC);
+  const climate = { outdoorC, runningMeanC, latitudeDeg: weather.site.latitudeDeg, year };
+  const rooms: RoomHours[] = [];
+  const figures: RoomFindings[] = [];
+  const energy = finalEnergy(assembly.building, assembly.rooms, outdoorC, (m) =>
+    meterHours(run, m),
+  );
+  assembly.rooms.forEach((parts, r) => {
+    const hours = roomHours(run, parts);
+    const comfort = roomComfort(run, parts, hours, climate);
+    rooms.push(comfort.vote ? { ...hours, vote: comfort.vote } : hours);
+    figures.push({
+      ...roomFindings(hours, year, parts.plants),
+      ...latentGains(parts.people, hours.airC),
+      ...comfort.findings,
+      ...energy?.rooms[r],
+    });
+  });
+  const building = { ...wholeFindings(rooms, figures, year), ...energy?.building };
   const worstRoom = Math.max(
     0,
     ...figures.map(({ balanceKWh }) => Math.abs(balanceKWh.residual) / throughput(balanceKWh)),
@@ -57,7 +83,8 @@ export function simulationOf(
     stepMinutes: run.problem.stepS / 60,
     rooms: figures,
     building,
-    assumptions: assembly.assumptions,
+    ...(energy ? { supplies: energy.supplies, currency: assembly.building.energy.currency } : {}),
+    assumptions: [...assembly.assumptions, ...(energy?.assumptions ?? [])],
     cautions: cautions(figures),
     quality: {
       relativeBalanceResidual: Math.max(quality.relativeBalanceResidual, worstRoom),
@@ -68,7 +95,23 @@ export function simulationOf(
     },
     timings,
   };
-  return { findings, hours: run.records, year, outdoorC: outdoorHours(assembly, run), rooms };
+  return { findings, hours: run.records, year, outdoorC, rooms };
+}
+
+function meterHours(run: Run, meter: number): Float64Array {
+  const width = run.problem.meters.length;
+  return Float64Array.from({ length: run.records }, (_, h) => run.meterW[h * width + meter]);
+}
+
+/** Heat of people that is no dry heat, by the air of each hour. */
+function latentGains(people: readonly PeopleHours[], airC: Float64Array) {
+  if (people.length === 0) return {};
+  let sumW = 0;
+  for (const { metRate, sweats, heads } of people)
+    for (let h = 0; h < airC.length; h++)
+      if (heads[h] > 0)
+        sumW += heads[h] * personGain(metRate, sweats ? airC[h] : 24, referenceVapourPa).latentW;
+  return { latentGainsKWh: sumW / 1000 };
 }
 
 function outdoorHours(assembly: Assembly, run: Run): Float64Array {

@@ -1,6 +1,11 @@
 // The front door: from a run to what a person wants to know.
 export { cautions, standingCaution } from './cautions.ts';
+export type { AdaptiveFindings } from './comfort-adaptive.ts';
 export { bandFindings } from './comfort-band.ts';
+export type { AsymmetryFindings, LocalFindings } from './comfort-local.ts';
+export type { VoteFindings } from './comfort-votes.ts';
+export type { SpaceEnergy, SupplyFindings } from './final-energy.ts';
 export { simulationOf } from './findings.ts';
 export { dayName, hourName, monthOfHour } from './hour-name.ts';
+export type { Criterion, OverheatingFindings } from './overheating.ts';
 export * from './simulation.ts';

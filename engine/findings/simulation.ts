@@ -1,5 +1,7 @@
 // What one run of a building gives: findings as figures, and the hours behind them.
 import type { WeatherNote } from '../../weather/index.ts';
+import type { SpaceEnergy, SupplyFindings } from './final-energy.ts';
+import type { RoomComfort } from './room-comfort.ts';
 
 /** Highest, lowest and mean over the year, with the start of the hour in local standard time. */
 export interface Extremes {
@@ -36,8 +38,8 @@ export interface WorstWeek {
   readonly degreeHours: number;
 }
 
-/** Figures of one room, or of the whole building. */
-export interface SpaceFindings {
+/** Figures of one room, or of the whole building. Energy that is bought is there where carriers are named. */
+export interface SpaceFindings extends Partial<SpaceEnergy> {
   readonly floorAreaM2: number;
   readonly heatingKWh: number;
   readonly coolingKWh: number;
@@ -58,7 +60,7 @@ export interface SpaceFindings {
   readonly balanceKWh: BalanceKWh;
 }
 
-export interface RoomFindings extends SpaceFindings {
+export interface RoomFindings extends SpaceFindings, RoomComfort {
   readonly id: string;
   readonly name: string;
   readonly worstWeekBelow: WorstWeek | null;
@@ -66,6 +68,8 @@ export interface RoomFindings extends SpaceFindings {
   /** Hours in which the heater (chiller) gave all it had and the set-point was missed by more than 0.2 K. */
   readonly hoursHeatingShort: number;
   readonly hoursCoolingShort: number;
+  /** Vapour that people give off, as heat [kWh]; 0 where they are not counted by heads. */
+  readonly latentGainsKWh?: number;
 }
 
 export interface RunQuality {
@@ -89,6 +93,9 @@ export interface Findings {
   readonly stepMinutes: number;
   readonly rooms: readonly RoomFindings[];
   readonly building: SpaceFindings;
+  /** Machines behind the rooms, and the currency of all costs, where carriers are named. */
+  readonly supplies?: readonly SupplyFindings[];
+  readonly currency?: string;
   readonly assumptions: readonly string[];
   readonly cautions: readonly string[];
   readonly quality: RunQuality;
@@ -116,6 +123,8 @@ export interface RoomHours {
   readonly bandLowC: Float64Array;
   readonly bandHighC: Float64Array;
   readonly occupied: Uint8Array;
+  /** Predicted mean vote, NaN in empty hours; where votes were asked for. */
+  readonly vote?: Float64Array;
   readonly flowsW: HourlyFlows;
 }
 
