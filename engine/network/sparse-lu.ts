@@ -70,7 +70,9 @@ export function factorFrom(lu: SparseLu, a: Float64Array, from: number): number 
     const end = rowStart[i + 1];
     const diag = diagonal[i];
     for (let p = begin; p < end; p++) work[column[p]] = a[p];
-    let scale = Math.abs(work[i]);
+    // A plant's row starts without a diagonal: its pivot is judged by what the elimination puts there.
+    const own = Math.abs(work[i]);
+    let scale = own;
     for (let p = begin; p < diag; p++) {
       const k = column[p];
       const w = work[k];
@@ -83,7 +85,7 @@ export function factorFrom(lu: SparseLu, a: Float64Array, from: number): number 
       const before = work[i];
       const kEnd = rowStart[k + 1];
       for (let q = diagonal[k] + 1; q < kEnd; q++) work[column[q]] -= l * values[q];
-      scale += Math.abs(work[i] - before);
+      if (own === 0) scale += Math.abs(work[i] - before);
     }
     for (let p = diag; p < end; p++) values[p] = work[column[p]];
     const pivot = values[diag];

@@ -10,9 +10,10 @@ import { assembleUnits, coolSet, heatSet, off, type UnitsState } from './units-s
 export function loadDrivers(stage: Stage): void {
   const { layout, lu, constant, withDrivers, driven } = stage;
   const first = lu.rowStart[layout.firstDriven];
-  withDrivers.set(constant.subarray(first), first);
+  const { matrix } = stage;
+  for (let p = first; p < constant.length; p++) withDrivers[p] = constant[p];
   assembleDriven(driven, withDrivers);
-  stage.matrix.set(withDrivers.subarray(first), first);
+  for (let p = first; p < constant.length; p++) matrix[p] = withDrivers[p];
   stage.stale = Math.min(stage.stale, layout.firstDriven);
   stage.loaded = false; // the upper layer was overwritten
 }
@@ -55,7 +56,7 @@ export function addRests(stage: Stage): number {
 export function loadSlopes(stage: Stage, fresh: boolean): void {
   const { layout, lu, withDrivers, matrix, laws, slopeFrom, slopeTo, enclosures } = stage;
   const first = lu.rowStart[layout.firstState];
-  matrix.set(withDrivers.subarray(first), first);
+  for (let p = first; p < matrix.length; p++) matrix[p] = withDrivers[p];
   if (fresh) {
     for (let l = 0; l < laws.count; l++) {
       slopeFrom[l] = laws.slopeFrom[l] * laws.freeFrom[l];

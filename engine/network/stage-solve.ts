@@ -10,11 +10,6 @@ import type { Stage } from './stage.ts';
 import { addRests, loadDrivers, loadSlopes, refresh } from './stage-matrix.ts';
 import { loadUnits, nextMode, settleModes } from './units-state.ts';
 
-/**
- * Slopes are renewed when they lag by more than this share of their node's own entry: about one
- * factorisation a stage and two iterations on the benchmark rooms, a good trade for small cores.
- */
-const lagLimit = 0.003;
 /** The estimated rest of the iteration may be this share of the tolerance. */
 const tailShare = 0.1;
 /** From this iteration on, slopes are always renewed and the state moves half-way only. */
@@ -74,7 +69,7 @@ export function solveStage(
       evaluateLaws(laws, at, series, step);
       evaluateEmission(enclosures, at);
       const lag = addRests(stage);
-      const renew = slow || k >= cautious || !(lag <= lagLimit);
+      const renew = slow || k >= cautious || !(lag <= stage.lagLimit);
       if (renew || !stage.loaded) loadSlopes(stage, renew);
       if (renew) {
         for (let i = firstState; i < rows; i++) b[i] = before[i];

@@ -45,6 +45,8 @@ export interface Stage {
   };
   /** 1/diagonal of the constant layer, 0 at boundaries: how much a slope weighs at its node. */
   readonly lightness: Float64Array;
+  /** Slopes in the matrix are renewed when they lag by more than this share of their node's own entry. */
+  readonly lagLimit: number;
   /** Right-hand side before the iteration, and in it; by slot. */
   readonly before: Float64Array;
   readonly b: Float64Array;
@@ -54,6 +56,26 @@ export interface Stage {
   stale: number;
   /** Whether slopes were put into the matrix yet. */
   loaded: boolean;
+}
+
+/** Lag of the slopes at which a small core is factored again: two iterations a stage, one factorisation. */
+const leastLag = 0.003;
+/** Ratio of factor to solve work up to which that pays, and the lag never passed. */
+const cheapRatio = 3;
+const mostLag = 0.03;
+
+/** The dearer a factorisation against a solve (many rooms, much fill), the longer slopes are kept. */
+function lagLimitFor(lu: SparseLu, firstState: number): number {
+  let factorWork = 0;
+  for (let i = firstState; i < lu.size; i++) {
+    for (let p = lu.rowStart[i]; p < lu.diagonal[i]; p++) {
+      const k = lu.column[p];
+      factorWork += lu.rowStart[k + 1] - lu.diagonal[k];
+    }
+  }
+  const solveWork = lu.rowStart[lu.size] - lu.rowStart[firstState];
+  const ratio = solveWork > 0 ? factorWork / solveWork : 1;
+  return Math.min(mostLag, leastLag * Math.max(1, ratio / cheapRatio));
 }
 
 /** Everything that one stage length needs. `stageS` Infinity gives the steady state. */
@@ -134,6 +156,7 @@ export function createStage(layout: Layout, stageS: number): Stage {
       atTo: to.map((b, l) => entry(b, from[l])),
     },
     lightness,
+    lagLimit: lagLimitFor(lu, layout.firstState),
     before: new Float64Array(slotCount),
     b: new Float64Array(slotCount),
     at: new Float64Array(slotCount),

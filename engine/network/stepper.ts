@@ -29,6 +29,8 @@ export interface Stepper {
   readonly stage: Stage;
   readonly balance: Balance;
   readonly series: Float64Array;
+  /** Whether any driver differs between the stages of a step. */
+  readonly hasLinear: boolean;
   /** States at the step's start, its first stage and its end; by slot. */
   x0: Float64Array;
   x1: Float64Array;
@@ -53,6 +55,7 @@ export function createStepper(problem: Problem, method: Method): Stepper {
     stage,
     balance: compileBalance(stage),
     series: new Float64Array(problem.series.length),
+    hasLinear: problem.series.some((one) => one.hold === 'linear'),
     x0: state(),
     x1: state(),
     x2: state(),
@@ -94,7 +97,7 @@ export function advance(s: Stepper, k: number, recorder: Recorder | null): numbe
   addStageFlows(balance, stage, x1, series, 1 - gamma);
   if (recorder) addStage(recorder, stage, x1, 1 - gamma);
 
-  readSeries(problem.series, k, 1, series);
+  if (s.hasLinear) readSeries(problem.series, k, 1, series);
   setUnitBounds(units, series, x1, gamma);
   for (let i = s.layout.firstState; i < rows; i++) x2[i] = x1[i] + carry * (x1[i] - x0[i]);
   units.mode.set(s.modes2);
