@@ -14,6 +14,18 @@ import { buildIsFresh } from './stamp.mjs';
 
 const oldestNode = 20;
 
+async function buildNow() {
+  console.error('Building …');
+  try {
+    const { build } = await import('./build.mjs');
+    await build();
+    return true;
+  } catch (error) {
+    console.error(`The build failed: ${error.message}`);
+    return false;
+  }
+}
+
 /** Installs and builds what is missing or stale. False when that failed, with the reason printed. */
 export async function setUp(what) {
   if (Number(process.versions.node.split('.')[0]) < oldestNode) {
@@ -26,22 +38,17 @@ export async function setUp(what) {
   if (packagesAreInstalled() && !needsBuild()) return true;
   return alone(async () => {
     if (!packagesAreInstalled() && !installPackages()) return false;
-    if (!needsBuild()) return true;
-    console.error('Building …');
-    try {
-      const { build } = await import('./build.mjs');
-      await build();
-      return true;
-    } catch (error) {
-      console.error(`The build failed: ${error.message}`);
-      return false;
-    }
+    return needsBuild() ? buildNow() : true;
   });
+}
+
+/** npm runs this after installing. Without the development packages there is nothing to build with. */
+function prepare() {
+  return buildIsFresh() || !existsSync(join(root, 'node_modules', 'vite')) || alone(buildNow);
 }
 
 if (isProgram(import.meta.url)) {
   const [what = 'packages'] = process.argv.slice(2);
-  // npm runs this as `prepare` after installing; without the development packages nothing can be built.
-  const bare = what === 'prepare' && !existsSync(join(root, 'node_modules', 'vite'));
-  if (!bare && !(await setUp(what === 'prepare' ? 'build' : what))) process.exitCode = 1;
+  const isDone = await (what === 'prepare' ? prepare() : setUp(what));
+  if (!isDone) process.exitCode = 1;
 }
