@@ -8,7 +8,7 @@ import { quality } from './chapters/quality.ts';
 import { rooms } from './chapters/rooms.ts';
 import type { ChapterMaker } from './report.ts';
 
-export { type Markup, markup } from './markup.ts';
+export type { Markup } from './markup.ts';
 export { reportPage } from './page.ts';
 export type { Chapter, ChapterMaker, ReportInput } from './report.ts';
 export type { Font } from './style.ts';
