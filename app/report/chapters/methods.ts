@@ -24,6 +24,7 @@ const choices: Choices = {
       'wind at the height of the face: Yazdanian and Klems (1994), roughness after Walton (1983)',
     'iso-6946': 'by wind speed, ISO 6946:2017, Annex C',
     mcadams: 'rough plate, McAdams (1954)',
+    constant: '20 W/(m²·K) throughout, as ISO 6946 has it at 4 m/s',
   },
   insideLongWave: {
     'grey-enclosure':
@@ -34,14 +35,29 @@ const choices: Choices = {
     'low-sky-at-air': 'sky, ground, and the low sky at air temperature',
     'unmixed-sky': 'sky and ground',
   },
+  skyTemperature: {
+    auto: 'horizontal infrared where the table has it, else Berdahl and Martin (1984), Martin and Berdahl (1984)',
+    'berdahl-martin': 'Berdahl and Martin (1984), Martin and Berdahl (1984)',
+    'clark-allen': 'Clark and Allen (1978)',
+    brunt: 'Brunt (1932)',
+    'air-11': '11 K below the air, ISO 52016-1',
+  },
   diffuseSky: {
     perez: 'Perez et al. (1990)',
     'hay-davies': 'Hay and Davies (1980)',
     isotropic: 'an evenly bright sky',
   },
   beamInside: {
-    floor: 'the beam falls on the floor; the rest is followed through its reflections',
-    patch: 'the beam’s patch by geometry; the rest is followed through its reflections',
+    floor: 'on the floor',
+    patch: 'on the faces that its patch meets, by geometry',
+  },
+  diffuseInside: {
+    'view-factors': 'on what the window sees, by view factors',
+    'sky-and-ground': 'sky light downward, ground light upward',
+  },
+  solarInside: {
+    radiosity: 'followed until absorbed, or out through the glass again (radiosity)',
+    'fixed-shares': 'in fixed shares; no reflection is followed',
   },
 };
 
@@ -59,15 +75,14 @@ export const methods: ChapterMaker = ({ building: { physics } }) => {
       'Sun through glass',
       'by angle, Fresnel; absorption pane by pane, Edwards (1977); gas gaps, ISO 15099 and EN 673',
     ],
-    ['Sun inside', choices.beamInside[physics.beamInside]],
-    [
-      'Sky temperature',
-      'horizontal infrared where the table has it, else Berdahl and Martin (1984), Martin and Berdahl (1984)',
-    ],
+    ['Beam inside', choices.beamInside[physics.beamInside]],
+    ['Diffuse light inside', choices.diffuseInside[physics.diffuseInside]],
+    ['Reflected light inside', choices.solarInside[physics.solarInside]],
+    ['Sky temperature', choices.skyTemperature[physics.skyTemperature]],
     ['Moist air', 'ASHRAE Handbook of Fundamentals, after Hyland and Wexler (1983)'],
     [
       'Comfort',
-      'operative temperature, ISO 7726 and ISO 7730; hours and degree hours outside a band, EN 16798-2',
+      'operative temperature, ISO 7726 and ISO 7730; hours and degree hours outside a band, EN 16798-2',
     ],
   ];
   const lines = rows.map(
