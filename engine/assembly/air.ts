@@ -1,136 +1,247 @@
-// Air that carries heat: leakage, ventilation, flows between rooms.
+// Air that carries heat between a room and outdoors: leaks, open windows, ventilation.
+//
+// Flows given as volumes are taken at the density of dry air of 20 °C at the site's height. Flows that
+// pressure drives (leaks, openings) take the density of the air that passes, at its own temperature.
 import type { Building, Room } from '../building/index.ts';
-import type { NetworkBuilder, Provenance } from './network-builder.ts';
+import { feelsRoom, openShare } from './air-control.ts';
+import { roomLeaks } from './air-leaks.ts';
+import { openingFlow, openingMethods } from './air-openings.ts';
+import { ownSurplusKgPerS, pathSurplusKgPerS } from './air-paths.ts';
+import { effectivenessInUse, extractOf, flowShare, ventilationFeelsRoom } from './air-recovery.ts';
+import type { AirFlow, AirProperties, AirSite } from './air-site.ts';
+import type { FlowRef, NetworkBuilder, Provenance } from './network-builder.ts';
 import type { Outdoors } from './outdoors.ts';
 import type { RoomParts } from './room-parts.ts';
 import { scheduleValues } from './schedule-values.ts';
-import type { StepClock } from './step-clock.ts';
 
-/** Air at the site: what a cubic metre of it carries per kelvin. */
-export interface AirProperties {
-  readonly pressurePa: number;
-  readonly densityKgPerM3: number;
-  readonly specificHeatJPerKgK: number;
-}
+export type { AirProperties } from './air-site.ts';
 
 /** Air capacity of a room [J/K]. */
 export function airCapacityJPerK(room: Room, air: AirProperties): number {
   return room.volumeM3 * air.densityKgPerM3 * air.specificHeatJPerKgK;
 }
 
-/** Leakage and ventilation of one room with the outdoor air. */
-export function addOutdoorAir(
-  building: Building,
-  room: Room,
-  parts: Pick<RoomParts, 'airNode' | 'meters'>,
-  air: AirProperties,
-  outside: Outdoors,
-  clock: StepClock,
-  builder: NetworkBuilder,
+export interface OutdoorAirTask {
+  readonly building: Building;
+  readonly room: Room;
+  readonly parts: Pick<RoomParts, 'airNode' | 'meters'>;
+  readonly site: AirSite;
+  readonly outside: Outdoors;
+  readonly builder: NetworkBuilder;
+  /** Streams for the vapour balance, added to. */
+  readonly flows: AirFlow[];
+}
+
+const volumeMethod = 'air flow times volumetric heat capacity of dry air at the site';
+
+/** Everything that joins one room's air with the outdoor air. */
+export function addOutdoorAir(task: OutdoorAirTask): void {
+  const { room } = task;
+  const { infiltration } = room;
+  if (infiltration.airChangesPerH > 0) {
+    const flowM3PerS = (infiltration.airChangesPerH * room.volumeM3) / 3600;
+    addVolumeFlow(task, 'infiltration', 'infiltration', flowM3PerS, infiltration.schedule);
+  }
+  for (const one of room.ventilation) addVentilation(task, one);
+  for (const opening of room.airOpenings) {
+    const flow = openingFlow(task.building, room, opening, task.site);
+    const name = `opening ${opening.name ?? opening.id}`;
+    addLaw(task, 'ventilation', name, openingMethods[opening.kind], flow, { kind: opening.kind });
+  }
+  addLeaks(task);
+}
+
+type Meter = 'infiltration' | 'ventilation';
+
+function about(
+  task: OutdoorAirTask,
+  what: string,
+  method: string,
+  inputs: Provenance['inputs'],
+): Provenance {
+  const { room } = task;
+  return { name: `${room.id} ${what}`, room: room.id, what, method, inputs };
+}
+
+function stream(
+  task: OutdoorAirTask,
+  name: string,
+  massKgPerS: AirFlow['massKgPerS'],
+  keptShare = 0,
 ): void {
-  const perM3JPerK = air.densityKgPerM3 * air.specificHeatJPerKgK;
-  const link = (
-    what: string,
-    flowM3PerS: number,
-    schedule: string | undefined,
-    recovery: number,
-  ) => {
-    const conductance = flowM3PerS * perM3JPerK * (1 - recovery);
-    const about: Provenance = {
-      name: `${room.id} ${what}`,
-      room: room.id,
-      what,
-      method: 'air flow times volumetric heat capacity of dry air at the site',
-      inputs: { flowM3PerS, heatRecovery: recovery, ...air },
-    };
-    return schedule === undefined
-      ? builder.constantLink(outside.airNode, parts.airNode, conductance, about)
+  const to = task.building.rooms.indexOf(task.room);
+  task.flows.push({ name, from: -1, to, mutual: false, keptShare, massKgPerS });
+}
+
+/** A volume flow that a schedule scales, in full exchange with outdoors. */
+function addVolumeFlow(
+  task: OutdoorAirTask,
+  meter: Meter,
+  what: string,
+  flowM3PerS: number,
+  schedule: string | undefined,
+): void {
+  const { building, parts, site, outside, builder } = task;
+  const air = site.properties;
+  const massKgPerS = flowM3PerS * air.densityKgPerM3;
+  const conductance = massKgPerS * air.specificHeatJPerKgK;
+  const why = about(task, what, volumeMethod, { flowM3PerS, ...air });
+  const values = schedule === undefined ? null : scheduleValues(building, schedule, site.clock);
+  const ref =
+    values === null
+      ? builder.constantLink(outside.airNode, parts.airNode, conductance, why)
       : builder.scaledLink(
           outside.airNode,
           parts.airNode,
           conductance,
-          builder.series(`${room.id} ${what}`, 'step', scheduleValues(building, schedule, clock)),
-          about,
+          builder.series(why.name, 'step', values),
+          why,
         );
-  };
-  const { infiltration } = room;
-  if (infiltration.airChangesPerH > 0) {
-    const flowM3PerS = (infiltration.airChangesPerH * room.volumeM3) / 3600;
-    builder.count(
-      parts.meters.infiltration,
-      1,
-      link('infiltration', flowM3PerS, infiltration.schedule, 0),
-    );
-  }
-  for (const one of room.ventilation) {
-    if (one.flowM3PerS === 0 || one.heatRecovery === 1) continue;
-    const ref = link(
-      `ventilation ${one.name ?? one.id}`,
-      one.flowM3PerS,
-      one.schedule,
-      one.heatRecovery,
-    );
-    builder.count(parts.meters.ventilation, 1, ref);
-  }
+  builder.count(parts.meters[meter], 1, ref);
+  stream(task, why.name, (step) => massKgPerS * (values === null ? 1 : values[step]));
 }
 
-/** Air that moves one way, and air that rooms swap. */
-export function addRoomAir(
-  building: Building,
-  rooms: readonly RoomParts[],
-  air: AirProperties,
-  outside: Outdoors,
-  clock: StepClock,
-  builder: NetworkBuilder,
+/** A mass flow by law, in full exchange with outdoors. */
+function addLaw(
+  task: OutdoorAirTask,
+  meter: Meter,
+  what: string,
+  method: string,
+  massKgPerS: AirFlow['massKgPerS'],
+  inputs: Provenance['inputs'],
 ): void {
-  const perM3JPerK = air.densityKgPerM3 * air.specificHeatJPerKgK;
-  const partsOf = new Map(rooms.map((parts) => [parts.room.id, parts]));
-  const nodeOf = (id: string) => partsOf.get(id)?.airNode ?? outside.airNode;
-  const seriesOf = new Map<string, number>();
-  const seriesFor = (schedule: string) => {
-    let series = seriesOf.get(schedule);
-    if (series === undefined) {
-      series = builder.series(
-        `air, ${schedule}`,
-        'step',
-        scheduleValues(building, schedule, clock),
-      );
-      seriesOf.set(schedule, series);
-    }
-    return series;
-  };
-  for (const { from, to, flowM3PerS, schedule } of building.airPaths) {
-    const ref = builder.directedLink(
-      nodeOf(from),
-      nodeOf(to),
-      flowM3PerS * perM3JPerK,
-      schedule === undefined ? -1 : seriesFor(schedule),
-      {
-        name: `air ${from} to ${to}`,
-        what: `air from ${from} to ${to}`,
-        method: 'directed air flow times volumetric heat capacity of dry air at the site',
-        inputs: { flowM3PerS, ...air },
-      },
+  const { parts, site, outside, builder } = task;
+  const heat = site.properties.specificHeatJPerKgK;
+  const why = about(task, what, method, { ...inputs, ...site.properties });
+  const ref = builder.functionLink(
+    outside.airNode,
+    parts.airNode,
+    (outdoorC, roomC, step) => heat * massKgPerS(step, outdoorC, roomC),
+    why,
+  );
+  builder.count(parts.meters[meter], 1, ref);
+  stream(task, why.name, massKgPerS);
+}
+
+/**
+ * Supply S and extract E of a room, recovery η on the supply. Seen from the room the supply brings
+ * S·(1 − η) of the difference to outdoors. In a room without leaks, S − E goes on to (or comes from)
+ * other rooms by directed links, which must balance: then E − η·S of the exchange is left for this link.
+ */
+function addVentilation(task: OutdoorAirTask, one: Room['ventilation'][number]): void {
+  const { building, room, parts, site, outside, builder } = task;
+  const air = site.properties;
+  const supplyM3PerS = one.flowM3PerS;
+  const extractM3PerS = extractOf(one);
+  const heatPerM3 = air.densityKgPerM3 * air.specificHeatJPerKgK;
+  const what = `ventilation ${one.name ?? one.id}`;
+  const why = about(task, what, volumeMethod, {
+    flowM3PerS: supplyM3PerS,
+    extractM3PerS,
+    heatRecovery: one.heatRecovery,
+    ...air,
+  });
+  const count = (ref: FlowRef) => builder.count(parts.meters.ventilation, 1, ref);
+  const surplusM3PerS = supplyM3PerS - extractM3PerS;
+  const directed = surplusM3PerS !== 0 && room.leakage === undefined;
+  const aside = directed ? Math.max(0, surplusM3PerS) : 0; // of the supply, by the directed link
+  const perExtract = extractM3PerS > 0 ? supplyM3PerS / extractM3PerS : 1;
+  const plain = one.schedule === undefined && one.control === undefined;
+  const share = plain ? null : flowShare(building, one, site);
+  const series = share === null ? -1 : builder.series(why.name, 'step', share);
+  if (directed) {
+    const rate = Math.abs(surplusM3PerS) * heatPerM3;
+    const [from, to] =
+      surplusM3PerS > 0 ? [outside.airNode, parts.airNode] : [parts.airNode, outside.airNode];
+    const ref = builder.directedLink(from, to, rate, series, why);
+    if (surplusM3PerS > 0) count(ref);
+  }
+  const open =
+    one.control && feelsRoom(one.control) ? openShare(building, one.control, site) : null;
+  const inUse = (step: number, outdoorC: number, roomC: number) =>
+    (share === null ? 1 : share[step]) * (open === null ? 1 : open(step, roomC, outdoorC));
+  const massKgPerS = supplyM3PerS * air.densityKgPerM3;
+  if (massKgPerS === 0) return;
+  stream(
+    task,
+    why.name,
+    (step, outdoorC, roomC) => massKgPerS * inUse(step, outdoorC, roomC),
+    one.moistureRecovery,
+  );
+  if (!ventilationFeelsRoom(one)) {
+    const rest = heatPerM3 * (supplyM3PerS * (1 - one.heatRecovery) - aside);
+    if (!(rest > 1e-12)) return;
+    count(
+      series < 0
+        ? builder.constantLink(outside.airNode, parts.airNode, rest, why)
+        : builder.scaledLink(outside.airNode, parts.airNode, rest, series, why),
     );
-    const parts = partsOf.get(to);
-    if (parts)
-      builder.count(from === 'outdoors' ? parts.meters.ventilation : parts.meters.rooms, 1, ref);
+    return;
   }
-  for (const { rooms: pair, flowM3PerS, schedule } of building.airExchanges) {
-    const [a, b] = pair;
-    const about: Provenance = {
-      name: `air ${a} and ${b}`,
-      what: 'air swapped through an opening',
-      method: 'equal flows both ways times volumetric heat capacity of dry air at the site',
-      inputs: { flowM3PerS, ...air },
-    };
-    const conductance = flowM3PerS * perM3JPerK;
-    const ref =
-      schedule === undefined
-        ? builder.constantLink(nodeOf(a), nodeOf(b), conductance, about)
-        : builder.scaledLink(nodeOf(a), nodeOf(b), conductance, seriesFor(schedule), about);
-    const [first, second] = [partsOf.get(a), partsOf.get(b)];
-    if (first) builder.count(first.meters.rooms, -1, ref);
-    if (second) builder.count(second.meters.rooms, 1, ref);
-  }
+  const law = (outdoorC: number, roomC: number, step: number) => {
+    const kept = effectivenessInUse(one, roomC, outdoorC, perExtract);
+    const flow = Math.max(0, supplyM3PerS * (1 - kept) - aside);
+    return heatPerM3 * flow * inUse(step, outdoorC, roomC);
+  };
+  count(
+    builder.functionLink(outside.airNode, parts.airNode, law, {
+      ...why,
+      method: 'supply by heat recovery with bypass and frost limit (EN 308), by room temperature',
+    }),
+  );
+}
+
+/**
+ * Leaks take up whatever fans and paths leave over. What paths bring in too much leaves by a directed
+ * link; what they take out is made up by one, and that air is taken off the leaks' own.
+ */
+function addLeaks(task: OutdoorAirTask): void {
+  const { building, room, parts, site, outside, builder } = task;
+  const { leakage } = room;
+  if (leakage === undefined) return;
+  const paths = pathSurplusKgPerS(building, room, site);
+  const own = ownSurplusKgPerS(building, room, site);
+  const leaks = roomLeaks(
+    building,
+    room,
+    leakage,
+    site,
+    paths.map((path, k) => path + own[k]),
+  );
+  const heat = site.properties.specificHeatJPerKgK;
+  const link = (values: Float64Array, inward: boolean) => {
+    if (values.every((value) => value === 0)) return;
+    const why = about(
+      task,
+      inward ? 'make-up air through leaks' : 'air pressed out through leaks',
+      'mass balance of the room',
+      {},
+    );
+    const series = builder.series(why.name, 'step', values);
+    const [from, to] = inward ? [outside.airNode, parts.airNode] : [parts.airNode, outside.airNode];
+    const ref = builder.directedLink(from, to, heat, series, why);
+    if (inward) builder.count(parts.meters.infiltration, 1, ref);
+  };
+  const madeUp = paths.map((path) => Math.max(0, -path));
+  link(madeUp, true);
+  link(
+    paths.map((path) => Math.max(0, path)),
+    false,
+  );
+  const why = about(
+    task,
+    'leaks',
+    'power law of the pressure test (ISO 9972) under wind, stack and fans; one-zone mass balance',
+    { n50PerH: leakage.n50PerH, exponent: leakage.exponent, ...site.properties },
+  );
+  const ref = builder.functionLink(
+    outside.airNode,
+    parts.airNode,
+    (_, roomC, step) => heat * Math.max(0, leaks.inflowKgPerS(step, roomC) - madeUp[step]),
+    why,
+  );
+  builder.count(parts.meters.infiltration, 1, ref);
+  stream(task, why.name, (step, _, roomC) =>
+    Math.max(madeUp[step], leaks.inflowKgPerS(step, roomC)),
+  );
 }

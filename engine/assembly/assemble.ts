@@ -11,7 +11,9 @@ import {
 } from '../../weather/index.ts';
 import { type Building, constructionOf, type Room, type Surface } from '../building/index.ts';
 import type { Problem } from '../network/index.ts';
-import { type AirProperties, addOutdoorAir, addRoomAir, airCapacityJPerK } from './air.ts';
+import { addOutdoorAir, airCapacityJPerK } from './air.ts';
+import { addRoomAir } from './air-between.ts';
+import { type AirFlow, type AirProperties, type AirSite, airSite } from './air-site.ts';
 import { addBridges } from './bridges.ts';
 import { comfortHours } from './comfort-hours.ts';
 import { faceViews } from './enclosure.ts';
@@ -56,6 +58,9 @@ export interface Assembly {
   readonly problem: Problem;
   readonly rooms: readonly RoomParts[];
   readonly outdoorNode: number;
+  /** Outdoor air step by step, and the streams of air between rooms and from outdoors. */
+  readonly airSite: AirSite;
+  readonly airFlows: readonly AirFlow[];
   readonly provenance: ReturnType<NetworkBuilder['provenance']>;
   /** What was assumed on the way, as sentences. */
   readonly assumptions: readonly string[];
@@ -93,6 +98,8 @@ export function assemble(
   const chains = new Map<string, Chain>();
   const assumptions: string[] = [...(building.fromLibrary ?? [])];
   const climate = groundClimate(steps, clock);
+  const site = airSite(steps, clock, air);
+  const airFlows: AirFlow[] = [];
   const rooms = building.rooms.map((room) =>
     addRoom({
       building,
@@ -103,18 +110,22 @@ export function assemble(
       outside,
       clock,
       climate,
+      site,
+      airFlows,
       builder,
       assumptions,
       heatingRamps: options.heatingRamps,
     }),
   );
-  addRoomAir(building, rooms, air, outside, clock, builder);
+  addRoomAir({ building, rooms, site, outside, builder, flows: airFlows });
   const recordNodes = new Set<number>([outside.airNode]);
   for (const parts of rooms) for (const node of recordedOf(parts)) recordNodes.add(node);
   return {
     building,
     rooms,
     outdoorNode: outside.airNode,
+    airSite: site,
+    airFlows,
     provenance: builder.provenance(),
     assumptions,
     problem: {
@@ -150,6 +161,8 @@ interface RoomTask {
   readonly outside: Outdoors;
   readonly clock: StepClock;
   readonly climate: GroundClimate;
+  readonly site: AirSite;
+  readonly airFlows: AirFlow[];
   readonly builder: NetworkBuilder;
   readonly assumptions: string[];
   readonly heatingRamps: AssemblyOptions['heatingRamps'];
@@ -204,7 +217,15 @@ function addRoom(task: RoomTask): RoomParts {
     heatingRamp,
   });
   addBridges(building, room, { airNode, meters }, outside, clock, builder);
-  addOutdoorAir(building, room, { airNode, meters }, air, outside, clock, builder);
+  addOutdoorAir({
+    building,
+    room,
+    parts: { airNode, meters },
+    site: task.site,
+    outside,
+    builder,
+    flows: task.airFlows,
+  });
   return {
     room,
     airNode,

@@ -1,5 +1,5 @@
 // Sizes that cannot be: openings larger than their wall, partitions whose two faces differ, boxes
-// whose faces do not match the surfaces, glass stacks without their gaps, flows that do not balance.
+// whose faces do not match the surfaces, glass stacks without their gaps.
 import type { Fault } from '../../weather/index.ts';
 import { boxFaceAreasM2, boxFaceOf } from './box-face.ts';
 import { constructionOf } from './find.ts';
@@ -81,7 +81,6 @@ export function geometryFaults(building: Building, file: string): Fault[] {
         'Heating and cooling would work against each other.',
       );
   });
-  airFaults(building, add);
   return faults;
 }
 
@@ -196,28 +195,6 @@ function boxFaults(room: Room, path: string, add: Add) {
       `${round(box.lengthM * box.depthM * box.heightM)}, as the box has`,
       'Correct the volume or the box.',
     );
-}
-
-function airFaults(building: Building, add: Add) {
-  const names = new Set(building.airPaths.map((path) => path.schedule ?? ''));
-  for (const room of building.rooms)
-    for (const name of names) {
-      let netM3PerS = 0;
-      let throughM3PerS = 0;
-      for (const path of building.airPaths) {
-        if ((path.schedule ?? '') !== name) continue;
-        if (path.to === room.id) netM3PerS += path.flowM3PerS;
-        if (path.from === room.id) netM3PerS -= path.flowM3PerS;
-        if (path.to === room.id || path.from === room.id) throughM3PerS += path.flowM3PerS;
-      }
-      if (Math.abs(netM3PerS) > 1e-9 * throughM3PerS)
-        add(
-          'airPaths',
-          `a surplus of ${round(netM3PerS * 1000)} L/s in room "${room.id}"${name ? ` under schedule "${name}"` : ''}`,
-          'as much air out of each room as into it',
-          'Add the path that is missing, from or to "outdoors".',
-        );
-    }
 }
 
 const round = (value: number): number => Number(value.toPrecision(5));

@@ -1,5 +1,6 @@
 // Text of a project file → Building, or every fault in it. Past this door nothing is checked again.
 import type { Fault, Parsed } from '../../weather/index.ts';
+import { airFaults } from './check-air.ts';
 import { airReferenceFaults } from './check-air-references.ts';
 import { geometryFaults } from './check-geometry.ts';
 import { groundFaults } from './check-ground.ts';
@@ -58,7 +59,7 @@ export function parseProjectDocument(document: unknown, file: string): Parsed<Bu
     ...airReferenceFaults(building, file),
     ...windowReferenceFaults(building, file),
   ];
-  const later = [geometryFaults, windowFaults, groundFaults, useFaults, plantFaults];
+  const later = [geometryFaults, airFaults, windowFaults, groundFaults, useFaults, plantFaults];
   const faults =
     references.length > 0 ? references : later.flatMap((check) => check(building, file));
   return faults.length > 0 ? { ok: false, faults } : { ok: true, value: building };
