@@ -51,6 +51,8 @@ export interface AssemblyOptions {
   readonly refine: number;
   /** Set-points of heating by room at both ends of every step, in place of the schedule's. */
   readonly heatingRamps?: ReadonlyMap<string, Float64Array>;
+  /** Shares over which coverings are drawn by the room's temperature, hour by hour, by window. */
+  readonly drawnByRoom?: ReadonlyMap<string, Float64Array>;
 }
 
 export interface Assembly {
@@ -115,6 +117,7 @@ export function assemble(
       builder,
       assumptions,
       heatingRamps: options.heatingRamps,
+      drawnByRoom: options.drawnByRoom,
     }),
   );
   addRoomAir({ building, rooms, site, outside, builder, flows: airFlows });
@@ -166,6 +169,7 @@ interface RoomTask {
   readonly builder: NetworkBuilder;
   readonly assumptions: string[];
   readonly heatingRamps: AssemblyOptions['heatingRamps'];
+  readonly drawnByRoom: AssemblyOptions['drawnByRoom'];
 }
 
 function addRoom(task: RoomTask): RoomParts {
@@ -187,9 +191,18 @@ function addRoom(task: RoomTask): RoomParts {
   for (const surface of room.surfaces) {
     if (netAreaM2(surface) > 1e-9) faces.push(addSurface(task, surface));
     for (const opening of surface.openings) {
-      const window = addWindow(building, room, surface, opening, outside, builder, air);
+      const window = addWindow(
+        {
+          ...task,
+          airNode,
+          toRoom: (flow) => builder.count(meters.glazing, 1, flow),
+        },
+        surface,
+        opening,
+      );
       windows.push(window);
       faces.push(window.face);
+      if (window.frameFace) faces.push(window.frameFace);
     }
   }
   const faceMeter = (face: Face) => meters[face.balance];

@@ -18,6 +18,7 @@ import {
 } from '../physics/index.ts';
 import type { NetworkBuilder, Provenance } from './network-builder.ts';
 import type { Outdoors } from './outdoors.ts';
+import { addGreyLink, type Emissivity } from './radiant-law.ts';
 
 /** How fine the chains are cut. */
 export interface Fineness {
@@ -164,7 +165,7 @@ export interface OuterFace {
   readonly tiltDeg: number;
   readonly azimuthDeg: number;
   readonly heightM: number;
-  readonly emissivity: number;
+  readonly emissivity: Emissivity;
   readonly roughness: number;
   readonly about: Omit<Provenance, 'what' | 'method' | 'inputs'>;
 }
@@ -194,22 +195,35 @@ export function addOuterExchange(
     );
   } else builder.scaledLink(node, outside.airNode, areaM2, series, filmAbout);
   const views = outsideViews(tiltDeg, building.physics.outsideLongWave === 'low-sky-at-air');
-  const toSkyM2 = areaM2 * emissivity * views.sky;
-  const toAirM2 = areaM2 * emissivity - toSkyM2;
+  const toSkyM2 = areaM2 * views.sky;
+  const toAirM2 = areaM2 - toSkyM2;
   const about = (what: string): Provenance => ({
     ...face.about,
     what,
     method:
       'grey face to black surroundings by tilt view factor; low sky at air temperature (Walton 1983)',
-    inputs: { areaM2, emissivity, skyViewShare: views.sky },
+    inputs: {
+      areaM2,
+      emissivity: typeof emissivity === 'number' ? emissivity : 'by step',
+      skyViewShare: views.sky,
+    },
   });
   if (toSkyM2 > 0)
-    builder.radiantLink(node, outside.skyNode, toSkyM2, about('radiation to the sky'));
+    addGreyLink(
+      builder,
+      node,
+      outside.skyNode,
+      toSkyM2,
+      emissivity,
+      about('radiation to the sky'),
+    );
   if (toAirM2 > 0)
-    builder.radiantLink(
+    addGreyLink(
+      builder,
       node,
       outside.airNode,
       toAirM2,
+      emissivity,
       about('radiation to ground and low sky at air temperature'),
     );
 }

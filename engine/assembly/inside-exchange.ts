@@ -76,14 +76,14 @@ export function addInsideLongWave(
   views: FaceViews,
   builder: NetworkBuilder,
 ): number {
-  const emissivity = faces.map((face) => face.emissivity);
+  const emissivity = faces.map((face) => (face.radiantNode === undefined ? face.emissivity : 1));
   const exchangeAreaM2 =
     building.physics.insideLongWave === 'grey-enclosure'
       ? greyExchangeAreasM2(views.areaM2, views.exchangeM2, emissivity)
       : starExchangeAreasM2(views.areaM2, emissivity);
   return builder.enclosure({
     name: room.id,
-    nodes: Int32Array.from(faces, (face) => face.node),
+    nodes: Int32Array.from(faces, (face) => face.radiantNode ?? face.node),
     exchangeAreaM2,
   });
 }

@@ -31,6 +31,8 @@ export interface Outdoors {
   readonly count: number;
   readonly airNode: number;
   readonly skyNode: number;
+  /** Dry bulb, mean of each step. */
+  readonly airC: Float64Array;
   readonly sun: SunTrack;
   /** Wind-driven film of a face, as a series of W/m²K; the whole film where `hasNaturalTerm` is false. */
   filmSeries(face: { heightM: number; tiltDeg: number; azimuthDeg: number }): number;
@@ -124,6 +126,10 @@ export function outdoors(
     count: steps.count,
     airNode,
     skyNode,
+    airC: Float64Array.from(
+      { length: steps.count },
+      (_, k) => (steps.dryBulbC[k] + steps.dryBulbC[k + 1]) / 2,
+    ),
     sun: steps.sun,
     hasNaturalTerm: method === 'yazdanian-klems',
     filmSeries({ heightM, tiltDeg, azimuthDeg }) {

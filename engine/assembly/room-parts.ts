@@ -10,6 +10,8 @@ export type FaceBalance = 'opaque' | 'glazing' | 'ground' | 'rooms';
 /** One face that looks into the room: the inside of a surface, or of a window. */
 export interface Face {
   readonly node: number;
+  /** Node at the face's radiosity, where its emissivity changes; the enclosure sees it as black. */
+  readonly radiantNode?: number;
   /** The middle of each layer, where the face is one of a construction. */
   readonly layers?: readonly LayerMiddle[];
   readonly surface: string;

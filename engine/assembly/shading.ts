@@ -22,6 +22,8 @@ export interface FaceSun {
   readonly beamWPerM2: Float64Array;
   /** Sky and ground together. */
   readonly diffuseWPerM2: Float64Array;
+  /** Of that, what the ground throws back. */
+  readonly groundWPerM2: Float64Array;
   readonly cosIncidence: Float64Array;
 }
 
@@ -62,7 +64,8 @@ export function faceSun(
         );
         return value * litAt(towards);
       });
-  return { beamWPerM2: beam, diffuseWPerM2: diffuse, cosIncidence };
+  const ground = left.ground === 1 ? groundWPerM2 : groundWPerM2.map((g) => left.ground * g);
+  return { beamWPerM2: beam, diffuseWPerM2: diffuse, groundWPerM2: ground, cosIncidence };
 }
 
 /** Width and height of a surface, from its box or as a square [m]. */

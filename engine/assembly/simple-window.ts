@@ -1,20 +1,19 @@
 // A window known by U and g only: two faces with the equivalent layer between.
-import type { Glazing, Opening } from '../building/index.ts';
+import type { Glazing } from '../building/index.ts';
 import { simpleGlazing } from '../physics/index.ts';
 import type { NetworkBuilder, Provenance } from './network-builder.ts';
-import type { Glass } from './window.ts';
+import type { Glass } from './window-panes.ts';
 
 const glassEmissivity = 0.84; // uncoated glass; EN 673 (corrected emissivity 0.837)
 
 /** Adds the two face nodes and the layer between them. */
 export function addSimpleWindow(
   glazing: Extract<Glazing, { kind: 'simple' }>,
-  opening: Opening,
+  areaM2: number,
   place: Pick<Provenance, 'name' | 'room' | 'surface'>,
   builder: NetworkBuilder,
 ): Glass {
   const layer = simpleGlazing(glazing.uValueWPerM2K, glazing.gValue);
-  const { areaM2 } = opening;
   const about = (what: string): Provenance => ({
     ...place,
     what,
@@ -24,7 +23,7 @@ export function addSimpleWindow(
   const face = (side: string) =>
     builder.node({ ...about(`${side} face of the glazing`), name: `${place.name}/${side}` }, 0);
   const nodes = [face('outer'), face('inner')] as const;
-  builder.constantLink(
+  const through = builder.constantLink(
     nodes[0],
     nodes[1],
     areaM2 / layer.resistanceM2KPerW,
@@ -32,7 +31,8 @@ export function addSimpleWindow(
   );
   return {
     paneNodes: [nodes],
-    optics: layer.angles,
+    blindNode: -1,
+    through,
     outerEmissivity: glassEmissivity,
     innerEmissivity: glassEmissivity,
   };

@@ -1,52 +1,55 @@
-// Windows: each pane with its two faces as nodes, gaps by convection and radiation, sun by angle.
+// Windows: panes and gaps, frame and edge, coverings on either side or between the panes; and how the
+// whole deals with the sun in each of its states.
 import {
   type Building,
+  coveringOf,
   glazingOf,
   type Opening,
-  type Pane,
-  type PaneGlazing,
   type Room,
   type Surface,
 } from '../building/index.ts';
-import {
-  type GlazingAngles,
-  glassPane,
-  glazingAngles,
-  type PaneOptics,
-  type ShadedWindow,
-} from '../physics/index.ts';
+import type { LayeredAngles, ShadedWindow } from '../physics/index.ts';
+import { addCovering, type CoveringParts } from './covering.ts';
+import { type Drawn, drawnShare } from './covering-control.ts';
 import { addOuterExchange, faceHeightM } from './fabric.ts';
-import { gapLaw } from './gap-law.ts';
-import type { NetworkBuilder, Provenance } from './network-builder.ts';
+import type { FlowRef, NetworkBuilder } from './network-builder.ts';
 import type { Outdoors } from './outdoors.ts';
+import { blendedEmissivity, greyConductanceWPerM2K } from './radiant-law.ts';
 import type { Face } from './room-parts.ts';
 import { type FaceSun, shadedOpening } from './shading.ts';
 import { addSimpleWindow } from './simple-window.ts';
+import type { StepClock } from './step-clock.ts';
+import { addFrame, addFrameOutside, frameFace } from './window-frame.ts';
+import { bareLight, coveredLight, coveringLayer } from './window-optics.ts';
+import { addPanes } from './window-panes.ts';
+import { windowSize } from './window-size.ts';
+
+/** One way in which a window deals with light, and how much of the glass is in it. */
+export interface WindowState {
+  /** Share of the glass in each step; null: always all of it. */
+  readonly weight: Float64Array | null;
+  readonly light: LayeredAngles;
+  /** Nodes that take what each layer absorbs, in equal parts. */
+  readonly layerNodes: readonly (readonly number[])[];
+}
 
 /** A window in the network, and how it deals with the sun. */
 export interface WindowParts {
+  /** Room, surface and opening, by their ids. */
+  readonly name: string;
+  /** The glass, or the covering before it, as the room sees it. */
   readonly face: Face;
+  readonly frameFace: Face | null;
   readonly opening: Opening;
-  readonly areaM2: number;
+  readonly glassAreaM2: number;
   readonly sun: FaceSun;
   /** The glass with what stands before it, or null. */
   readonly shaded: ShadedWindow | null;
-  /** Outer and inner face node of each pane, outermost first; the same node twice where a pane is one node. */
-  readonly paneNodes: readonly (readonly [number, number])[];
-  readonly optics: GlazingAngles;
-}
-
-/** Optics of a pane as given: by its coating's values, or as clear glass of its transmittance. */
-export function paneOptics(pane: Pane): PaneOptics {
-  const { solarTransmittance, frontSolarReflectance, backSolarReflectance, refractiveIndex } = pane;
-  if (frontSolarReflectance === undefined && backSolarReflectance === undefined)
-    return glassPane(solarTransmittance, refractiveIndex);
-  return {
-    kind: 'coated',
-    transmittance: solarTransmittance,
-    frontReflectance: frontSolarReflectance ?? backSolarReflectance ?? 0,
-    backReflectance: backSolarReflectance ?? frontSolarReflectance ?? 0,
-  };
+  readonly states: readonly WindowState[];
+  /** Heat through glass, frame and edge, positive into the room. */
+  readonly meter: number;
+  readonly blind: Drawn | null;
+  readonly nightInsulation: Drawn | null;
 }
 
 /** Middle of an opening above the ground outside [m]. */
@@ -57,44 +60,155 @@ function openingHeightM(room: Room, surface: Surface, opening: Opening): number 
   return middleM - wallM / 2 + opening.rectangle.bottomM + opening.rectangle.heightM / 2;
 }
 
+export interface WindowTask {
+  readonly building: Building;
+  readonly room: Room;
+  readonly airNode: number;
+  readonly outside: Outdoors;
+  readonly clock: StepClock;
+  readonly builder: NetworkBuilder;
+  readonly air: { readonly pressurePa: number };
+  /** Shares that rooms' temperatures ask for, from an earlier pass, by window. */
+  readonly drawnByRoom?: ReadonlyMap<string, Float64Array> | undefined;
+  /** Heat that reaches the room's air beside the face. */
+  readonly toRoom: (flow: FlowRef) => void;
+}
+
 /** Adds a window with its outer and inner sides; the room adds what happens inside. */
-export function addWindow(
-  building: Building,
-  room: Room,
-  surface: Surface,
-  opening: Opening,
-  outside: Outdoors,
-  builder: NetworkBuilder,
-  site: { readonly pressurePa: number },
-): WindowParts {
+export function addWindow(task: WindowTask, surface: Surface, opening: Opening): WindowParts {
+  const { building, room, outside, builder, clock } = task;
   const glazing = glazingOf(building, opening.glazing);
   const name = `${room.id}/${surface.id}/${opening.id}`;
-  const place = { name, room: room.id, surface: surface.id };
+  const about = { name, room: room.id, surface: surface.id };
   const { tiltDeg, azimuthDeg } = surface;
-  const { areaM2 } = opening;
+  const size = windowSize(opening);
+  const areaM2 = size.glassAreaM2;
+  const heightM = openingHeightM(room, surface, opening);
+  const shaded = shadedOpening(room, surface, opening);
+  const sun = outside.sunOn(surface, shaded);
+
+  const byRoom = (what: string) => task.drawnByRoom?.get(`${name} ${what}`);
+  const drawn = (held: Opening['blind'] | Opening['nightInsulation'], what: string) =>
+    held
+      ? {
+          held,
+          covering: coveringOf(building, held.covering),
+          drawn: drawnShare(building, held.control, sun, outside, clock, byRoom(what)),
+        }
+      : null;
+  const blind = drawn(opening.blind, 'blind');
+  const insulation = drawn(opening.nightInsulation, 'night insulation');
+
+  const { pressurePa } = task.air;
+  const place = { areaM2, tiltDeg, pressurePa, about };
+  const between =
+    blind?.held.position === 'between' && blind.covering.kind === 'blind'
+      ? { covering: blind.covering, gap: opening.blind?.gap ?? 0, drawn: blind.drawn.share }
+      : null;
   const glass =
     glazing.kind === 'panes'
-      ? addPanes(glazing, opening, tiltDeg, place, builder, site)
-      : addSimpleWindow(glazing, opening, place, builder);
+      ? addPanes(glazing, opening, place, between, builder)
+      : addSimpleWindow(glazing, areaM2, about, builder);
+  const frame = opening.frame && addFrame(opening.frame, size, about, builder);
+
+  const outermost = glass.paneNodes[0][0];
+  const innermost = glass.paneNodes[glass.paneNodes.length - 1][1];
+  /** The covering that hangs on a side, on the glass or on the frame behind it. */
+  const coverOn = (
+    side: 'outside' | 'inside',
+    what: typeof blind,
+    of: { node: number; areaM2: number; emissivity: number; name: string },
+  ): CoveringParts | null => {
+    if (!what || what.held.position !== side) return null;
+    const parts = addCovering(
+      what.covering,
+      {
+        side,
+        areaM2: of.areaM2,
+        tiltDeg,
+        heightM: opening.rectangle?.heightM ?? 1,
+        pressurePa,
+        glassEmissivity: of.emissivity,
+        glassNode: of.node,
+        airNode: side === 'outside' ? outside.airNode : task.airNode,
+        distanceM: opening.blind?.distanceM ?? 0,
+        openShare: opening.blind?.openShare ?? 0,
+        about: { ...about, name: of.name },
+      },
+      what.drawn.share,
+      builder,
+    );
+    if (side === 'inside') parts.toAir.forEach(task.toRoom);
+    return parts;
+  };
+  const ofGlass = (node: number, emissivity: number) => ({ node, areaM2, emissivity, name });
+  const outward = [blind, insulation].find((one) => one?.held.position === 'outside') ?? null;
+  const inward = [blind, insulation].find((one) => one?.held.position === 'inside') ?? null;
+  const outer = coverOn('outside', outward, ofGlass(outermost, glass.outerEmissivity));
+  const inner = coverOn('inside', inward, ofGlass(innermost, glass.innerEmissivity));
+
   addOuterExchange(
     building,
     {
-      node: glass.paneNodes[0][0],
+      node: outer?.node ?? outermost,
       areaM2,
       tiltDeg,
       azimuthDeg,
-      heightM: openingHeightM(room, surface, opening),
-      emissivity: glass.outerEmissivity,
+      heightM,
+      emissivity: blendedEmissivity(
+        glass.outerEmissivity,
+        outer?.emissivity ?? glass.outerEmissivity,
+        outward?.drawn.share,
+      ),
       roughness: 1,
-      about: place,
+      about,
     },
     outside,
     builder,
   );
-  const shaded = shadedOpening(room, surface, opening);
-  const fromInside = glass.optics.diffuseFromInside;
+
+  const nodesOf = (node: number) => [node];
+  const states = windowStates();
+  const meter = builder.meter(`window ${name}`);
+  builder.count(meter, 1, glass.through);
+  let frameSide: Face | null = null;
+  if (frame && opening.frame) {
+    builder.count(meter, 1, frame.through);
+    const { emissivity } = opening.frame;
+    const ofFrame = (node: number) => ({
+      node,
+      areaM2: size.frameAreaM2,
+      emissivity,
+      name: `${name}/frame`,
+    });
+    // Shutters close over the frame too; blinds hang before the glass.
+    const before = coverOn('outside', insulation, ofFrame(frame.outerNode));
+    const behind = coverOn('inside', insulation, ofFrame(frame.innerNode));
+    addFrameOutside({
+      building,
+      surface,
+      frame: opening.frame,
+      areaM2: size.frameAreaM2,
+      heightM,
+      node: before?.node ?? frame.outerNode,
+      sun,
+      outside,
+      builder,
+      about,
+    });
+    const innerNode = behind?.node ?? frame.innerNode;
+    frameSide = frameFace(surface, opening.frame, innerNode, size.frameAreaM2, name);
+  }
+
+  const fromInside = states[0].light.diffuseFromInside;
+  const emissivity = blendedEmissivity(
+    glass.innerEmissivity,
+    inner?.emissivity ?? glass.innerEmissivity,
+    inward?.drawn.share,
+  );
+  const faceNode = inner?.node ?? innermost;
   const face: Face = {
-    node: glass.paneNodes[glass.paneNodes.length - 1][1],
+    node: faceNode,
     surface: surface.id,
     opening: opening.id,
     name,
@@ -108,92 +222,96 @@ export function addWindow(
       absorbed: fromInside.absorptance.reduce((sum, a) => sum + a, 0),
       transmitted: fromInside.transmittance,
     },
-    ...(opening.rectangle ? { rectangle: opening.rectangle } : {}),
+    ...(typeof emissivity === 'number'
+      ? {}
+      : { radiantNode: addRadiantFace(faceNode, areaM2, emissivity, about, builder) }),
+    ...(size.rectangle ? { rectangle: size.rectangle } : {}),
   };
   return {
+    name,
     face,
+    frameFace: frameSide,
     opening,
-    areaM2,
-    sun: outside.sunOn(surface, shaded),
+    glassAreaM2: areaM2,
+    sun,
     shaded,
-    paneNodes: glass.paneNodes,
-    optics: glass.optics,
+    states,
+    meter,
+    blind: blind?.drawn ?? null,
+    nightInsulation: insulation?.drawn ?? null,
   };
-}
 
-/** What either kind of glazing gives back. */
-export interface Glass {
-  readonly paneNodes: readonly (readonly [number, number])[];
-  readonly optics: GlazingAngles;
-  readonly outerEmissivity: number;
-  readonly innerEmissivity: number;
-}
-
-function addPanes(
-  glazing: PaneGlazing,
-  opening: Opening,
-  tiltDeg: number,
-  place: Pick<Provenance, 'name' | 'room' | 'surface'>,
-  builder: NetworkBuilder,
-  site: { readonly pressurePa: number },
-): Glass {
-  const { areaM2 } = opening;
-  const about = (what: string, method: string, inputs: Provenance['inputs']): Provenance => ({
-    ...place,
-    what,
-    method,
-    inputs,
-  });
-  const paneNodes = glazing.panes.map((pane, p): readonly [number, number] => {
-    const half = (pane.thicknessM * pane.densityKgPerM3 * pane.specificHeatJPerKgK * areaM2) / 2;
-    const face = (side: string) =>
-      builder.node(
-        {
-          ...about(`${side} face of pane ${p + 1}`, 'half of the pane’s heat capacity', { areaM2 }),
-          name: `${place.name}/pane ${p + 1} ${side}`,
-        },
-        half,
+  /** Bare, with the blind, behind the shutter: together all of the glass in every step. */
+  function windowStates(): WindowState[] {
+    const bare: WindowState = {
+      weight: null,
+      light: bareLight(glazing),
+      layerNodes: glass.paneNodes,
+    };
+    if (!blind && !insulation) return [bare];
+    const s = blind?.drawn.share;
+    const n = insulation?.drawn.share;
+    const count = clock.count;
+    const weigh = (of: (s: number, n: number) => number) =>
+      Float64Array.from({ length: count }, (_, k) => of(s ? s[k] : 0, n ? n[k] : 0));
+    const covered = (what: NonNullable<typeof blind>, weight: Float64Array): WindowState => {
+      const { position } = what.held;
+      const gap = opening.blind?.gap ?? 0;
+      const at = coveringLayer(glazing, position, gap);
+      const layerNodes: (readonly number[])[] = [...glass.paneNodes];
+      const node =
+        position === 'between'
+          ? glass.blindNode
+          : ((position === 'outside' ? outer : inner)?.node ?? -1);
+      layerNodes.splice(at, 0, nodesOf(node));
+      return { weight, light: coveredLight(glazing, what.covering, position, gap), layerNodes };
+    };
+    const list: WindowState[] = [{ ...bare, weight: weigh((a, b) => (1 - a) * (1 - b)) }];
+    if (blind)
+      list.push(
+        covered(
+          blind,
+          weigh((a, b) => a * (1 - b)),
+        ),
       );
-    const nodes = [face('outer'), face('inner')] as const;
-    const conductance = (pane.conductivityWPerMK / pane.thicknessM) * areaM2;
-    builder.constantLink(
-      nodes[0],
-      nodes[1],
-      conductance,
-      about(`conduction through pane ${p + 1}`, 'steady conduction', {
-        areaM2,
-        thicknessM: pane.thicknessM,
-        conductivityWPerMK: pane.conductivityWPerMK,
-      }),
-    );
-    return nodes;
-  });
-  const heightM = opening.rectangle?.heightM ?? 1;
-  glazing.gaps.forEach((gap, g) => {
-    const [outer, inner] = [paneNodes[g][1], paneNodes[g + 1][0]];
-    const law = gapLaw(gap, { tiltDeg, heightM, pressurePa: site.pressurePa });
-    builder.functionLink(
-      outer,
-      inner,
-      (a, b) => areaM2 * law.conductanceWPerM2K(a, b),
-      about(`gas gap ${g + 1}, ${gap.gas}`, law.method, { areaM2, thicknessM: gap.thicknessM }),
-    );
-    const emittance =
-      1 / (1 / glazing.panes[g].backEmissivity + 1 / glazing.panes[g + 1].frontEmissivity - 1);
-    builder.radiantLink(
-      outer,
-      inner,
-      areaM2 * emittance,
-      about(`radiation across gap ${g + 1}`, 'two parallel grey faces', {
-        areaM2,
-        effectiveEmissivity: emittance,
-      }),
-    );
-  });
-  return {
-    paneNodes,
-    optics: glazingAngles(glazing.panes.map(paneOptics)),
-    outerEmissivity: glazing.panes[0].frontEmissivity,
-    innerEmissivity: glazing.panes[glazing.panes.length - 1].backEmissivity,
+    if (insulation)
+      list.push(
+        covered(
+          insulation,
+          weigh((_, b) => b),
+        ),
+      );
+    return list;
+  }
+}
+
+/**
+ * A node at the radiosity of a face whose emissivity changes: the enclosure sees it as black, and the
+ * surface's own resistance (1 − ε)/(ε·A) lies between it and the face.
+ */
+function addRadiantFace(
+  face: number,
+  areaM2: number,
+  emissivity: Float64Array,
+  about: { readonly name: string; readonly room: string; readonly surface: string },
+  builder: NetworkBuilder,
+): number {
+  const told = {
+    ...about,
+    name: `${about.name}/radiosity`,
+    what: 'long-wave radiation that leaves the face',
+    method: 'surface resistance (1 − ε)/(ε·A) of a grey face',
+    inputs: { areaM2 },
   };
+  const node = builder.node(told, 0);
+  builder.functionLink(
+    face,
+    node,
+    (a, b, step) => {
+      const e = Math.min(0.999, emissivity[step]);
+      return (areaM2 * e * greyConductanceWPerM2K(a, b)) / (1 - e);
+    },
+    told,
+  );
+  return node;
 }

@@ -32,6 +32,7 @@ export * from './inside-film.ts';
 export * from './interstitial-condensation.ts';
 export * from './layered-element.ts';
 export * from './layered-light.ts';
+export * from './layered-light.ts';
 export * from './leakage.ts';
 export * from './local-discomfort.ts';
 export * from './lumped-room.ts';
