@@ -109,7 +109,7 @@ export interface Findings {
 /** Mean heat into the room in each hour [W]; `cooling` is negative, `storage` positive when taken up. */
 export type HourlyFlows = Readonly<Record<Exclude<keyof BalanceKWh, 'residual'>, Float64Array>>;
 
-/** One value an hour. Band limits are NaN where nobody is there to judge. */
+/** One value an hour. Band limits hold all day (NaN without a band); they are judged where `occupied` is 1. */
 export interface RoomHours {
   readonly id: string;
   readonly name: string;

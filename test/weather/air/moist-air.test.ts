@@ -8,7 +8,6 @@ import {
   enthalpyJPerKg,
   humidityRatio,
   humidityRatioFromWetBulb,
-  localWindMPerS,
   magnusDewPointC,
   moistAirDensityKgPerM3,
   saturationPressurePa,
@@ -165,20 +164,7 @@ test(caseName(referenceCase(file, 'sky-from-ir')), () => {
   expectCase(one, { t_sky: inputNumbers(one, 'ir').map(skyTemperatureFromInfraredC) });
 });
 
-for (const one of referenceCases(file, /^wind-profile-/)) {
-  test(caseName(one), () => {
-    const input = (key: string) => inputNumber(one, key);
-    const v = localWindMPerS(
-      input('v_met'),
-      input('height'),
-      { exponent: input('a'), depthM: input('delta') },
-      { exponent: input('a_met'), depthM: input('delta_met'), heightM: input('h_met') },
-    );
-    expectCase(one, { v });
-  });
-}
-
-test('every case of the file is used here; outside long-wave and sol-air belong to the films', () => {
+test('every case of the file is used here; wind, outside long-wave and sol-air belong to the films', () => {
   const used =
     /^(moist-air-|ashrae-|standard-atmosphere-table|dry-density-|wet-bulb-stull-|dew-point-magnus-|sky-|wind-profile-|longwave-outside-|sol-air-)/;
   expect(referenceCases(file).filter((one) => !used.test(one.id))).toEqual([]);
