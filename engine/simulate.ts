@@ -1,9 +1,9 @@
 // The whole path for one building and one weather year, told in steps so that a worker can breathe.
 import type { WeatherYear } from '../weather/index.ts';
-import { assemble } from './assembly/index.ts';
+import { type Assembly, assemble } from './assembly/index.ts';
 import type { Building } from './building/index.ts';
-import { type Simulation, simulationOf } from './findings/index.ts';
-import { marchSteps } from './network/index.ts';
+import { learnStarts, type Simulation, simulationOf, startsText } from './findings/index.ts';
+import { marchSteps, type Run } from './network/index.ts';
 
 export interface SimulationOptions {
   /** Default 15. */
@@ -23,7 +23,8 @@ export interface Progress {
 }
 
 /**
- * Assembles, marches, and draws the findings.
+ * Assembles, marches, and draws the findings. Where a heater starts ahead of its set-point, a first run
+ * without early starts shows how early it has to.
  *
  * @throws Error when the march diverged, naming hour and node: a fault of the model or the program
  */
@@ -34,28 +35,46 @@ export function* simulate(
 ): Generator<Progress, Simulation> {
   const now = options.nowMs ?? (() => 0);
   const started = now();
+  const how = { stepMinutes: options.stepMinutes ?? 15, refine: options.refine ?? 1 };
+  const learns = building.rooms.some((room) => room.heating?.optimumStart !== undefined);
   yield { done: 0, what: 'assembling the network' };
-  const assembly = assemble(building, weather, {
-    stepMinutes: options.stepMinutes ?? 15,
-    refine: options.refine ?? 1,
-  });
-  const assembled = now();
+  let assembly = assemble(building, weather, how);
+  let assembleMs = now() - started;
+  const notes: string[] = [];
+  if (learns) {
+    const starts = learnStarts(assembly, yield* wholeMarch(assembly, 'learning when to start', 0));
+    const again = now();
+    const heatingRamps = new Map([...starts].map(([room, { ramp }]) => [room, ramp]));
+    assembly = assemble(building, weather, { ...how, heatingRamps });
+    assembleMs += now() - again;
+    for (const { id, name } of building.rooms) {
+      const early = starts.get(id);
+      if (early) notes.push(startsText(name, early));
+    }
+  }
+  const run = yield* wholeMarch(assembly, 'running the year', learns ? 0.5 : 0);
+  return simulationOf(
+    { ...assembly, assumptions: [...assembly.assumptions, ...notes] },
+    weather,
+    run,
+    { readMs: options.readMs ?? 0, assembleMs, runMs: now() - started - assembleMs },
+  );
+}
+
+/** One march to its end; `from` is how much of the work lies behind it already. */
+function* wholeMarch(assembly: Assembly, what: string, from: number): Generator<Progress, Run> {
   const march = marchSteps(assembly.problem, { toleranceK: 1e-6, maxIterations: 50 });
+  const part = (done: number) => from + (1 - from) * done;
   let next = march.next();
   while (!next.done) {
     const { phase, step, stepCount } = next.value;
     yield phase === 'start-up'
-      ? { done: 0.05, what: 'finding the start' }
-      : { done: 0.1 + (0.88 * step) / stepCount, what: 'running the year' };
+      ? { done: part(0.05), what: 'finding the start' }
+      : { done: part(0.1 + (0.88 * step) / stepCount), what };
     next = march.next();
   }
-  const run = next.value;
-  const { outcome } = run;
+  const { outcome } = next.value;
   if (outcome.kind === 'diverged')
     throw new Error(`the run diverged at step ${outcome.atStep} at "${outcome.node}"`);
-  return simulationOf(assembly, weather, run, {
-    readMs: options.readMs ?? 0,
-    assembleMs: assembled - started,
-    runMs: now() - assembled,
-  });
+  return next.value;
 }

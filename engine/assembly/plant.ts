@@ -17,7 +17,8 @@ export interface PlantParts {
   readonly meter: number;
   /** The body between plant and room, or −1. */
   readonly bodyNode: number;
-  /** Set-point in each hour [°C]. */
+  /** Set-point at both ends of every step, and in each hour [°C]. */
+  readonly ramp: Float64Array;
   readonly setPointC: Float64Array;
 }
 
@@ -79,7 +80,15 @@ function addPlant(task: PlantTask, field: PlantParts['field'], plant: Heating): 
   if (way.bodyNode >= 0) builder.count(meters.storage, 1, { kind: 'storage', node: way.bodyNode });
   const meter = builder.meter(`${room.id} ${field} alone`);
   builder.count(meter, 1, power);
-  return { field, plant, maxW, meter, bodyNode: way.bodyNode, setPointC: hourlyMean(ramp, clock) };
+  return {
+    field,
+    plant,
+    maxW,
+    meter,
+    bodyNode: way.bodyNode,
+    ramp,
+    setPointC: hourlyMean(ramp, clock),
+  };
 }
 
 function bandOf(field: PlantParts['field'], plant: Heating): number {

@@ -72,7 +72,6 @@ function heatingFaults(
   };
   if (field === 'backupHeating') needsMost('It takes over by degrees, as a share of its power.');
   if (bandK > 0) needsMost('A proportional band is a share of the greatest power.');
-  if (plant.deadBandK !== undefined) needsMost('On-off control switches the greatest power.');
   if (emitter?.kind === 'embedded')
     needsMost(
       'Without a limit the layer would be heated without bounds to serve the room at once.',
@@ -84,8 +83,6 @@ function heatingFaults(
       'no such field beside an emitter',
       'A radiator has its own radiantShare; an embedded emitter heats its surface.',
     );
-  if (plant.deadBandK !== undefined && bandK > 0)
-    add(`${path}.deadBandK`, 'deadBandK and bandK together', 'one of them', 'Choose one control.');
   if (plant.optimumStart && (field !== 'heating' || typeof plant.setPointC === 'number'))
     add(
       `${path}.optimumStart`,

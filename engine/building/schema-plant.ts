@@ -36,8 +36,6 @@ export const heatingSchema = z.strictObject({
   sensor: z.enum(['air', 'operative']).default('air'),
   /** 0: ideal control to the set-point. */
   bandK: between(0, 10).default(0),
-  /** On-off control: on below the set-point by half of this, off above it by half. Left out: none. */
-  deadBandK: between(0.1, 10).optional(),
   /** Left out: the heat goes to the room at once. */
   emitter: z.discriminatedUnion('kind', [radiatorSchema, embeddedSchema]).optional(),
   /** Runs only where this is above 0; left out: always. */

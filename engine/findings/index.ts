@@ -7,5 +7,6 @@ export type { VoteFindings } from './comfort-votes.ts';
 export type { SpaceEnergy, SupplyFindings } from './final-energy.ts';
 export { simulationOf } from './findings.ts';
 export { dayName, hourName, monthOfHour } from './hour-name.ts';
+export { type EarlyStarts, earlyStarts, learnStarts, startsText } from './optimum-start.ts';
 export type { Criterion, OverheatingFindings } from './overheating.ts';
 export * from './simulation.ts';

@@ -89,8 +89,6 @@ describe('gains', () => {
 describe('plant', () => {
   test.each<[string, Json, string]>([
     ['a band without limit', { bandK: 1 }, 'heating.maxW: found nothing'],
-    ['on-off control without limit', { deadBandK: 1 }, 'heating.maxW: found nothing'],
-    ['two controls', { maxW: 1000, deadBandK: 1, bandK: 1 }, 'deadBandK and bandK together'],
     [
       'an emitter in no surface',
       { maxW: 1000, emitter: { kind: 'embedded', surface: 'flor', layer: 0 } },
