@@ -27,6 +27,13 @@ export interface NetworkDocument {
   readonly enclosures: readonly { readonly name: string; readonly nodes: readonly string[] }[];
   readonly sources: readonly { readonly name: string; readonly node: string }[];
   readonly plants: readonly { readonly name: string; readonly kind: string }[];
+  readonly timeConstants: TimeConstants;
+}
+
+/** Of the whole network, slowest first; null where a part hangs on no boundary. */
+export interface TimeConstants {
+  readonly basis: string;
+  readonly constantsH: readonly (number | null)[];
 }
 
 /** Where a nodal model's parts come from: its file. */
@@ -42,6 +49,7 @@ export function networkDocument(
   name: string,
   problem: Problem,
   provenance: Assembly['provenance'] | null,
+  timeConstants: TimeConstants,
 ): NetworkDocument {
   const { network } = problem;
   const { nodeNames } = network;
@@ -98,5 +106,6 @@ export function networkDocument(
       node: nodeNames[node],
     })),
     plants: network.plants.map(({ name, kind }) => ({ name, kind })),
+    timeConstants,
   };
 }

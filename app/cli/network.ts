@@ -1,4 +1,5 @@
-import { assemble } from '../../engine/index.ts';
+import { assemble, type Building, type Problem } from '../../engine/index.ts';
+import type { WeatherYear } from '../../weather/index.ts';
 import { textOf } from './arguments.ts';
 import type { Command, Given } from './command.ts';
 import { type OpenProject, openModel, weatherFor } from './inputs.ts';
@@ -7,9 +8,12 @@ import {
   type NetworkDocument,
   type NodeEntry,
   networkDocument,
+  type TimeConstants,
 } from './network-document.ts';
-import { type OpenNodal, refuseForNodal } from './nodal.ts';
+import { nodalResults, nodalText, type OpenNodal, refuseForNodal, runNodal } from './nodal.ts';
 import { table } from './table.ts';
+import type { Terminal } from './terminal.ts';
+import { mostNodesForModes, timeConstantsH, timeConstantsText } from './time-constants.ts';
 
 const inputText = (inputs: LinkEntry['inputs']) =>
   Object.entries(inputs)
@@ -61,6 +65,7 @@ function networkText(document: NetworkDocument): string {
   if (document.directed.length > 0) parts.push(`Directed links\n${linkTable(document.directed)}`);
   for (const one of document.enclosures)
     parts.push(`Enclosure ${one.name}: ${one.nodes.join(', ')}`);
+  parts.push(timeConstantsText(document.timeConstants.constantsH, document.timeConstants.basis));
   return parts.join('\n\n');
 }
 
@@ -68,18 +73,41 @@ async function ofProject(project: OpenProject, given: Given): Promise<NetworkDoc
   const { year } = await weatherFor(project, textOf(given, 'weather'));
   const { building } = project;
   const { problem, provenance } = assemble(building, year, { stepMinutes: 15, refine: 1 });
-  return networkDocument(building.name, problem, provenance);
+  return networkDocument(building.name, problem, provenance, modesOf(building, year, problem));
 }
 
-function ofNodal({ model, problem }: OpenNodal, given: Given): NetworkDocument {
+/** Time constants of the network shown, or of one with a node a layer where that is too large. */
+function modesOf(building: Building, year: WeatherYear, problem: Problem): TimeConstants {
+  const nodes = problem.network.nodeNames.length;
+  if (nodes <= mostNodesForModes)
+    return { basis: 'films as at the year’s mean weather', constantsH: timeConstantsH(problem) };
+  const physics = { ...building.physics, conduction: 'coarse' as const };
+  const coarse = assemble({ ...building, physics }, year, { stepMinutes: 60, refine: 1 });
+  return {
+    basis: 'of the network with one cell a layer; films as at the year’s mean weather',
+    constantsH: timeConstantsH(coarse.problem),
+  };
+}
+
+/** A nodal model is also solved: it has everything it needs. */
+async function showNodal(nodal: OpenNodal, given: Given, terminal: Terminal): Promise<void> {
   refuseForNodal('network', given, ['weather']);
-  return networkDocument(model.name, problem, null);
+  const results = nodalResults(nodal, runNodal(nodal, terminal));
+  const modes = {
+    basis: 'at the steady state of the mean drivers',
+    constantsH: results.timeConstantsH,
+  };
+  const document = networkDocument(nodal.model.name, nodal.problem, null, modes);
+  if (given.json)
+    return terminal.print(JSON.stringify({ ...document, solution: results }, null, 2));
+  terminal.print(`${networkText(document)}\n\nSolved\n${nodalText(results)}`);
 }
 
 export const networkCommand: Command = {
   name: 'network',
   operand: 'PROJECT',
-  summary: 'Shows the nodes and links that a project becomes, each with its source and inputs.',
+  summary:
+    'Shows the nodes and links that a project becomes, each with its source; solves nodal models.',
   options: {
     weather: { value: 'FILE', help: "a weather table instead of the project's" },
     json: { help: 'one JSON document on standard output' },
@@ -87,10 +115,12 @@ export const networkCommand: Command = {
   examples: [
     'inglenook network house.inglenook.json',
     'inglenook network house.inglenook.json --json > network.json',
+    'inglenook network demo/loft-tank.network.json',
   ],
   async run(operand, given, terminal) {
     const model = await openModel(operand);
-    const document = 'building' in model ? await ofProject(model, given) : ofNodal(model, given);
+    if ('model' in model) return showNodal(model, given, terminal);
+    const document = await ofProject(model, given);
     terminal.print(given.json ? JSON.stringify(document, null, 2) : networkText(document));
   },
 };

@@ -10,6 +10,7 @@ import {
   parseNodalProblem,
   type Quality,
   type Run,
+  steadyState,
 } from '../../engine/index.ts';
 import { readNumberTable } from '../../weather/index.ts';
 import { readText } from '../disk/index.ts';
@@ -17,6 +18,7 @@ import type { Given } from './command.ts';
 import { need, WrongUsage } from './stop.ts';
 import { table } from './table.ts';
 import type { Terminal } from './terminal.ts';
+import { timeConstantsH, timeConstantsText } from './time-constants.ts';
 
 export interface OpenNodal {
   readonly model: NodalModel;
@@ -74,6 +76,8 @@ interface NodeResult {
   readonly minC: number;
   readonly maxC: number;
   readonly endC: number;
+  /** With the drivers held at their means for ever. */
+  readonly steadyC: number;
 }
 
 interface FlowResult {
@@ -91,6 +95,8 @@ export interface NodalResults {
   readonly records: number;
   readonly nodes: readonly NodeResult[];
   readonly flows: readonly FlowResult[];
+  /** Slowest first; null where a part hangs on no boundary. */
+  readonly timeConstantsH: readonly (number | null)[];
   readonly quality: Quality;
 }
 
@@ -106,6 +112,11 @@ const most = (values: Float64Array) => values.reduce((a, b) => Math.max(a, b));
 export function nodalResults({ model, problem }: OpenNodal, run: Run): NodalResults {
   const recordS = problem.stepS * problem.stepsPerRecord;
   const { meters, recordNodes } = problem;
+  const steady = steadyState(
+    problem,
+    { kind: 'mean', steps: problem.stepCount },
+    { toleranceK: 1e-6, maxIterations: 100 },
+  );
   return {
     model: model.name,
     recordS,
@@ -119,6 +130,7 @@ export function nodalResults({ model, problem }: OpenNodal, run: Run): NodalResu
         minC: least(means),
         maxC: most(means),
         endC: run.finalC[i],
+        steadyC: steady.tempC[i],
       };
     }),
     flows: meters.map((meter, m) => {
@@ -131,6 +143,7 @@ export function nodalResults({ model, problem }: OpenNodal, run: Run): NodalResu
         totalKWh: (mean(values) * values.length * recordS) / 3.6e6,
       };
     }),
+    timeConstantsH: timeConstantsH(problem),
     quality: run.quality,
   };
 }
@@ -146,6 +159,7 @@ export function nodalText(results: NodalResults): string {
         { head: 'Least', unit: '°C', digits: 3, of: (row) => row.minC },
         { head: 'Greatest', unit: '°C', digits: 3, of: (row) => row.maxC },
         { head: 'At the end', unit: '°C', digits: 3, of: (row) => row.endC },
+        { head: 'Steady', unit: '°C', digits: 3, of: (row) => row.steadyC },
       ],
       results.nodes,
     ),
@@ -159,6 +173,7 @@ export function nodalText(results: NodalResults): string {
       ],
       results.flows,
     ),
+    timeConstantsText(results.timeConstantsH, 'at the steady state of the mean drivers'),
     `Energy balance closes to ${quality.relativeBalanceResidual.toExponential(1)} of its throughput; ` +
       `${quality.unconvergedSteps} of ${quality.steps} steps not converged.`,
   ].join('\n\n');
