@@ -42,6 +42,7 @@ import { shadedSurface } from './shading.ts';
 import { type StepClock, stepClock } from './step-clock.ts';
 import { addRoomSun } from './sun-inside.ts';
 import { addWindow, type WindowParts } from './window.ts';
+import { windowHours } from './window-hours.ts';
 
 /** How to cut the year and the walls. */
 export interface AssemblyOptions {
@@ -215,7 +216,17 @@ function addRoom(task: RoomTask): RoomParts {
   const massNodes = room.internalMasses.map((mass) =>
     addInternalMass(building, room, mass, { airNode, meters }, builder),
   );
-  addRoomSun({ building, room, faces, windows, views, outside, builder, meters, faceMeter });
+  const light = addRoomSun({
+    building,
+    room,
+    faces,
+    windows,
+    views,
+    outside,
+    builder,
+    meters,
+    faceMeter,
+  });
   const nodes = { airNode, faces };
   const gains = addGains(building, room, nodes, clock, builder, meters, faceMeter);
   const heatingRamp = task.heatingRamps?.get(room.id);
@@ -247,6 +258,7 @@ function addRoom(task: RoomTask): RoomParts {
     meters,
     comfort: comfortHours(building, room, clock),
     plants,
+    windows: light.map((one) => windowHours(one, one.window.face.surface, clock)),
     ...gains,
   };
 }

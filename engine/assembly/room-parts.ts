@@ -3,6 +3,7 @@ import type { Boundary, Rectangle, Room } from '../building/index.ts';
 import type { LayerMiddle } from './fabric.ts';
 import type { DrawnHours, PeopleHours } from './gains.ts';
 import type { PlantParts } from './plant.ts';
+import type { WindowHours } from './window-hours.ts';
 
 /** To which line of the room's heat balance the heat through a face belongs. */
 export type FaceBalance = 'opaque' | 'glazing' | 'ground' | 'rooms';
@@ -78,4 +79,5 @@ export interface RoomParts {
   readonly people: readonly PeopleHours[];
   /** Power that gains draw from carriers. */
   readonly drawn: readonly DrawnHours[];
+  readonly windows: readonly WindowHours[];
 }

@@ -25,6 +25,7 @@ import type {
   Simulation,
   SpaceFindings,
 } from './simulation.ts';
+import { windowFindings } from './window-findings.ts';
 
 const balanceLines = [
   'solar',
@@ -83,6 +84,9 @@ export function simulationOf(
     stepMinutes: run.problem.stepS / 60,
     rooms: figures,
     building,
+    windows: assembly.rooms.flatMap((parts, r) =>
+      windowFindings(assembly, parts, rooms[r], outdoorC, (m) => meterHours(run, m)),
+    ),
     ...(energy ? { supplies: energy.supplies, currency: assembly.building.energy.currency } : {}),
     assumptions: [...assembly.assumptions, ...(energy?.assumptions ?? [])],
     cautions: cautions(figures),

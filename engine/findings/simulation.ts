@@ -72,6 +72,27 @@ export interface RoomFindings extends SpaceFindings, RoomComfort {
   readonly latentGainsKWh?: number;
 }
 
+/** A window over the year, beside its values under standard conditions. */
+export interface WindowFindings {
+  readonly room: string;
+  readonly surface: string;
+  readonly opening: string;
+  readonly areaM2: number;
+  /** ISO 10077-1 and EN 673; EN 410 with the frame's part. */
+  readonly uValueWPerM2K: number;
+  readonly gValue: number;
+  /** Mean over the dark hours in which the room was heated; null where there were none. */
+  readonly seenUValueWPerM2K: number | null;
+  readonly seenHours: number;
+  /** Sunlight on the glass, shades taken off, and what came through; null where none fell on it. */
+  readonly incidentKWh: number;
+  readonly transmittedKWh: number;
+  readonly transmittedShare: number | null;
+  /** Hours of covering over the whole glass; null without. */
+  readonly blindHours: number | null;
+  readonly nightInsulationHours: number | null;
+}
+
 export interface RunQuality {
   /** Largest imbalance in any step of the network, or over the year in any room, over the throughput. */
   readonly relativeBalanceResidual: number;
@@ -96,6 +117,7 @@ export interface Findings {
   /** Machines behind the rooms, and the currency of all costs, where carriers are named. */
   readonly supplies?: readonly SupplyFindings[];
   readonly currency?: string;
+  readonly windows?: readonly WindowFindings[];
   readonly assumptions: readonly string[];
   readonly cautions: readonly string[];
   readonly quality: RunQuality;
