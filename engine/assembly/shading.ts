@@ -43,7 +43,7 @@ export function faceSun(
   const { beamWPerM2, isotropicWPerM2, horizonWPerM2, groundWPerM2, cosIncidence } = plane;
   const isFree = shaded === null && horizon.length === 0;
   const bare: ShadedWindow = shaded ?? { widthM: 1, heightM: 1, revealM: 0 };
-  const litAt = sunlitTable(bare);
+  const litAt = shaded === null ? () => 1 : sunlitTable(bare);
   const left = isFree
     ? { sky: 1, horizon: 1, ground: 1 }
     : diffuseShading(bare, face.tiltDeg, face.azimuthDeg, horizon, litAt);

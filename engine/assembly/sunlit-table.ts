@@ -1,9 +1,9 @@
 // Sunlit shares of a shaded face, looked up by the direction of the sun.
 //
-// The exact shadow is cut from polygons, which is too slow for every step of a year. It depends on two
+// A shadow costs more than a step of the run can spend on it, but depends on two
 // angles only: how far the sun stands to the side and how high, both seen from the face. A grid of
 // 2.5° over them is filled where the sun really comes, and read in between by straight lines.
-import { type ShadedWindow, type SunFromWindow, sunlitFraction } from '../physics/index.ts';
+import { type ShadedWindow, type SunFromWindow, sunlitByLines } from '../physics/index.ts';
 
 const stepRad = (2.5 * Math.PI) / 180;
 const half = 36; // cells from straight ahead to 90°
@@ -14,6 +14,7 @@ const width = 2 * half + 1;
  * exact one, and within 0.002 in the mean over many suns (test/engine/assembly/sunlit-table.test.ts).
  */
 export function sunlitTable(window: ShadedWindow): (sun: SunFromWindow) => number {
+  const litAt = sunlitByLines(window);
   const table = new Float64Array(width * width).fill(Number.NaN);
   const at = (i: number, j: number): number => {
     const place = i * width + j;
@@ -21,7 +22,7 @@ export function sunlitTable(window: ShadedWindow): (sun: SunFromWindow) => numbe
       const side = Math.tan(Math.max(-1.55, Math.min(1.55, (i - half) * stepRad)));
       const high = Math.tan(Math.max(-1.55, Math.min(1.55, (j - half) * stepRad)));
       const length = Math.hypot(1, side, high);
-      table[place] = sunlitFraction(window, {
+      table[place] = litAt({
         right: side / length,
         up: high / length,
         out: 1 / length,

@@ -3,7 +3,12 @@
 import fc from 'fast-check';
 import { expect, test } from 'vitest';
 import { sunlitTable } from '../../../engine/assembly/sunlit-table.ts';
-import { type ShadedWindow, sunFromWindow, sunlitFraction } from '../../../engine/physics/index.ts';
+import {
+  type ShadedWindow,
+  sunFromWindow,
+  sunlitByLines,
+  sunlitFraction,
+} from '../../../engine/physics/index.ts';
 
 const shades: ShadedWindow[] = [
   { widthM: 1.8, heightM: 1.4, revealM: 0.1 },
@@ -56,4 +61,21 @@ test('weighted by the cosine of incidence over a spread of suns, the mean differ
 
 test('a sun behind the face lights nothing', () => {
   expect(sunlitTable(shades[0])(sunFromWindow(90, 180, 0, 30))).toBe(0);
+});
+
+test('a share read along lines is within 0.005 of the exact cut, but for slivers at grazing sun', () => {
+  for (const window of shades) {
+    const byLines = sunlitByLines(window);
+    fc.assert(
+      fc.property(
+        fc.double({ min: -80, max: 80, noNaN: true }),
+        fc.double({ min: -80, max: 80, noNaN: true }),
+        (turn, altitude) => {
+          const sun = sunFromWindow(90, 180, 180 + turn, altitude);
+          return sun.out * Math.abs(byLines(sun) - sunlitFraction(window, sun)) < 0.005;
+        },
+      ),
+      { numRuns: 1000 },
+    );
+  }
 });
