@@ -14,6 +14,7 @@ import {
   horizonAltitudeDeg,
   type ShadedWindow,
   sunFromWindow,
+  sunlitByLines,
 } from '../physics/index.ts';
 import { sunlitTable } from './sunlit-table.ts';
 
@@ -43,10 +44,11 @@ export function faceSun(
   const { beamWPerM2, isotropicWPerM2, horizonWPerM2, groundWPerM2, cosIncidence } = plane;
   const isFree = shaded === null && horizon.length === 0;
   const bare: ShadedWindow = shaded ?? { widthM: 1, heightM: 1, revealM: 0 };
-  const litAt = shaded === null ? () => 1 : sunlitTable(bare);
+  const exactly = shaded === null ? () => 1 : sunlitByLines(shaded);
+  const litAt = shaded === null ? exactly : sunlitTable(exactly);
   const left = isFree
     ? { sky: 1, horizon: 1, ground: 1 }
-    : diffuseShading(bare, face.tiltDeg, face.azimuthDeg, horizon, litAt);
+    : diffuseShading(bare, face.tiltDeg, face.azimuthDeg, horizon, exactly);
   const diffuse = isotropicWPerM2.map(
     (dome, k) => left.sky * dome + left.horizon * horizonWPerM2[k] + left.ground * groundWPerM2[k],
   );

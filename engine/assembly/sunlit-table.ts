@@ -3,18 +3,17 @@
 // A shadow costs more than a step of the run can spend on it, but depends on two
 // angles only: how far the sun stands to the side and how high, both seen from the face. A grid of
 // 2.5° over them is filled where the sun really comes, and read in between by straight lines.
-import { type ShadedWindow, type SunFromWindow, sunlitByLines } from '../physics/index.ts';
+import type { SunFromWindow } from '../physics/index.ts';
 
 const stepRad = (2.5 * Math.PI) / 180;
 const half = 36; // cells from straight ahead to 90°
 const width = 2 * half + 1;
 
 /**
- * Share of the face that the sun reaches. Weighted by the cosine of incidence it is within 0.02 of the
+ * Tables the share of a face that the sun reaches, `litAt`. Weighted by the cosine of incidence it is within 0.02 of the
  * exact one, and within 0.002 in the mean over many suns (test/engine/assembly/sunlit-table.test.ts).
  */
-export function sunlitTable(window: ShadedWindow): (sun: SunFromWindow) => number {
-  const litAt = sunlitByLines(window);
+export function sunlitTable(litAt: (sun: SunFromWindow) => number): (sun: SunFromWindow) => number {
   const table = new Float64Array(width * width).fill(Number.NaN);
   const at = (i: number, j: number): number => {
     const place = i * width + j;
