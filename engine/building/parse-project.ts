@@ -4,6 +4,7 @@ import { airFaults } from './check-air.ts';
 import { airReferenceFaults } from './check-air-references.ts';
 import { geometryFaults } from './check-geometry.ts';
 import { groundFaults } from './check-ground.ts';
+import { moistureFaults } from './check-moisture.ts';
 import { plantFaults } from './check-plant.ts';
 import { referenceFaults } from './check-references.ts';
 import { useFaults } from './check-use.ts';
@@ -59,7 +60,15 @@ export function parseProjectDocument(document: unknown, file: string): Parsed<Bu
     ...airReferenceFaults(building, file),
     ...windowReferenceFaults(building, file),
   ];
-  const later = [geometryFaults, airFaults, windowFaults, groundFaults, useFaults, plantFaults];
+  const later = [
+    geometryFaults,
+    airFaults,
+    windowFaults,
+    groundFaults,
+    moistureFaults,
+    useFaults,
+    plantFaults,
+  ];
   const faults =
     references.length > 0 ? references : later.flatMap((check) => check(building, file));
   return faults.length > 0 ? { ok: false, faults } : { ok: true, value: building };

@@ -23,7 +23,28 @@ export function cautions(rooms: readonly RoomFindings[]): string[] {
     list.push(
       `Heating too small: at full power the set-point is missed in ${named(short)}. Sizes follow local codes and a licensed practitioner's design, most of all for vulnerable people.`,
     );
+  const damp = rooms.filter(isDamp);
+  if (damp.length > 0)
+    list.push(
+      `Damp: surfaces in ${named(damp)} stay humid enough for mould to grow (ISO 13788). Mould harms health; have ventilation, heating and thermal bridges looked at by a specialist.`,
+    );
+  const wet = rooms.filter((room) => room.moisture?.interstitial.some((one) => !one.driesOut));
+  if (wet.length > 0)
+    list.push(
+      `Condensation: water gathers inside the envelope of ${named(wet)} from year to year by the monthly method of ISO 13788. Timber can rot; have the build-up checked by a hygrothermal calculation.`,
+    );
   return list;
+}
+
+const dampShare = 0.05; // of the year above 80 % at a surface; common practice, no source
+
+/** By the fabric's temperature factor in the critical month, or by hours above 80 % at a surface. */
+function isDamp({ moisture }: RoomFindings): boolean {
+  if (!moisture) return false;
+  const { requiredFactor, worstPlane, bridgeFactor } = moisture.surfaceFactor;
+  const weakest = Math.min(worstPlane?.factor ?? 1, bridgeFactor ?? 1);
+  const hours = Math.max(moisture.worstFace?.hoursAbove80 ?? 0, moisture.bridge?.hoursAbove80 ?? 0);
+  return requiredFactor > weakest || hours > dampShare * 8760;
 }
 
 /** What stands under every result. */

@@ -14,6 +14,7 @@ import { runningMeanHoursC } from './comfort-adaptive.ts';
 import { bandFindings } from './comfort-band.ts';
 import { finalEnergy } from './final-energy.ts';
 import { hourName, monthOfHour } from './hour-name.ts';
+import { moistureAssumption, moistureOf } from './moisture.ts';
 import { roomComfort } from './room-comfort.ts';
 import { roomHours } from './room-hours.ts';
 import type {
@@ -56,14 +57,23 @@ export function simulationOf(
   const energy = finalEnergy(assembly.building, assembly.rooms, outdoorC, (m) =>
     meterHours(run, m),
   );
+  const plain = assembly.rooms.map((parts) => roomHours(run, parts));
+  const moisture = moistureOf(
+    assembly,
+    run,
+    plain.map((hours) => hours.airC),
+    outdoorC,
+  );
   assembly.rooms.forEach((parts, r) => {
-    const hours = roomHours(run, parts);
+    const damp = moisture?.[r];
+    const hours = damp ? { ...plain[r], relativeHumidity: damp.relativeHumidity } : plain[r];
     const comfort = roomComfort(run, parts, hours, climate);
     rooms.push(comfort.vote ? { ...hours, vote: comfort.vote } : hours);
     figures.push({
       ...roomFindings(hours, year, parts.plants),
       ...latentGains(parts.people, hours.airC),
       ...comfort.findings,
+      ...(damp ? { moisture: damp.findings } : {}),
       ...energy?.rooms[r],
     });
   });
@@ -88,7 +98,11 @@ export function simulationOf(
       windowFindings(assembly, parts, rooms[r], outdoorC, (m) => meterHours(run, m)),
     ),
     ...(energy ? { supplies: energy.supplies, currency: assembly.building.energy.currency } : {}),
-    assumptions: [...assembly.assumptions, ...(energy?.assumptions ?? [])],
+    assumptions: [
+      ...assembly.assumptions,
+      ...(energy?.assumptions ?? []),
+      ...(moisture ? [moistureAssumption] : []),
+    ],
     cautions: cautions(figures),
     quality: {
       relativeBalanceResidual: Math.max(quality.relativeBalanceResidual, worstRoom),

@@ -13,4 +13,7 @@ export { simulationOf } from './findings.ts';
 export { dayName, hourName, monthOfHour } from './hour-name.ts';
 export { type EarlyStarts, earlyStarts, learnStarts, startsText } from './optimum-start.ts';
 export type { Criterion, OverheatingFindings } from './overheating.ts';
+export type { InterstitialFindings } from './interstitial.ts';
+export type { MoistureFindings, VapourBalanceKg } from './moisture.ts';
+export type { DampHours } from './surface-damp.ts';
 export * from './simulation.ts';

@@ -38,9 +38,18 @@ export function roomComfort(
   const { outdoorC, runningMeanC, latitudeDeg, year } = climate;
   const { category, bedroom } = comfort;
   const worn = parts.comfort.votes;
+  const humidity = hours.relativeHumidity ? { relativeHumidity: hours.relativeHumidity } : {};
   const vote =
     comfort.votes && worn
-      ? hourlyVotes({ airC, meanRadiantC, occupied, outdoorC, ...comfort.votes, ...worn })
+      ? hourlyVotes({
+          airC,
+          meanRadiantC,
+          occupied,
+          outdoorC,
+          ...comfort.votes,
+          ...worn,
+          ...humidity,
+        })
       : null;
   const votes = vote && voteFindings(vote, category);
   const local =

@@ -1,6 +1,7 @@
 // What one run of a building gives: findings as figures, and the hours behind them.
 import type { WeatherNote } from '../../weather/index.ts';
 import type { SpaceEnergy, SupplyFindings } from './final-energy.ts';
+import type { MoistureFindings } from './moisture.ts';
 import type { RoomComfort } from './room-comfort.ts';
 
 /** Highest, lowest and mean over the year, with the start of the hour in local standard time. */
@@ -70,6 +71,8 @@ export interface RoomFindings extends SpaceFindings, RoomComfort {
   readonly hoursCoolingShort: number;
   /** Vapour that people give off, as heat [kWh]; 0 where they are not counted by heads. */
   readonly latentGainsKWh?: number;
+  /** Humidity and damp; where any room of the project asks for the vapour balance. */
+  readonly moisture?: MoistureFindings;
 }
 
 /** A window over the year, beside its values under standard conditions. */
@@ -147,6 +150,8 @@ export interface RoomHours {
   readonly occupied: Uint8Array;
   /** Predicted mean vote, NaN in empty hours; where votes were asked for. */
   readonly vote?: Float64Array;
+  /** Share, 0 to 1; where the run has a vapour balance. */
+  readonly relativeHumidity?: Float64Array;
   readonly flowsW: HourlyFlows;
 }
 

@@ -2,12 +2,12 @@
 // humidity step by step. Coupling goes one way: the run's heat does not feel the vapour; what
 // (de)humidifiers, people and condensation turn over as latent heat is reported beside it.
 //
-// Time integration: SDIRK2, as the thermal march (Alexander 1977): two implicit stages, L-stable, second
-// order. Steps of at most 15 min.
+// Steps of at most 15 min.
 import { humidityRatio, saturationPressurePa } from '../../weather/index.ts';
 import type { Assembly, RoomVapour } from '../assembly/index.ts';
 import { personGain } from '../physics/index.ts';
-import { solveVapour, type VapourRooms, type VapourStage, vapourStage } from './vapour-stage.ts';
+import type { VapourRooms, VapourStage } from './vapour-stage.ts';
+import { advanceVapour, firstShare, vapourState } from './vapour-step.ts';
 
 /** Hours of one room. */
 export interface VapourHours {
@@ -28,8 +28,6 @@ export interface VapourHours {
   readonly storedKg: number;
 }
 
-const gamma = 1 - Math.SQRT1_2;
-const carry = (1 - gamma) / gamma;
 const longestStepS = 900;
 const massRatio = 0.621945;
 const spinUpHours = 168;
@@ -80,11 +78,10 @@ export function marchVapour(
     pressurePa: site.properties.pressurePa,
   } satisfies VapourRooms;
 
-  const stages = [vapourStage(count), vapourStage(count)] as const;
-  const ratio = values().fill(site.humidityRatio[0]);
-  const buffer = values();
-  const startRatio = values();
-  const startBuffer = values();
+  const state = vapourState(count);
+  const { ratio, buffer, one, two } = state;
+  ratio.fill(site.humidityRatio[0]);
+  const bufferBefore = values();
   const personVapour = values();
   const hourly = vapours.map(() => emptyHours(hours));
 
@@ -127,26 +124,14 @@ export function marchVapour(
   }
 
   function advance(h: number, record: boolean): void {
-    const [one, two] = stages;
-    one.ratio.set(ratio);
-    one.buffer.set(buffer);
-    solveVapour(rooms, ratio, buffer, gamma * spanS, one);
-    for (let r = 0; r < count; r++) {
-      startRatio[r] = ratio[r] + carry * (one.ratio[r] - ratio[r]);
-      startBuffer[r] = buffer[r] + carry * (one.buffer[r] - buffer[r]);
-    }
-    two.ratio.set(one.ratio);
-    two.buffer.set(one.buffer);
-    solveVapour(rooms, startRatio, startBuffer, gamma * spanS, two);
-    if (record) {
-      const share = spanS / 3600;
-      addStage(hourly, rooms, one, h, (1 - gamma) * share);
-      addStage(hourly, rooms, two, h, gamma * share);
-      for (let r = 0; r < count; r++)
-        hourly[r].bufferKgPerS[h] += (rooms.bufferKg[r] * (two.buffer[r] - buffer[r])) / 3600;
-    }
-    ratio.set(two.ratio);
-    buffer.set(two.buffer);
+    bufferBefore.set(buffer);
+    advanceVapour(rooms, state, spanS);
+    if (!record) return;
+    const share = spanS / 3600;
+    addStage(hourly, rooms, one, h, firstShare * share);
+    addStage(hourly, rooms, two, h, (1 - firstShare) * share);
+    for (let r = 0; r < count; r++)
+      hourly[r].bufferKgPerS[h] += (rooms.bufferKg[r] * (buffer[r] - bufferBefore[r])) / 3600;
   }
 
   function runHour(h: number, record: boolean): void {
