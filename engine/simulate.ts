@@ -1,8 +1,17 @@
 // The whole path for one building and one weather year, told in steps so that a worker can breathe.
 import type { WeatherYear } from '../weather/index.ts';
-import { type Assembly, assemble } from './assembly/index.ts';
+import { type Assembly, type AssemblyOptions, assemble } from './assembly/index.ts';
 import type { Building } from './building/index.ts';
-import { learnStarts, type Simulation, simulationOf, startsText } from './findings/index.ts';
+import {
+  drawnText,
+  learnStarts,
+  mostPasses,
+  nextDrawn,
+  settledShare,
+  type Simulation,
+  simulationOf,
+  startsText,
+} from './findings/index.ts';
 import { marchSteps, type Run } from './network/index.ts';
 
 export interface SimulationOptions {
@@ -24,7 +33,8 @@ export interface Progress {
 
 /**
  * Assembles, marches, and draws the findings. Where a heater starts ahead of its set-point, a first run
- * without early starts shows how early it has to.
+ * without early starts shows how early it has to. Where a blind asks for the room's temperature, the year
+ * is run again until what was drawn and what the room asks for agree.
  *
  * @throws Error when the march diverged, naming hour and node: a fault of the model or the program
  */
@@ -35,7 +45,10 @@ export function* simulate(
 ): Generator<Progress, Simulation> {
   const now = options.nowMs ?? (() => 0);
   const started = now();
-  const how = { stepMinutes: options.stepMinutes ?? 15, refine: options.refine ?? 1 };
+  const how: Changing<AssemblyOptions> = {
+    stepMinutes: options.stepMinutes ?? 15,
+    refine: options.refine ?? 1,
+  };
   const learns = building.rooms.some((room) => room.heating?.optimumStart !== undefined);
   yield { done: 0, what: 'assembling the network' };
   let assembly = assemble(building, weather, how);
@@ -44,15 +57,28 @@ export function* simulate(
   if (learns) {
     const starts = learnStarts(assembly, yield* wholeMarch(assembly, 'learning when to start', 0));
     const again = now();
-    const heatingRamps = new Map([...starts].map(([room, { ramp }]) => [room, ramp]));
-    assembly = assemble(building, weather, { ...how, heatingRamps });
+    how.heatingRamps = new Map([...starts].map(([room, { ramp }]) => [room, ramp]));
+    assembly = assemble(building, weather, how);
     assembleMs += now() - again;
     for (const { id, name } of building.rooms) {
       const early = starts.get(id);
       if (early) notes.push(startsText(name, early));
     }
   }
-  const run = yield* wholeMarch(assembly, 'running the year', learns ? 0.5 : 0);
+  const asks = assembly.rooms.some((room) => room.windows.some((one) => one.byRoom.length > 0));
+  let run = yield* wholeMarch(assembly, 'running the year', learns ? 0.5 : 0);
+  let drawn = asks ? nextDrawn(assembly, run, null) : null;
+  let passes = 1;
+  while (drawn && drawn.gapShare > settledShare && passes < mostPasses) {
+    const again = now();
+    how.drawnByRoom = drawn.next;
+    assembly = assemble(building, weather, how);
+    assembleMs += now() - again;
+    run = yield* wholeMarch(assembly, 'settling the blinds', 0.5);
+    drawn = nextDrawn(assembly, run, drawn);
+    passes++;
+  }
+  if (drawn) notes.push(drawnText(passes, drawn.gapShare));
   return simulationOf(
     { ...assembly, assumptions: [...assembly.assumptions, ...notes] },
     weather,
@@ -60,6 +86,8 @@ export function* simulate(
     { readMs: options.readMs ?? 0, assembleMs, runMs: now() - started - assembleMs },
   );
 }
+
+type Changing<T> = { -readonly [K in keyof T]: T[K] };
 
 /** One march to its end; `from` is how much of the work lies behind it already. */
 function* wholeMarch(assembly: Assembly, what: string, from: number): Generator<Progress, Run> {

@@ -12,6 +12,7 @@ export {
 } from './read/form-plain.ts';
 export * from './read/number-table.ts';
 export * from './read/read-weather.ts';
+export * from './repair/diffuse-choice.ts';
 export * from './repair/gaps.ts';
 export * from './repair/radiation.ts';
 export * from './repair/sun-time.ts';

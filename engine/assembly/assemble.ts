@@ -8,6 +8,7 @@ import {
   standardPressurePa,
   type WeatherYear,
   weatherSteps,
+  withDiffuseSplit,
 } from '../../weather/index.ts';
 import { type Building, constructionOf, type Room, type Surface } from '../building/index.ts';
 import type { Problem } from '../network/index.ts';
@@ -84,9 +85,10 @@ function siteAir(elevationM: number): AirProperties {
 /** Builds the network of a whole building and everything that drives it over the weather's year. */
 export function assemble(
   building: Building,
-  weather: WeatherYear,
+  table: WeatherYear,
   options: AssemblyOptions,
 ): Assembly {
+  const weather = withDiffuseSplit(table, building.physics.diffuseSplit);
   const stepS = options.stepMinutes * 60;
   const steps = weatherSteps(weather, stepS, { skyMethod: building.physics.skyTemperature });
   const clock = stepClock(
@@ -99,7 +101,10 @@ export function assemble(
   const air = siteAir(weather.site.elevationM);
   const fineness: Fineness = { stepS, refine: options.refine };
   const chains = new Map<string, Chain>();
-  const assumptions: string[] = [...(building.fromLibrary ?? [])];
+  const assumptions: string[] = [
+    ...(building.fromLibrary ?? []),
+    ...weather.notes.slice(table.notes.length).map((note) => note.text),
+  ];
   const climate = groundClimate(steps, clock);
   const site = airSite(steps, clock, air);
   const airFlows: AirFlow[] = [];

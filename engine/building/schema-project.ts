@@ -23,6 +23,10 @@ const physicsSchema = z.strictObject({
     .enum(['auto', 'berdahl-martin', 'clark-allen', 'brunt', 'air-11'])
     .default('auto'),
   diffuseSky: z.enum(['perez', 'hay-davies', 'isotropic']).default('perez'),
+  /** Of tables that hold the global radiation only. */
+  diffuseSplit: z
+    .enum(['erbs', 'orgill-hollands', 'reindl', 'boland', 'boland-ridley-lauret'])
+    .default('erbs'),
   beamInside: z.enum(['floor', 'patch']).default('floor'),
   /** Where diffuse light meets the faces first: as the window sees them, or sky light down and ground light up. */
   diffuseInside: z.enum(['view-factors', 'sky-and-ground']).default('view-factors'),

@@ -16,4 +16,5 @@ export type { Criterion, OverheatingFindings } from './overheating.ts';
 export type { InterstitialFindings } from './interstitial.ts';
 export type { MoistureFindings, VapourBalanceKg } from './moisture.ts';
 export type { DampHours } from './surface-damp.ts';
+export { drawnText, mostPasses, nextDrawn, settledShare } from './room-drawn.ts';
 export * from './simulation.ts';
