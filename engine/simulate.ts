@@ -1,14 +1,20 @@
 // The whole path for one building and one weather year, told in steps so that a worker can breathe.
 import type { WeatherYear } from '../weather/index.ts';
-import { type Assembly, type AssemblyOptions, assemble } from './assembly/index.ts';
+import {
+  type Assembly,
+  type AssemblyOptions,
+  assemble,
+  emptyMemory,
+  type Memory,
+} from './assembly/index.ts';
 import type { Building } from './building/index.ts';
 import {
   drawnText,
   learnStarts,
   mostPasses,
   nextDrawn,
-  settledShare,
   type Simulation,
+  settledShare,
   simulationOf,
   startsText,
 } from './findings/index.ts';
@@ -19,6 +25,8 @@ export interface SimulationOptions {
   readonly stepMinutes?: number;
   /** Cells of every wall layer, times this; default 1. */
   readonly refine?: number;
+  /** Kept from run to run by whoever runs many: what an edit did not touch is not computed again. */
+  readonly memory?: Memory;
   /** Clock for the timings [ms]; the engine has none of its own. Without it they stay 0. */
   readonly nowMs?: () => number;
   /** Time that reading took, passed through to the findings [ms]. */
@@ -48,6 +56,7 @@ export function* simulate(
   const how: Changing<AssemblyOptions> = {
     stepMinutes: options.stepMinutes ?? 15,
     refine: options.refine ?? 1,
+    memory: options.memory ?? emptyMemory(),
   };
   const learns = building.rooms.some((room) => room.heating?.optimumStart !== undefined);
   yield { done: 0, what: 'assembling the network' };

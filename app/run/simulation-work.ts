@@ -1,6 +1,6 @@
 // Request → simulation, in steps that the worker's loop can pause between.
 
-import { parseProject, type Simulation, simulate } from '../../engine/index.ts';
+import { emptyMemory, parseProject, type Simulation, simulate } from '../../engine/index.ts';
 import { type Parsed, readWeather, type WeatherYear } from '../../weather/index.ts';
 import type { RunRequest } from './request.ts';
 import type { Work } from './serve.ts';
@@ -12,6 +12,7 @@ import type { Work } from './serve.ts';
 export function simulationWork(): (request: RunRequest) => Work<Simulation> {
   let last: { readonly key: string; readonly text: string; readonly year: WeatherYear } | null =
     null;
+  const memory = emptyMemory();
 
   function weatherOf(request: RunRequest, site: RunRequest['site']): Parsed<WeatherYear> {
     const { weatherText: text, weatherFile: file } = request;
@@ -34,6 +35,7 @@ export function simulationWork(): (request: RunRequest) => Work<Simulation> {
     const simulation = yield* simulate(project.value, weather.value, {
       ...(stepMinutes === undefined ? {} : { stepMinutes }),
       ...(refine === undefined ? {} : { refine }),
+      memory,
       nowMs: () => performance.now(),
       readMs: performance.now() - started,
     });

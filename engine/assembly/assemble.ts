@@ -34,6 +34,7 @@ import { addGround } from './ground.ts';
 import { type GroundClimate, groundClimate } from './ground-climate.ts';
 import { addInsideFilm, addInsideLongWave } from './inside-exchange.ts';
 import { addInternalMass } from './internal-mass.ts';
+import { emptyMemory, type Memory, turnMemory } from './memory.ts';
 import { NetworkBuilder, type Provenance } from './network-builder.ts';
 import { type Outdoors, outdoors } from './outdoors.ts';
 import { addPlants } from './plant.ts';
@@ -51,6 +52,8 @@ export interface AssemblyOptions {
   readonly stepMinutes: number;
   /** Multiplies the cells of every layer. */
   readonly refine: number;
+  /** Kept from one assembly to the next by whoever runs many; without it nothing is kept. */
+  readonly memory?: Memory | undefined;
   /** Set-points of heating by room at both ends of every step, in place of the schedule's. */
   readonly heatingRamps?: ReadonlyMap<string, Float64Array>;
   /** Shares over which coverings are drawn by the room's temperature, hour by hour, by window. */
@@ -90,14 +93,19 @@ export function assemble(
 ): Assembly {
   const weather = withDiffuseSplit(table, building.physics.diffuseSplit);
   const stepS = options.stepMinutes * 60;
-  const steps = weatherSteps(weather, stepS, { skyMethod: building.physics.skyTemperature });
+  const memory = options.memory ?? emptyMemory();
+  turnMemory(memory, weather);
+  const skyMethod = building.physics.skyTemperature;
+  const steps = memory.steps.of(`${stepS} ${skyMethod}`, () =>
+    weatherSteps(weather, stepS, { skyMethod }),
+  );
   const clock = stepClock(
     building.calendar,
     { year: weather.year, hours: weather.hours, utcOffsetH: weather.site.utcOffsetH },
     stepS,
   );
   const builder = new NetworkBuilder(steps.count);
-  const outside = outdoors(building, steps, builder);
+  const outside = outdoors(building, steps, builder, memory);
   const air = siteAir(weather.site.elevationM);
   const fineness: Fineness = { stepS, refine: options.refine };
   const chains = new Map<string, Chain>();

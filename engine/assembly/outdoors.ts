@@ -16,6 +16,7 @@ import {
   terrains,
   windAtHeightMPerS,
 } from '../physics/index.ts';
+import type { Memory } from './memory.ts';
 import type { NetworkBuilder } from './network-builder.ts';
 import { type FaceSun, faceSun } from './shading.ts';
 
@@ -29,6 +30,9 @@ interface Facing {
 export interface Outdoors {
   /** Steps in the year. */
   readonly count: number;
+  /** Names all that the sun outside depends on, but for the face. */
+  readonly sunKey: string;
+  readonly memory: Memory;
   readonly airNode: number;
   readonly skyNode: number;
   /** Dry bulb, mean of each step. */
@@ -47,6 +51,7 @@ export function outdoors(
   building: Building,
   steps: WeatherSteps,
   builder: NetworkBuilder,
+  memory: Memory,
 ): Outdoors {
   const method = building.physics.outsideConvection;
   const about = (name: string, what: string) => ({
@@ -71,8 +76,8 @@ export function outdoors(
   );
   let forced: { windward: Float64Array; leeward: Float64Array } | undefined;
   const films = new Map<string, number>();
-  const planes = new Map<string, PlaneIrradiance>();
   const sunlight = new Map<string, number>();
+  const sunKey = `${steps.stepS} ${building.physics.diffuseSky} ${building.site.groundReflectance}`;
   const horizon = orderedHorizon(building.site.horizon);
   const terrain = terrains[building.site.terrain];
 
@@ -103,27 +108,27 @@ export function outdoors(
   }
 
   function planeOf({ tiltDeg, azimuthDeg }: Facing): PlaneIrradiance {
-    const key = `${tiltDeg} ${azimuthDeg}`;
-    let plane = planes.get(key);
-    if (!plane) {
-      plane = planeIrradiance(steps, {
+    return memory.planes.of(`${sunKey} ${tiltDeg} ${azimuthDeg}`, () =>
+      planeIrradiance(steps, {
         tiltDeg,
         azimuthDeg,
         groundReflectance: building.site.groundReflectance,
         skyModel: building.physics.diffuseSky,
         circumsolarAsBeam: true,
-      });
-      planes.set(key, plane);
-    }
-    return plane;
+      }),
+    );
   }
 
   function sunOn(face: Facing, shaded: ShadedWindow | null): FaceSun {
-    return faceSun(planeOf(face), face, shaded, horizon, steps.sun);
+    const { tiltDeg, azimuthDeg } = face;
+    const key = `${sunKey} ${tiltDeg} ${azimuthDeg} ${JSON.stringify([shaded, horizon])}`;
+    return memory.faceSuns.of(key, () => faceSun(planeOf(face), face, shaded, horizon, steps.sun));
   }
 
   return {
     count: steps.count,
+    sunKey,
+    memory,
     airNode,
     skyNode,
     airC: Float64Array.from(
@@ -139,7 +144,9 @@ export function outdoors(
       const series = builder.series(
         `film at ${heightM} m, tilt ${tiltDeg}°, azimuth ${azimuthDeg}°`,
         'step',
-        film(heightM, tiltDeg, azimuthDeg),
+        memory.films.of(`${steps.stepS} ${method} ${building.site.terrain} ${key}`, () =>
+          film(heightM, tiltDeg, azimuthDeg),
+        ),
       );
       films.set(key, series);
       return series;

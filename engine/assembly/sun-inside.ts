@@ -9,7 +9,13 @@ import type { NetworkBuilder } from './network-builder.ts';
 import type { Outdoors } from './outdoors.ts';
 import type { Face, RoomMeters } from './room-parts.ts';
 import type { WindowParts } from './window.ts';
-import { addLayerSun, addLightFromInside, incidences, transmitted } from './window-light.ts';
+import {
+  addLayersSun,
+  addLightFromInside,
+  incidences,
+  layersSun,
+  transmitted,
+} from './window-light.ts';
 
 interface SunTask {
   readonly building: Building;
@@ -31,13 +37,62 @@ export interface WindowLightIn {
 
 /** Adds the sun of one room: sources on its faces, in its panes and its blinds. */
 export function addRoomSun(task: SunTask): WindowLightIn[] {
-  const { building, room, faces, windows, views, outside, builder, meters } = task;
+  const { faces, windows, outside, builder, meters } = task;
   if (windows.length === 0) return [];
+  const isStill = windows.every(({ states }) => states.every(({ weight }) => weight === null));
+  const light = isStill
+    ? outside.memory.roomLight.of(lightKey(task), () => roomLight(task))
+    : roomLight(task);
+  windows.forEach((window, w) => {
+    addLayersSun(window, light.layersW[w], builder);
+  });
+  faces.forEach((face, f) => {
+    const window = windows.find((one) => one.face === face);
+    if (window) addLightFromInside(window, light.totalW[f], builder);
+    if (window || face.light.absorbed === 0) return;
+    const name = `${face.name} light from inside`;
+    const series = builder.series(name, 'step', light.totalW[f]);
+    const ref = builder.source(face.node, face.light.absorbed, series, name);
+    builder.count(meters.solar, 1, ref);
+    builder.count(task.faceMeter(face), -1, ref);
+  });
+  return windows.map((window, w) => ({ window, passedW: light.passedW[w] }));
+}
+
+/** Light in a room, step by step [W]. */
+export interface RoomLight {
+  /** Let in by each window. */
+  readonly passedW: readonly Float64Array[];
+  /** Kept of the light from outside by each layer of each window. */
+  readonly layersW: readonly (readonly Float64Array[])[];
+  /** That meets each face in the end. */
+  readonly totalW: readonly Float64Array[];
+}
+
+/** All that the light in a room depends on while nothing is drawn before its windows. */
+function lightKey({ building, room, outside, faces }: SunTask): string {
+  const { box, surfaces } = room;
+  const light = faces.map((face) => face.light);
+  const glass = building.glazings.filter((one) =>
+    surfaces.some(({ openings }) => openings.some(({ glazing }) => glazing === one.id)),
+  );
+  return JSON.stringify([
+    outside.sunKey,
+    building.site,
+    building.physics,
+    box,
+    surfaces,
+    light,
+    glass,
+  ]);
+}
+
+function roomLight({ building, room, faces, windows, views, outside }: SunTask): RoomLight {
   const rays: Rays[] = [];
-  const passed = windows.map((window): WindowLightIn => {
+  const layersW: Float64Array[][] = [];
+  const passedW = windows.map((window) => {
     const degrees = incidences(window);
-    const light = transmitted(window, degrees);
-    const { beamW, skyW, groundW, scatteredW } = light;
+    const { beamW, skyW, groundW, scatteredW } = transmitted(window, degrees);
     rays.push(...beamRays(building, room, faces, window, beamW, outside.sun));
     const first = diffuseShares(building, room, faces, window, views);
     if (first.sky === first.ground)
@@ -45,23 +100,12 @@ export function addRoomSun(task: SunTask): WindowLightIn[] {
     else rays.push({ shares: first.sky, lightW: skyW }, { shares: first.ground, lightW: groundW });
     if (scatteredW)
       rays.push({ shares: viewShares(views, faces.indexOf(window.face)), lightW: scatteredW });
-    addLayerSun(window, degrees, builder);
-    const passedW = beamW.map((beam, k) => beam + skyW[k] + groundW[k] + (scatteredW?.[k] ?? 0));
-    return { window, passedW };
+    layersW.push(layersSun(window, degrees));
+    return beamW.map((beam, k) => beam + skyW[k] + groundW[k] + (scatteredW?.[k] ?? 0));
   });
   const totalW =
     building.physics.solarInside === 'fixed-shares'
       ? fixedShares(faces, rays, outside.count)
       : followed(faces, windows, views, rays, outside.count);
-  faces.forEach((face, f) => {
-    const window = windows.find((one) => one.face === face);
-    if (window) addLightFromInside(window, totalW[f], builder);
-    if (window || face.light.absorbed === 0) return;
-    const name = `${face.name} light from inside`;
-    const series = builder.series(name, 'step', totalW[f]);
-    const ref = builder.source(face.node, face.light.absorbed, series, name);
-    builder.count(meters.solar, 1, ref);
-    builder.count(task.faceMeter(face), -1, ref);
-  });
-  return passed;
+  return { passedW, layersW, totalW };
 }

@@ -48,35 +48,47 @@ export function transmitted(window: WindowParts, degrees: Float64Array): Transmi
   return { beamW, skyW, groundW, scatteredW };
 }
 
-/** What panes and coverings keep of the light from outside, in equal parts at the nodes of each layer. */
-export function addLayerSun(
-  window: WindowParts,
-  degrees: Float64Array,
-  builder: NetworkBuilder,
-): void {
+/** Nodes of each layer of a window that takes up light, in a fixed order; states may share layers. */
+function takingLayers(window: WindowParts): Map<string, readonly number[]> {
+  const layers = new Map<string, readonly number[]>();
+  for (const { layerNodes } of window.states)
+    for (const nodes of layerNodes) layers.set(nodes.join(' '), nodes);
+  return layers;
+}
+
+/** What panes and coverings keep of the light from outside, one series a layer [W]. */
+export function layersSun(window: WindowParts, degrees: Float64Array): Float64Array[] {
   const { sun, glassAreaM2: area } = window;
-  const taken = new Map<string, { nodes: readonly number[]; values: Float64Array }>();
+  const taken = new Map(
+    [...takingLayers(window).keys()].map((key) => [key, new Float64Array(degrees.length)]),
+  );
   for (const { weight, light, layerNodes } of window.states)
     layerNodes.forEach((nodes, l) => {
-      const key = nodes.join(' ');
-      const held = taken.get(key) ?? { nodes, values: new Float64Array(degrees.length) };
-      taken.set(key, held);
+      const values = taken.get(nodes.join(' '));
+      if (!values) throw new Error('a layer is among the layers');
       const ofDiffuse = light.diffuse.absorptance[l];
       for (let k = 0; k < degrees.length; k++) {
         const share = weight ? weight[k] : 1;
         if (share === 0) continue;
         const beam = sun.beamWPerM2[k];
         const direct = beam > 0 ? beam * absorbedAt(light, l, degrees[k]) : 0;
-        held.values[k] += area * share * (direct + ofDiffuse * sun.diffuseWPerM2[k]);
+        values[k] += area * share * (direct + ofDiffuse * sun.diffuseWPerM2[k]);
       }
     });
-  let layer = 0;
-  for (const { nodes, values } of taken.values()) {
-    layer++;
-    const name = `${window.name} sun in layer ${layer}`;
-    const series = builder.series(name, 'step', values);
+  return [...taken.values()];
+}
+
+/** Puts the light that layers keep at their nodes, in equal parts. */
+export function addLayersSun(
+  window: WindowParts,
+  valuesW: readonly Float64Array[],
+  builder: NetworkBuilder,
+): void {
+  [...takingLayers(window).values()].forEach((nodes, l) => {
+    const name = `${window.name} sun in layer ${l + 1}`;
+    const series = builder.series(name, 'step', valuesW[l]);
     for (const node of nodes) builder.source(node, 1 / nodes.length, series, name);
-  }
+  });
 }
 
 /** What the layers of a window keep of light from the room; `lightW` meets the window in each step. */
