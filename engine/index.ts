@@ -10,3 +10,4 @@ export * from './findings/index.ts';
 export * from './network/index.ts';
 export * from './nodal/index.ts';
 export { type Progress, type SimulationOptions, simulate } from './simulate.ts';
+export * from './study/index.ts';

@@ -7,6 +7,8 @@ import { WrongUsage } from './stop.ts';
 
 export interface Arguments {
   readonly operand: string;
+  /** Null where the command takes one operand. */
+  readonly second: string | null;
   readonly given: Given;
 }
 
@@ -41,8 +43,9 @@ export function readArguments(command: Command, args: readonly string[]): Argume
       throw wrong(`there is no option ${token.rawName}.${near ? ` Did you mean --${near}?` : ''}`);
     }
     if (Object.hasOwn(given, token.name)) throw wrong(`--${token.name} is given twice.`);
-    // A value that looks like an option is one that was forgotten: "--out --json".
-    const forgotten = !token.inlineValue && (token.value === undefined || /^-./.test(token.value));
+    // A value that looks like an option is one that was forgotten: "--out --json". A number is none.
+    const forgotten =
+      !token.inlineValue && (token.value === undefined || /^-(?![\d.])./.test(token.value));
     if (option.value !== undefined && (forgotten || token.value === '')) {
       throw wrong(`--${token.name} needs a value: --${token.name} ${option.value}.`);
     }
@@ -51,10 +54,13 @@ export function readArguments(command: Command, args: readonly string[]): Argume
     }
     given[token.name] = token.value ?? true;
   }
-  const [operand, ...more] = operands;
+  const [operand, ...rest] = operands;
   if (operand === undefined || operand === '') throw wrong(`${command.operand} is missing.`);
+  const [second, ...more] = command.second === undefined ? [undefined, ...rest] : rest;
+  if (command.second !== undefined && (second === undefined || second === ''))
+    throw wrong(`${command.second} is missing.`);
   if (more.length > 0) throw wrong(`one ${command.operand} at a time, found also "${more[0]}".`);
-  return { operand, given };
+  return { operand, second: second ?? null, given };
 }
 
 /** The text of an option that takes a value. */

@@ -1,5 +1,6 @@
 // What a command is. The list of commands, the help and the reading of arguments are drawn from this.
 
+import type { StudyThreads } from './study-threads.ts';
 import type { Terminal } from './terminal.ts';
 
 export interface Option {
@@ -18,5 +19,13 @@ export interface Command {
   readonly summary: string;
   readonly options: Readonly<Record<string, Option>>;
   readonly examples: readonly string[];
-  run(operand: string, given: Given, terminal: Terminal): Promise<void>;
+  /** A second operand, in capitals, where the command takes one. */
+  readonly second?: string;
+  run(
+    operand: string,
+    given: Given,
+    terminal: Terminal,
+    threads: StudyThreads,
+    second: string | null,
+  ): Promise<void>;
 }

@@ -4,15 +4,32 @@ import { faultText } from '../../weather/index.ts';
 import { version } from '../version.ts';
 import { readArguments } from './arguments.ts';
 import { checkCommand } from './check.ts';
+import type { Command } from './command.ts';
+import { compareCommand } from './compare.ts';
+import { cooldownCommand } from './cooldown.ts';
 import { commandHelp, generalHelp } from './help.ts';
 import { nearest } from './nearest.ts';
 import { networkCommand } from './network.ts';
+import { overheatingCommand } from './overheating.ts';
 import { simulateCommand } from './simulate.ts';
+import { sizeCommand } from './size.ts';
 import { InputFaults, WrongUsage } from './stop.ts';
+import type { StudyThreads } from './study-threads.ts';
+import { sweepCommand } from './sweep.ts';
 import { type Stream, terminal } from './terminal.ts';
 import { weatherCommand } from './weather.ts';
 
-const commands = [simulateCommand, checkCommand, weatherCommand, networkCommand];
+const commands: readonly Command[] = [
+  simulateCommand,
+  compareCommand,
+  sizeCommand,
+  cooldownCommand,
+  overheatingCommand,
+  sweepCommand,
+  checkCommand,
+  weatherCommand,
+  networkCommand,
+];
 
 export const status = { done: 0, inputAtFault: 1, wrongUsage: 2, programAtFault: 3 } as const;
 
@@ -20,9 +37,11 @@ export interface Streams {
   readonly out: Stream;
   readonly err: Stream;
   readonly env: Readonly<Record<string, string | undefined>>;
+  /** For studies; left out: everything runs on this thread. */
+  readonly threads?: StudyThreads;
 }
 
-async function runCommand(args: readonly string[], { out, err }: Streams): Promise<void> {
+async function runCommand(args: readonly string[], { out, err, threads }: Streams): Promise<void> {
   const [name, ...rest] = args;
   const speak = terminal(out, err, rest.includes('--progress'));
   if (name === undefined) throw new WrongUsage(generalHelp(commands, version));
@@ -43,7 +62,13 @@ async function runCommand(args: readonly string[], { out, err }: Streams): Promi
   }
   const read = readArguments(command, rest);
   if (read === null) return speak.print(commandHelp(command));
-  await command.run(read.operand, read.given, speak);
+  await command.run(
+    read.operand,
+    read.given,
+    speak,
+    threads ?? { worker: null, count: 1 },
+    read.second,
+  );
 }
 
 /** Says why it ended, and gives the exit status. */

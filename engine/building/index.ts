@@ -27,6 +27,7 @@ export { schemaFaults } from './schema-faults.ts';
 export type { Gain, Usage } from './schema-gains.ts';
 export type { GroundContact } from './schema-ground.ts';
 export type { Moisture } from './schema-moisture.ts';
+export type { Economics, OptionOfProject } from './schema-options.ts';
 export type { Emitter, Heating, Radiator, Scheduled } from './schema-plant.ts';
 export { type Building, type Physics, projectSchema } from './schema-project.ts';
 export type {

@@ -4,9 +4,10 @@ import { airUnitSchema, doorwaySchema } from './schema-air.ts';
 import { energySchema } from './schema-energy.ts';
 import { constructionSchema, glazingSchema, materialSchema } from './schema-fabric.ts';
 import { groundContactSchema } from './schema-ground.ts';
+import { economicsSchema, optionSchema } from './schema-options.ts';
 import { airExchangeSchema, airPathSchema, roomSchema } from './schema-room.ts';
 import { calendarSchema, profileSchema, scheduleSchema } from './schema-use.ts';
-import { between, id, share, text } from './schema-values.ts';
+import { between, share, text } from './schema-values.ts';
 import { coveringSchema } from './schema-window.ts';
 
 /** Which published method computes what; the defaults are the first of each list. */
@@ -52,7 +53,7 @@ const weatherSourceSchema = z.strictObject({
     .string()
     .regex(/^[0-9a-f]{64}$/, '64 hexadecimal digits')
     .optional(),
-  /** Where the table does not say. */
+  /** Where the weather was taken, for tables that do not say; goes before what the table says. */
   site: z
     .strictObject({
       name: text.default(''),
@@ -62,13 +63,6 @@ const weatherSourceSchema = z.strictObject({
       utcOffsetH: between(-12, 14),
     })
     .optional(),
-});
-
-/** A named list of changes to the base: at `path` in this document the value becomes `value`. */
-const optionSchema = z.strictObject({
-  id,
-  name: text,
-  changes: z.array(z.strictObject({ path: z.string().min(1), value: z.json() })),
 });
 
 export const projectSchema = z.strictObject({
@@ -95,6 +89,7 @@ export const projectSchema = z.strictObject({
   doorways: z.array(doorwaySchema).default([]),
   groundContacts: z.array(groundContactSchema).default([]),
   options: z.array(optionSchema).default([]),
+  economics: economicsSchema.prefault({}),
 });
 
 /** The project with every default filled in. */

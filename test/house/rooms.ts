@@ -23,7 +23,7 @@ export const rules: Readonly<Record<string, Rule>> = {
   'engine/nodal': { rooms: ['weather', 'engine/network', 'engine/building'], packages: ['zod'] },
   'engine/study': {
     rooms: [...underEngine, 'engine/assembly', 'engine/findings', 'engine'],
-    packages: [],
+    packages: ['zod'],
   },
   engine: {
     rooms: [...underEngine, 'engine/assembly', 'engine/findings', 'engine/nodal', 'engine/study'],

@@ -58,8 +58,18 @@ describe('usage', () => {
   test('help lists the commands there are, and each has its own with examples', async () => {
     const { out, status } = await run(['--help']);
     expect(status).toBe(0);
-    const commands = [...out.matchAll(/^ {2}(\w+) [A-Z]+ {2}/gm)].map((match) => match[1] ?? '');
-    expect(commands).toEqual(['simulate', 'check', 'weather', 'network']);
+    const commands = [...out.matchAll(/^ {2}(\w+) [A-Z]+(?: [A-Z]+)? {2}/gm)].map((match) => match[1] ?? '');
+    expect(commands).toEqual([
+      'simulate',
+      'compare',
+      'size',
+      'cooldown',
+      'overheating',
+      'sweep',
+      'check',
+      'weather',
+      'network',
+    ]);
     for (const command of commands) {
       const help = await run([command, '--help']);
       expect(help.status).toBe(0);
