@@ -47,6 +47,13 @@ const choices: Choices = {
     'hay-davies': 'Hay and Davies (1980)',
     isotropic: 'an evenly bright sky',
   },
+  diffuseSplit: {
+    erbs: 'Erbs, Klein and Duffie (1982)',
+    'orgill-hollands': 'Orgill and Hollands (1977)',
+    reindl: 'Reindl, Beckman and Duffie (1990)',
+    boland: 'Boland, Scott and Luther (2001)',
+    'boland-ridley-lauret': 'Ridley, Boland and Lauret (2010)',
+  },
   beamInside: {
     floor: 'on the floor',
     patch: 'on the faces that its patch meets, by geometry',
@@ -70,6 +77,7 @@ export const methods: ChapterMaker = ({ building: { physics } }) => {
     ['Heat radiation inside', choices.insideLongWave[physics.insideLongWave]],
     ['Heat radiation outside', choices.outsideLongWave[physics.outsideLongWave]],
     ['Place of the sun', 'Reda and Andreas, NREL/TP-560-34302 (2008)'],
+    ['Split of a lone global radiation', choices.diffuseSplit[physics.diffuseSplit]],
     ['Sun on a plane', choices.diffuseSky[physics.diffuseSky]],
     [
       'Sun through glass',

@@ -169,6 +169,19 @@ describe('input at fault', () => {
     expect(said.err).toContain('…/weather/none.csv, the whole file: found nothing at this path');
   });
 
+  test('check explains constructions, glazings and windows, as text and as data', async () => {
+    const text = await run(['check', at('house.inglenook.json')]);
+    expect(text).toMatchObject({ status: 0, err: '' });
+    expect(text.out).toContain('Constructions: U and films by ISO 6946');
+    expect(text.out).toContain('Windows: U_w by ISO 10077-1');
+    const data = await run(['check', at('house.inglenook.json'), '--json']);
+    const { ok, explained } = JSON.parse(data.out);
+    expect(ok).toBe(true);
+    for (const part of ['constructions', 'glazings', 'windows'])
+      expect(explained[part].length).toBeGreaterThan(0);
+    expect(explained.constructions[0].uses[0].uValueWPerM2K).toBeGreaterThan(0);
+  });
+
   test('check --json tells the faults as data, with status 1', async () => {
     const said = await run(['check', at('bad.json'), '--json']);
     expect(said.status).toBe(1);
