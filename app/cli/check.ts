@@ -2,18 +2,8 @@ import { type Building, type BuildingExplained, explainBuilding } from '../../en
 import type { Fault } from '../../weather/index.ts';
 import type { Command } from './command.ts';
 import { explainedText } from './explained-text.ts';
-import { explainedText } from './explained-text.ts';
 import { openModel, weatherFor } from './inputs.ts';
 import { InputFaults } from './stop.ts';
-
-/** What `check --json` prints. */
-interface CheckDocument {
-  readonly ok: boolean;
-  readonly faults: readonly Fault[];
-  readonly notes: readonly string[];
-  /** Derived values; only where there are no faults. */
-  readonly explained?: BuildingExplained;
-}
 
 /** What `check --json` prints. */
 interface CheckDocument {

@@ -209,14 +209,7 @@ export function addOuterExchange(
     },
   });
   if (toSkyM2 > 0)
-    addGreyLink(
-      builder,
-      node,
-      outside.skyNode,
-      toSkyM2,
-      emissivity,
-      about('radiation to the sky'),
-    );
+    addGreyLink(builder, node, outside.skyNode, toSkyM2, emissivity, about('radiation to the sky'));
   if (toAirM2 > 0)
     addGreyLink(
       builder,

@@ -58,7 +58,9 @@ describe('usage', () => {
   test('help lists the commands there are, and each has its own with examples', async () => {
     const { out, status } = await run(['--help']);
     expect(status).toBe(0);
-    const commands = [...out.matchAll(/^ {2}(\w+) [A-Z]+(?: [A-Z]+)? {2}/gm)].map((match) => match[1] ?? '');
+    const commands = [...out.matchAll(/^ {2}(\w+) [A-Z]+(?: [A-Z]+)? {2}/gm)].map(
+      (match) => match[1] ?? '',
+    );
     expect(commands).toEqual([
       'simulate',
       'compare',
