@@ -1,6 +1,7 @@
 // The whole network's heat balance, added up apart from the equations that were solved: what crosses
 // the boundary, what sources and plants give, and what the capacities took up.
 
+import type { ChainModes } from './chain-modes.ts';
 import type { Stage } from './stage.ts';
 
 export interface Balance {
@@ -8,6 +9,13 @@ export interface Balance {
   readonly inside: Int32Array;
   readonly outside: Int32Array;
   readonly conductanceWPerK: Float64Array;
+  /** Chains with an end at a boundary: which end (0 A, 1 B), its slot and the other end's, and what the
+   * chain shows there: own entry and exchange [W/K]. */
+  readonly chainEnd: Int32Array;
+  readonly chainSlot: Int32Array;
+  readonly chainOther: Int32Array;
+  readonly chainOwnWPerK: Float64Array;
+  readonly chainExchangeWPerK: Float64Array;
   /** State-dependent and driven links with one end at a boundary; +1 where `to` is inside. */
   readonly law: Int32Array;
   readonly lawSign: Float64Array;
@@ -21,18 +29,20 @@ export interface Balance {
   readonly sourceSum: Float64Array;
   readonly sourceAbs: Float64Array;
   readonly unitShare: Float64Array;
-  /** Capacity of each slot that stores [J/K]. */
+  /** Capacity of each row that stores [J/K]. */
   readonly storing: Int32Array;
   readonly capacityJPerK: Float64Array;
   /** All capacities and constant conductances [J/K, W/K]: they set what counts as no flow. */
   readonly totalJPerK: number;
   readonly totalWPerK: number;
+  /** Heat in each chain at the step's start [J]. */
+  readonly chainJ: Float64Array;
   /** Running sums of a step [W]. */
   inW: number;
   throughputW: number;
 }
 
-export function compileBalance(stage: Stage): Balance {
+export function compileBalance(stage: Stage, modes: ChainModes): Balance {
   const { layout, laws, driven, enclosures } = stage;
   const { network, rows, firstChain, slotOfNode } = layout;
   const isFixed = (slot: number) => slot >= rows && slot < firstChain;
@@ -44,11 +54,19 @@ export function compileBalance(stage: Stage): Balance {
       const a = slotOfNode[group.from[k]];
       const b = slotOfNode[group.to[k]];
       totalWPerK += group.conductanceWPerK[k];
-      if (isFixed(a) === isFixed(b)) continue;
+      if (isFixed(a) === isFixed(b) || a >= firstChain || b >= firstChain) continue;
       crossing.push(
         isFixed(a) ? [b, a, group.conductanceWPerK[k]] : [a, b, group.conductanceWPerK[k]],
       );
     }
+  }
+  const ends: [number, number, number, number, number][] = [];
+  for (let c = 0; c < layout.chains.count; c++) {
+    const a = layout.chainSlotA[c];
+    const b = layout.chainSlotB[c];
+    const exchange = stage.chain.exchange[c];
+    if (isFixed(a)) ends.push([2 * c, a, b, stage.chain.ownA[c], exchange]);
+    if (isFixed(b)) ends.push([2 * c + 1, b, a, stage.chain.ownB[c], exchange]);
   }
   const over = (from: Int32Array, to: Int32Array, count: number) => {
     const list: number[] = [];
@@ -71,7 +89,7 @@ export function compileBalance(stage: Stage): Balance {
   const storing: number[] = [];
   const capacity: number[] = [];
   layout.nodeOfSlot.forEach((node, slot) => {
-    if (node < 0 || isFixed(slot) || network.capacityJPerK[node] === 0) return;
+    if (node < 0 || slot >= rows || network.capacityJPerK[node] === 0) return;
     storing.push(slot);
     capacity.push(network.capacityJPerK[node]);
   });
@@ -79,6 +97,11 @@ export function compileBalance(stage: Stage): Balance {
     inside: Int32Array.from(crossing, (c) => c[0]),
     outside: Int32Array.from(crossing, (c) => c[1]),
     conductanceWPerK: Float64Array.from(crossing, (c) => c[2]),
+    chainEnd: Int32Array.from(ends, (e) => e[0]),
+    chainSlot: Int32Array.from(ends, (e) => e[1]),
+    chainOther: Int32Array.from(ends, (e) => e[2]),
+    chainOwnWPerK: Float64Array.from(ends, (e) => e[3]),
+    chainExchangeWPerK: Float64Array.from(ends, (e) => e[4]),
     law,
     lawSign: Float64Array.from(law, (l) => (isFixed(laws.from[l]) ? 1 : -1)),
     driven: scaled,
@@ -96,8 +119,9 @@ export function compileBalance(stage: Stage): Balance {
     ),
     storing: Int32Array.from(storing),
     capacityJPerK: Float64Array.from(capacity),
-    totalJPerK: capacity.reduce((a, b) => a + b, 0),
+    totalJPerK: [...capacity, ...modes.capacityJPerK].reduce((a, b) => a + b, 0),
     totalWPerK,
+    chainJ: new Float64Array(modes.heatJ.length),
     inW: 0,
     throughputW: 0,
   };
@@ -107,6 +131,7 @@ export function compileBalance(stage: Stage): Balance {
 export function addStageFlows(
   balance: Balance,
   stage: Stage,
+  modes: ChainModes,
   x: Float64Array,
   series: Float64Array,
   weight: number,
@@ -116,6 +141,13 @@ export function addStageFlows(
   const { inside, outside, conductanceWPerK, law, lawSign, sourceSeries } = balance;
   for (let k = 0; k < inside.length; k++) {
     const q = conductanceWPerK[k] * (x[outside[k]] - x[inside[k]]);
+    sum += q;
+    through += Math.abs(q);
+  }
+  const { chainEnd, chainSlot, chainOther, chainOwnWPerK, chainExchangeWPerK } = balance;
+  for (let k = 0; k < chainEnd.length; k++) {
+    const passed = chainOwnWPerK[k] * x[chainSlot[k]] - chainExchangeWPerK[k] * x[chainOther[k]];
+    const q = passed - modes.now[chainEnd[k]];
     sum += q;
     through += Math.abs(q);
   }
@@ -179,6 +211,11 @@ function memberGainW(stage: Stage, m: number, x: Float64Array): number {
  */
 const stillK = 3e-5;
 
+/** Takes note of where the stores stand before the first step. */
+export function openBalance(balance: Balance, modes: ChainModes): void {
+  balance.chainJ.set(modes.heatJ);
+}
+
 /**
  * Closes a step: imbalance over throughput (or over what stores took up and gave, where that is more,
  * or over a change of all temperatures by `stillK`, so that a network at rest is not judged by its
@@ -188,6 +225,7 @@ export function closeStep(
   balance: Balance,
   start: Float64Array,
   end: Float64Array,
+  modes: ChainModes,
   stepS: number,
 ): number {
   const { storing, capacityJPerK } = balance;
@@ -195,6 +233,14 @@ export function closeStep(
   let moved = 0;
   for (let i = 0; i < storing.length; i++) {
     const q = capacityJPerK[i] * (end[storing[i]] - start[storing[i]]);
+    stored += q;
+    moved += Math.abs(q);
+  }
+  const { chainJ } = balance;
+  const { heatJ } = modes;
+  for (let c = 0; c < heatJ.length; c++) {
+    const q = heatJ[c] - chainJ[c];
+    chainJ[c] = heatJ[c];
     stored += q;
     moved += Math.abs(q);
   }

@@ -2,9 +2,9 @@
 //
 // Interior node i of a chain:  (c + gA + gB)·T_i − gA·T_(i−1) − gB·T_(i+1) = c·Told_i,  c = C/Δt.
 // Gaussian elimination from end A to end B, the coupling to A carried along:
-//   pivot_i·T_i = y_i + a_i·T_A + gB_i·T_(i+1),   y_i = r_i + lower_i·y_(i−1).
+//   pivot_i·T_i = y_i + a_i·T_A + gB_i·T_(i+1),   y_i = r_i + gA_i/pivot_(i−1)·y_(i−1).
 // All factors are sums and products of positive numbers (no cancellation), so that the eliminated
-// system conserves heat to rounding. Exact: test/engine/network/elimination.test.ts.
+// system conserves heat to rounding. What the histories r add, chain-modes.ts knows.
 
 import type { Chains } from './chains.ts';
 
@@ -22,8 +22,6 @@ export interface ChainFactors {
   readonly ownA: Float64Array;
   readonly ownB: Float64Array;
   readonly exchange: Float64Array;
-  /** Scratch: y of the forward sweep, kept for the backward one. */
-  readonly y: Float64Array;
 }
 
 /** Factors of all chains; `stageS` Infinity gives the steady state. */
@@ -42,7 +40,6 @@ export function factorChains(
     ownA: new Float64Array(chains.count),
     ownB: new Float64Array(chains.count),
     exchange: new Float64Array(chains.count),
-    y: new Float64Array(n),
   };
   const { towardsA, towardsB, start } = chains;
   for (let c = 0; c < chains.count; c++) {
@@ -74,43 +71,8 @@ export function factorChains(
   return f;
 }
 
-/**
- * Forward sweep: adds each chain's history to the right-hand side of its ends.
- *
- * @param at slot of the first interior node in the state vectors
- * @param base,prev state vectors; the stage starts from wBase·base + wPrev·prev
- * @param b right-hand side by slot [W], added to in place
- */
-export function sweepForward(
-  chains: Chains,
-  f: ChainFactors,
-  slotA: Int32Array,
-  slotB: Int32Array,
-  at: number,
-  base: Float64Array,
-  prev: Float64Array,
-  wBase: number,
-  wPrev: number,
-  b: Float64Array,
-): void {
-  const { start, count } = chains;
-  const { storage, lower, shareA, shareNext, y } = f;
-  for (let c = 0; c < count; c++) {
-    let value = 0;
-    let atA = 0;
-    const end = start[c + 1];
-    for (let i = start[c]; i < end; i++) {
-      value = storage[i] * (wBase * base[at + i] + wPrev * prev[at + i]) + lower[i] * value;
-      y[i] = value;
-      atA += shareA[i] * value;
-    }
-    b[slotA[c]] += atA;
-    b[slotB[c]] += shareNext[end - 1] * value;
-  }
-}
-
-/** Backward sweep: interior temperatures from those of the ends, written into `x`. */
-export function sweepBackward(
+/** Temperatures inside the chains from those of the ends where nothing is stored, written into `x`. */
+export function steadyInside(
   chains: Chains,
   f: ChainFactors,
   slotA: Int32Array,
@@ -119,12 +81,12 @@ export function sweepBackward(
   x: Float64Array,
 ): void {
   const { start, count } = chains;
-  const { inverse, shareA, shareNext, y } = f;
+  const { shareA, shareNext } = f;
   for (let c = 0; c < count; c++) {
     const atA = x[slotA[c]];
     let value = x[slotB[c]];
     for (let i = start[c + 1] - 1; i >= start[c]; i--) {
-      value = inverse[i] * y[i] + shareA[i] * atA + shareNext[i] * value;
+      value = shareA[i] * atA + shareNext[i] * value;
       x[at + i] = value;
     }
   }

@@ -1,6 +1,7 @@
 // Chains: paths of nodes that hang on exactly two constant links and on nothing else, such as the
 // layers of a wall between its two surfaces. They are eliminated onto their end nodes, so that a step
-// costs a forward and a backward pass over them, whatever happens at the ends.
+// costs one pass over them, whatever happens at the ends. Longer ones are cut, so that their modes
+// (chain-modes.ts) stay quick to find.
 
 import type { Network } from './problem.ts';
 
@@ -20,6 +21,9 @@ export interface Chains {
   readonly towardsA: Float64Array;
   readonly towardsB: Float64Array;
 }
+
+/** Most nodes inside one chain. */
+const longest = 64;
 
 interface Ends {
   readonly links: Int32Array;
@@ -98,7 +102,15 @@ export function findChains(network: Network): Chains {
       at = ends.links[2 * next] === link ? 2 * next + 1 : 2 * next;
     }
   };
-  const add = (a: number, nodes: readonly number[], links: readonly number[], b: number) => {
+  const add = (a: number, nodes: readonly number[], links: readonly number[], b: number): void => {
+    if (nodes.length > longest) {
+      const cut = nodes[longest]; // outside any chain, it is the end of what lies on either side
+      done[cut] = 1;
+      add(a, nodes.slice(0, longest), links.slice(0, longest + 1), cut);
+      const rest = nodes.slice(longest + 1);
+      if (rest.length > 0) add(cut, rest, links.slice(longest + 1), b);
+      return;
+    }
     nodes.forEach((v, k) => {
       done[v] = 1;
       node.push(v);

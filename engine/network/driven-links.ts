@@ -18,9 +18,10 @@ export interface DrivenLinks {
   readonly ownTo: Int32Array;
   readonly atFrom: Int32Array;
   readonly atTo: Int32Array;
-  /** Conductance now, and the one in the matrix [W/K]. */
+  /** Links that a series drives. */
+  readonly driven: Int32Array;
+  /** Conductance now, which is the one in the matrix [W/K]. */
   readonly conductanceWPerK: Float64Array;
-  readonly inMatrixWPerK: Float64Array;
   /** Links that bring a boundary's temperature to a row. */
   readonly inflowLink: Int32Array;
   readonly inflowRow: Int32Array;
@@ -56,7 +57,6 @@ export function compileDriven(
   const atTo = ints().fill(spare);
   const rateWPerK = new Float64Array(count);
   const conductanceWPerK = new Float64Array(count);
-  const inMatrixWPerK = new Float64Array(count).fill(NaN);
   const inflow: [number, number, number][] = [];
   const put = (l: number, a: number, b: number, rate: number, s: number, mutual: boolean) => {
     from[l] = a;
@@ -65,7 +65,6 @@ export function compileDriven(
     series[l] = s;
     if (s < 0) {
       conductanceWPerK[l] = rate;
-      inMatrixWPerK[l] = rate;
     }
     if (b < rows) {
       ownTo[l] = entryOf(lu, b, b);
@@ -108,37 +107,53 @@ export function compileDriven(
     ownTo,
     atFrom,
     atTo,
+    driven: Int32Array.from(series.keys()).filter((l) => series[l] >= 0),
     conductanceWPerK,
-    inMatrixWPerK,
     inflowLink: Int32Array.from(inflow, (e) => e[0]),
     inflowRow: Int32Array.from(inflow, (e) => e[1]),
     inflowSlot: Int32Array.from(inflow, (e) => e[2]),
   };
 }
 
-/** Sets the conductances of a stage; true where any differs from the one in the matrix. */
-export function driveLinks(links: DrivenLinks, seriesNow: Float64Array): boolean {
-  const { count, rateWPerK, series, conductanceWPerK, inMatrixWPerK } = links;
-  let changed = false;
-  for (let l = 0; l < count; l++) {
-    if (series[l] < 0) continue;
+/**
+ * Sets the conductances of a stage, brings the matrix entries `a` up to them and marks the rows.
+ * @returns whether any changed
+ */
+export function driveLinks(
+  links: DrivenLinks,
+  seriesNow: Float64Array,
+  a: Float64Array,
+  dirty: Uint8Array,
+): boolean {
+  const { driven, rateWPerK, series, conductanceWPerK, from, to } = links;
+  const { ownFrom, ownTo, atFrom, atTo } = links;
+  let any = false;
+  for (let k = 0; k < driven.length; k++) {
+    const l = driven[k];
     const g = rateWPerK[l] * seriesNow[series[l]];
+    const change = g - conductanceWPerK[l];
+    if (change === 0) continue;
     conductanceWPerK[l] = g;
-    if (g !== inMatrixWPerK[l]) changed = true;
+    a[ownFrom[l]] += change;
+    a[atFrom[l]] -= change;
+    a[ownTo[l]] += change;
+    a[atTo[l]] -= change;
+    dirty[from[l]] = 1;
+    dirty[to[l]] = 1;
+    any = true;
   }
-  return changed;
+  return any;
 }
 
-/** Adds the conductances to the matrix entries `a`. */
+/** Adds the conductances in use to the matrix entries `a`, those of constant rate apart. */
 export function assembleDriven(links: DrivenLinks, a: Float64Array): void {
-  const { count, series, ownFrom, ownTo, atFrom, atTo, conductanceWPerK, inMatrixWPerK } = links;
-  for (let l = 0; l < count; l++) {
-    if (series[l] < 0) continue; // in the constant layer
+  const { driven, ownFrom, ownTo, atFrom, atTo, conductanceWPerK } = links;
+  for (let k = 0; k < driven.length; k++) {
+    const l = driven[k];
     const g = conductanceWPerK[l];
     a[ownFrom[l]] += g;
     a[atFrom[l]] -= g;
     a[ownTo[l]] += g;
     a[atTo[l]] -= g;
-    inMatrixWPerK[l] = g;
   }
 }

@@ -104,6 +104,29 @@ export function assembleEnclosures(enclosures: Enclosures, a: Float64Array): voi
   }
 }
 
+/** Brings the slopes of an enclosure in the matrix up to those last evaluated and marks its rows. */
+export function renewEnclosure(
+  enclosures: Enclosures,
+  e: number,
+  a: Float64Array,
+  dirty: Uint8Array,
+): void {
+  const { start, slot, row, exchangeM2, rowSumM2, entry, slope, slopeNow } = enclosures;
+  const first = start[e];
+  const n = start[e + 1] - first;
+  for (let j = 0; j < n; j++) {
+    const change = slopeNow[first + j] - slope[first + j];
+    slope[first + j] = slopeNow[first + j];
+    dirty[slot[first + j]] = 1;
+    if (change === 0) continue;
+    for (let i = 0; i < n; i++) {
+      const p = row[first + i] + j;
+      a[entry[p]] -= exchangeM2[p] * change;
+    }
+    a[entry[row[first + j] + j]] += rowSumM2[first + j] * change;
+  }
+}
+
 /** Adds what the linearisation at state `x` leaves on the right-hand side. */
 export function addEnclosureRest(enclosures: Enclosures, x: Float64Array, b: Float64Array): void {
   const { count, start, slot, row, exchangeM2, rowSumM2, slope, emissionWPerM2, rest } = enclosures;
@@ -118,21 +141,4 @@ export function addEnclosureRest(enclosures: Enclosures, x: Float64Array, b: Flo
       b[slot[first + i]] += sum;
     }
   }
-}
-
-/** Net radiation that member `m` (position in its enclosure) gains from emissions `emission` of all members [W]. */
-export function enclosureGainW(
-  enclosures: Enclosures,
-  e: number,
-  position: number,
-  emission: Float64Array,
-): number {
-  const { start, row, exchangeM2 } = enclosures;
-  const first = start[e];
-  const n = start[e + 1] - first;
-  const r = row[first + position];
-  let sum = 0;
-  for (let j = 0; j < n; j++)
-    sum += exchangeM2[r + j] * (emission[first + j] - emission[first + position]);
-  return sum;
 }

@@ -11,6 +11,8 @@ export interface Layout {
   readonly network: Network;
   readonly units: readonly Unit[];
   readonly chains: Chains;
+  /** 1 for a chain whose ends are coupled by the iteration and not by the matrix. */
+  readonly faint: Uint8Array;
   readonly order: Order;
   readonly rows: number;
   /** First slot of the boundaries (= rows) and of the chain interiors. */
@@ -31,7 +33,13 @@ export interface Layout {
 }
 
 /** The couplings between unknowns (nodes outside chains first, then units), and how they change. */
-function couplings(network: Network, chains: Chains, units: readonly Unit[], vertex: Int32Array) {
+function couplings(
+  network: Network,
+  chains: Chains,
+  units: readonly Unit[],
+  vertex: Int32Array,
+  faint: Uint8Array,
+) {
   const nodes = vertex.reduce((n, v) => (v >= 0 ? n + 1 : n), 0);
   const count = nodes + units.length;
   const neighbours = Array.from({ length: count }, () => new Set<number>());
@@ -50,7 +58,14 @@ function couplings(network: Network, chains: Chains, units: readonly Unit[], ver
       couple(vertex[group.from[k]], vertex[group.to[k]], atLevel);
     }
   }
-  for (let c = 0; c < chains.count; c++) couple(vertex[chains.endA[c]], vertex[chains.endB[c]], 0);
+  for (let c = 0; c < chains.count; c++) {
+    const [a, b] = [vertex[chains.endA[c]], vertex[chains.endB[c]]];
+    if (faint[c] === 0) couple(a, b, 0);
+    else {
+      couple(a, -1, 2);
+      couple(b, -1, 2);
+    }
+  }
   for (const { nodes: members } of network.enclosures) {
     for (const a of members) for (const b of members) couple(vertex[a], vertex[b], 2);
   }
@@ -68,10 +83,18 @@ function couplings(network: Network, chains: Chains, units: readonly Unit[], ver
   return { neighbours, level, late };
 }
 
-/** Lays a network out; structure only, so it serves every step length. */
-export function layOut(network: Network): Layout {
+/**
+ * Lays a network out.
+ *
+ * @param faintFor tells the chains whose ends are coupled so faintly that it is left to the iteration
+ */
+export function layOut(
+  network: Network,
+  faintFor: (chains: Chains) => Uint8Array = (chains) => new Uint8Array(chains.count),
+): Layout {
   const nodeCount = network.nodeNames.length;
   const chains = findChains(network);
+  const faint = faintFor(chains);
   const units = plantUnits(network);
   const vertex = new Int32Array(nodeCount);
   for (const v of chains.node) vertex[v] = -2;
@@ -86,7 +109,7 @@ export function layOut(network: Network): Layout {
       unknownNodes.push(i);
     }
   }
-  const graph = couplings(network, chains, units, vertex);
+  const graph = couplings(network, chains, units, vertex, faint);
   const order = eliminationOrder(graph);
   const rows = order.sequence.length;
   const firstChain = rows + fixedNodes.length;
@@ -117,6 +140,7 @@ export function layOut(network: Network): Layout {
     network,
     units,
     chains,
+    faint,
     order,
     rows,
     firstFixed: rows,

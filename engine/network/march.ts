@@ -1,11 +1,10 @@
 // The march: a Problem through all its steps, with start-up, records, and word on how it went.
 
 import { assertSound } from './check.ts';
-import { toNodes, toSlots } from './layout.ts';
 import type { Method, Outcome, Problem, Run } from './problem.ts';
-import { createRecorder } from './recorder.ts';
+import { createRecorder, openRecorder } from './recorder.ts';
 import { steadyState } from './steady.ts';
-import { advance, createStepper, type Stepper } from './stepper.ts';
+import { advance, createStepper, placeState, readState, type Stepper } from './stepper.ts';
 
 /** How far the march is. */
 export interface Progress {
@@ -30,26 +29,23 @@ interface StartUp {
 
 /** Fixed start, or the steady state and then the span over and over until it repeats itself. */
 function* startUp(stepper: Stepper): Generator<Progress, StartUp> {
-  const { problem, layout, method } = stepper;
+  const { problem, method } = stepper;
   const { start } = problem;
-  const place = (tempC: Float64Array) => {
-    toSlots(layout, tempC, stepper.x2);
-    stepper.x1.set(stepper.x2);
-  };
   if (start.kind === 'temperatures') {
-    place(start.tempC);
+    placeState(stepper, start.tempC);
     return { passes: 0, steps: 0, driftK: 0, failedSlot: -1, failedStep: 0 };
   }
   const { spanSteps, toleranceK, maxPasses } = start;
   const first = problem.stepCount - spanSteps;
-  place(steadyState(problem, { kind: 'mean', steps: spanSteps, from: first }, method).tempC);
+  const begin = steadyState(problem, { kind: 'mean', steps: spanSteps, from: first }, method);
+  placeState(stepper, begin.tempC);
   const nodes = problem.network.nodeNames.length;
   const before = new Float64Array(nodes);
   const after = new Float64Array(nodes);
   let driftK = Infinity;
   let pass = 0;
   while (pass < maxPasses && driftK > toleranceK) {
-    toNodes(layout, stepper.x2, before);
+    readState(stepper, before);
     for (let k = 0; k < spanSteps; k++) {
       if (k % reportEvery === 0) yield { phase: 'start-up', step: k, stepCount: spanSteps, pass };
       const failedSlot = advance(stepper, first + k, null);
@@ -63,7 +59,7 @@ function* startUp(stepper: Stepper): Generator<Progress, StartUp> {
         };
       }
     }
-    toNodes(layout, stepper.x2, after);
+    readState(stepper, after);
     driftK = 0;
     for (let i = 0; i < nodes; i++) {
       if (problem.network.boundarySeries[i] >= 0) continue; // driven, whatever the start
@@ -113,7 +109,7 @@ export function* marchSteps(
     stepper.iterations = 0;
     stepper.unconvergedSteps = 0;
     stepper.worstBalance = 0;
-    recorder.startC.set(stepper.x2);
+    openRecorder(recorder, stage, stepper.modes, stepper.x2);
     for (let k = 0; k < problem.stepCount; k++) {
       if (k % reportEvery === 0) {
         const go = yield {
@@ -136,7 +132,7 @@ export function* marchSteps(
     }
   }
   const finalC = new Float64Array(problem.network.nodeNames.length);
-  toNodes(layout, stepper.x2, finalC);
+  readState(stepper, finalC);
   return {
     problem,
     method,

@@ -12,6 +12,49 @@ export function seriesAt(series: Series, step: number, share: number): number {
   return values[step] + share * (values[step + 1] - values[step]);
 }
 
+/** Series apart by whether they move within a step. */
+export interface Readings {
+  readonly series: readonly Series[];
+  readonly held: Int32Array;
+  readonly moving: Int32Array;
+}
+
+export function compileReadings(series: readonly Series[]): Readings {
+  const pick = (isHeld: boolean) =>
+    Int32Array.from(series.keys()).filter((i) => (series[i].hold === 'step') === isHeld);
+  return { series, held: pick(true), moving: pick(false) };
+}
+
+/** Reads the held series of a step into `out`; true where any differs from what was there. */
+export function readHeld(readings: Readings, step: number, out: Float64Array): boolean {
+  const { series, held } = readings;
+  let changed = false;
+  for (let k = 0; k < held.length; k++) {
+    const i = held[k];
+    const v = series[i].values[step];
+    if (v === out[i]) continue;
+    out[i] = v;
+    changed = true;
+  }
+  return changed;
+}
+
+/** Reads the moving series at `share` of a step into `out`. */
+export function readMoving(
+  readings: Readings,
+  step: number,
+  share: number,
+  out: Float64Array,
+): void {
+  const { series, moving } = readings;
+  for (let k = 0; k < moving.length; k++) {
+    const { values, hold } = series[moving[k]];
+    const at = hold === 'ramp' ? 2 * step : step;
+    const v = values[at];
+    out[moving[k]] = values[at + 1] === v ? v : v + share * (values[at + 1] - v);
+  }
+}
+
 /** All series at `share` of step `step`, written into `out`, one entry a series. */
 export function readSeries(
   all: readonly Series[],

@@ -1,6 +1,7 @@
 // Sparse LU of a matrix with a symmetric, fixed pattern, row by row (up-looking), without pivoting:
 // the nodes' part is an M-matrix, and plant rows come after the nodes that give them a pivot.
-// Row i depends on earlier rows only, so a change in row r asks for rows r… to be factored again.
+// A row depends on the rows below it in the elimination tree only: a change in one row asks for that
+// row and its ancestors to be factored again, which leaves the other rooms of a building alone.
 
 import type { Order } from './ordering.ts';
 
@@ -14,10 +15,14 @@ export interface SparseLu {
   readonly values: Float64Array;
   readonly inverse: Float64Array;
   readonly work: Float64Array;
+  /** First later row that each row is coupled to, or −1: its parent in the elimination tree. */
+  readonly parent: Int32Array;
+  /** By slot; 1 for a row whose entries changed since it was factored. */
+  readonly dirty: Uint8Array;
 }
 
-/** The pattern that the elimination order fills. */
-export function createLu(order: Order): SparseLu {
+/** The pattern that the elimination order fills. `slots` is the length of the state, boundaries too. */
+export function createLu(order: Order, slots: number): SparseLu {
   const n = order.upper.length;
   const lower: number[][] = Array.from({ length: n }, () => []);
   order.upper.forEach((columns, i) => {
@@ -43,6 +48,8 @@ export function createLu(order: Order): SparseLu {
     values: new Float64Array(rowStart[n]),
     inverse: new Float64Array(n),
     work: new Float64Array(n),
+    parent: Int32Array.from(order.upper, (columns) => (columns.length > 0 ? columns[0] : -1)),
+    dirty: new Uint8Array(slots).fill(1),
   };
 }
 
@@ -60,12 +67,13 @@ export function entryOf(lu: SparseLu, row: number, col: number): number {
 }
 
 /**
- * Factors rows `from`… of `a` (same pattern). Gives the first row whose pivot vanished against the
- * row's own size, or −1.
+ * Factors the dirty rows of `a` (same pattern) and what depends on them. Gives the first row whose pivot
+ * vanished against the row's own size, which stays dirty, or −1.
  */
-export function factorFrom(lu: SparseLu, a: Float64Array, from: number): number {
-  const { size, rowStart, column, diagonal, values, inverse, work } = lu;
-  for (let i = from; i < size; i++) {
+export function factorDirty(lu: SparseLu, a: Float64Array): number {
+  const { size, rowStart, column, diagonal, values, inverse, work, parent, dirty } = lu;
+  for (let i = 0; i < size; i++) {
+    if (dirty[i] === 0) continue;
     const begin = rowStart[i];
     const end = rowStart[i + 1];
     const diag = diagonal[i];
@@ -91,6 +99,8 @@ export function factorFrom(lu: SparseLu, a: Float64Array, from: number): number 
     const pivot = values[diag];
     if (!(Math.abs(pivot) > 1e-14 * scale)) return i;
     inverse[i] = 1 / pivot;
+    dirty[i] = 0;
+    if (parent[i] >= 0) dirty[parent[i]] = 1;
   }
   return -1;
 }

@@ -1,69 +1,23 @@
-// Keeps the matrix of a stage up to date: drivers, slopes, plant rows, factors.
+// Keeps the matrix of a stage up to date: linearisations, plant rows, factors.
 
 import { assembleDriven } from './driven-links.ts';
-import { addEnclosureRest, assembleEnclosures } from './enclosures.ts';
-import { factorFrom } from './sparse-lu.ts';
+import {
+  addEnclosureRest,
+  assembleEnclosures,
+  evaluateEmission,
+  renewEnclosure,
+} from './enclosures.ts';
+import { addFaint } from './faint.ts';
+import { evaluateLaws } from './laws.ts';
+import { factorDirty } from './sparse-lu.ts';
 import type { Stage } from './stage.ts';
 import { assembleUnits, coolSet, heatSet, off, type UnitsState } from './units-state.ts';
 
-/** Rebuilds the layer of the driven links from row `firstDriven` on. */
-export function loadDrivers(stage: Stage): void {
-  const { layout, lu, constant, withDrivers, driven } = stage;
-  const first = lu.rowStart[layout.firstDriven];
-  const { matrix } = stage;
-  for (let p = first; p < constant.length; p++) withDrivers[p] = constant[p];
-  assembleDriven(driven, withDrivers);
-  for (let p = first; p < constant.length; p++) matrix[p] = withDrivers[p];
-  stage.stale = Math.min(stage.stale, layout.firstDriven);
-  stage.loaded = false; // the upper layer was overwritten
-}
-
-/**
- * Adds to the right-hand side what the linearisations at state `at` leave, with the slopes in the
- * matrix, and tells how far these lag behind, as a share of their nodes' own entries (largest).
- */
-export function addRests(stage: Stage): number {
-  const { laws, slopeFrom, slopeTo, rest, at, b, lightness, enclosures } = stage;
-  const { from, to, flowW, count, freeFrom, freeTo } = laws;
-  const nowFrom = laws.slopeFrom;
-  const nowTo = laws.slopeTo;
-  let worst = 0;
-  for (let l = 0; l < count; l++) {
-    const f = from[l];
-    const t = to[l];
-    const sf = slopeFrom[l];
-    const st = slopeTo[l];
-    const q = flowW[l] - sf * at[f] + st * at[t];
-    rest[l] = q;
-    b[f] -= q;
-    b[t] += q;
-    const lagFrom = Math.abs(nowFrom[l] * freeFrom[l] - sf) * lightness[f];
-    const lagTo = Math.abs(nowTo[l] * freeTo[l] - st) * lightness[t];
-    if (lagFrom > worst) worst = lagFrom;
-    if (lagTo > worst) worst = lagTo;
-  }
-  const { slot, slope, slopeNow, rowSumM2 } = enclosures;
-  if (slot.length === 0) return worst;
-  for (let m = 0; m < slot.length; m++) {
-    const lag = Math.abs(slopeNow[m] - slope[m]) * rowSumM2[m] * lightness[slot[m]];
-    if (lag > worst) worst = lag;
-  }
-  addEnclosureRest(enclosures, at, b);
-  return worst;
-}
-
-/** Puts the slopes last evaluated into the matrix (`fresh`), or those already in use. */
-export function loadSlopes(stage: Stage, fresh: boolean): void {
-  const { layout, lu, withDrivers, matrix, laws, slopeFrom, slopeTo, enclosures } = stage;
-  const first = lu.rowStart[layout.firstState];
-  for (let p = first; p < matrix.length; p++) matrix[p] = withDrivers[p];
-  if (fresh) {
-    for (let l = 0; l < laws.count; l++) {
-      slopeFrom[l] = laws.slopeFrom[l] * laws.freeFrom[l];
-      slopeTo[l] = laws.slopeTo[l] * laws.freeTo[l];
-    }
-    enclosures.slope.set(enclosures.slopeNow);
-  }
+/** Puts the matrix together from its parts, with the slopes in use: at first, and against the rounding of many changes. */
+export function buildMatrix(stage: Stage): void {
+  const { constant, matrix, laws, slopeFrom, slopeTo, enclosures, lu } = stage;
+  for (let p = 0; p < matrix.length; p++) matrix[p] = constant[p];
+  assembleDriven(stage.driven, matrix);
   const { ownFrom, ownTo, atFrom, atTo } = stage.lawEntry;
   for (let l = 0; l < laws.count; l++) {
     matrix[ownFrom[l]] += slopeFrom[l];
@@ -73,8 +27,93 @@ export function loadSlopes(stage: Stage, fresh: boolean): void {
   }
   assembleEnclosures(enclosures, matrix);
   stage.units.inMatrix.fill(255);
-  stage.stale = Math.min(stage.stale, layout.firstState);
+  lu.dirty.fill(1);
+  stage.stale = true;
+}
+
+/** Renews the slopes of a block's links in matrix and rests. */
+function renewLinks(stage: Stage, block: number): void {
+  const { blocks, laws, slopeFrom, slopeTo, rest, restSum, at, matrix, lu } = stage;
+  const { ownFrom, ownTo, atFrom, atTo } = stage.lawEntry;
+  const { from, to, flowW, freeFrom, freeTo } = laws;
+  const { dirty } = lu;
+  for (let k = blocks.linkStart[block]; k < blocks.linkStart[block + 1]; k++) {
+    const l = blocks.links[k];
+    const f = from[l];
+    const t = to[l];
+    const sf = laws.slopeFrom[l] * freeFrom[l];
+    const st = laws.slopeTo[l] * freeTo[l];
+    const byFrom = sf - slopeFrom[l];
+    const byTo = st - slopeTo[l];
+    matrix[ownFrom[l]] += byFrom;
+    matrix[atFrom[l]] -= byTo;
+    matrix[ownTo[l]] += byTo;
+    matrix[atTo[l]] -= byFrom;
+    slopeFrom[l] = sf;
+    slopeTo[l] = st;
+    const q = flowW[l] - sf * at[f] + st * at[t];
+    const change = q - rest[l];
+    rest[l] = q;
+    restSum[f] -= change;
+    restSum[t] += change;
+    dirty[f] = 1;
+    dirty[t] = 1;
+  }
+}
+
+/**
+ * Evaluates all laws at `at` and sums what their linearisations leave, with the slopes in the matrix;
+ * slopes of a block that lag by more than `limit` (as a share of their nodes' own entries) are renewed.
+ * @returns the largest lag that stays
+ */
+export function linearise(stage: Stage, series: Float64Array, step: number, limit: number): number {
+  const { laws, slopeFrom, slopeTo, rest, restSum, at, enclosures, blocks } = stage;
+  const { linkWeight, memberWeight } = stage;
+  evaluateLaws(laws, at, series, step);
+  restSum.fill(0);
+  addFaint(stage.faint, at, restSum);
+  const { from, to, flowW, count, freeFrom, freeTo } = laws;
+  const nowFrom = laws.slopeFrom;
+  const nowTo = laws.slopeTo;
+  const { lag, ofLink, ofMember } = blocks;
+  lag.fill(0);
+  for (let l = 0; l < count; l++) {
+    const f = from[l];
+    const t = to[l];
+    const sf = slopeFrom[l];
+    const st = slopeTo[l];
+    const q = flowW[l] - sf * at[f] + st * at[t];
+    rest[l] = q;
+    restSum[f] -= q;
+    restSum[t] += q;
+    const byFrom = Math.abs(nowFrom[l] * freeFrom[l] - sf);
+    const byTo = Math.abs(nowTo[l] * freeTo[l] - st);
+    const share = Math.max(byFrom, byTo) * linkWeight[l];
+    if (!(share <= lag[ofLink[l]])) lag[ofLink[l]] = share;
+  }
+  if (enclosures.slot.length > 0) {
+    const { slopeNow, slope } = enclosures;
+    evaluateEmission(enclosures, at);
+    for (let m = 0; m < slope.length; m++) {
+      const share = Math.abs(slopeNow[m] - slope[m]) * memberWeight[m];
+      if (share > lag[ofMember[m]]) lag[ofMember[m]] = share;
+    }
+  }
+  let worst = 0;
+  for (let b = 0; b < blocks.count; b++) {
+    if (lag[b] <= limit) {
+      if (lag[b] > worst) worst = lag[b];
+      continue;
+    }
+    renewLinks(stage, b);
+    for (let k = blocks.enclosureStart[b]; k < blocks.enclosureStart[b + 1]; k++) {
+      renewEnclosure(enclosures, blocks.enclosures[k], stage.matrix, stage.lu.dirty);
+    }
+    stage.stale = true;
+  }
+  if (enclosures.slot.length > 0) addEnclosureRest(enclosures, at, restSum);
   stage.loaded = true;
+  return worst;
 }
 
 /** A unit that has no pivot of its own gives way, or the one that holds the same sensor lower does. */
@@ -97,16 +136,15 @@ function giveWay(units: UnitsState, u: number): void {
  * @returns row without a pivot, or −1 when all is well
  */
 export function refresh(stage: Stage): number {
-  const { layout, lu, matrix, units } = stage;
+  const { lu, matrix, units } = stage;
   for (let tries = 0; ; tries++) {
-    stage.stale = Math.min(stage.stale, assembleUnits(units, matrix, layout.rows));
-    if (stage.stale >= layout.rows) return -1;
-    const failed = factorFrom(lu, matrix, stage.stale);
+    if (assembleUnits(units, matrix, lu.dirty)) stage.stale = true;
+    if (!stage.stale) return -1;
+    const failed = factorDirty(lu, matrix);
     if (failed < 0) {
-      stage.stale = layout.rows;
+      stage.stale = false;
       return -1;
     }
-    stage.stale = Math.min(stage.stale, failed);
     const u = units.row.indexOf(failed);
     const holds = u >= 0 && (units.mode[u] === heatSet || units.mode[u] === coolSet);
     if (!holds || tries > units.count) return failed;

@@ -1,16 +1,20 @@
 // One implicit stage:  C/Δt·(T − T_start) = q(t, T) − K(t, T)·T, plants included.
 //
-// The matrix lives in three layers over one pattern: constant; with the links that drivers set; with
-// slopes of state-dependent laws and plant rows. Each change refactors from the first row it touches.
+// The matrix holds constants, the links that drivers set, slopes of state-dependent laws and plant rows;
+// each is brought up to date entry by entry, and only rows that depend on a change are factored again.
 // Slopes in the matrix may lag behind the state (a chord step): every flow is then taken as
 //   flow = law(state) + slope in matrix · (change), which balances exactly and differs from the law
 // by (slope error · last change), with the last change below the tolerance.
 
+import { type Blocks, compileBlocks } from './blocks.ts';
 import { type ChainFactors, factorChains } from './chain-sweeps.ts';
 import { compileDriven, type DrivenLinks } from './driven-links.ts';
+import { compileLoads, type DriverLoads, type Tie } from './driver-loads.ts';
 import { compileEnclosures, type Enclosures } from './enclosures.ts';
+import { compileFaint, type FaintLinks } from './faint.ts';
 import { compileLaws, type StateLinks } from './laws.ts';
 import type { Layout } from './layout.ts';
+import type { Series } from './problem.ts';
 import { createLu, entryOf, type SparseLu } from './sparse-lu.ts';
 import { compileUnits, type UnitsState } from './units-state.ts';
 
@@ -18,70 +22,54 @@ export interface Stage {
   readonly layout: Layout;
   readonly lu: SparseLu;
   readonly chain: ChainFactors;
+  readonly faint: FaintLinks;
   readonly driven: DrivenLinks;
+  readonly loads: DriverLoads;
   readonly laws: StateLinks;
   readonly enclosures: Enclosures;
+  readonly blocks: Blocks;
   readonly units: UnitsState;
   /** C/Δt of each row [W/K]. */
   readonly storage: Float64Array;
-  /** Matrix layers; the last entry of each is a spare that absorbs what has no place. */
+  /** Constant entries, and the matrix; the last entry is a spare that absorbs what has no place. */
   readonly constant: Float64Array;
-  readonly withDrivers: Float64Array;
   readonly matrix: Float64Array;
-  /** Constant conductances between a row and a boundary (chains' own exchange included). */
-  readonly tieRow: Int32Array;
-  readonly tieSlot: Int32Array;
-  readonly tieWPerK: Float64Array;
-  readonly sourceSlot: Int32Array;
   /** Slopes in the matrix, and what each linearisation leaves: flow = slopeFrom·Tf − slopeTo·Tt + rest. */
   readonly slopeFrom: Float64Array;
   readonly slopeTo: Float64Array;
   readonly rest: Float64Array;
+  /** All rests summed at each slot [W]. */
+  readonly restSum: Float64Array;
   readonly lawEntry: {
     readonly ownFrom: Int32Array;
     readonly ownTo: Int32Array;
     readonly atFrom: Int32Array;
     readonly atTo: Int32Array;
   };
-  /** 1/diagonal of the constant layer, 0 at boundaries: how much a slope weighs at its node. */
-  readonly lightness: Float64Array;
-  /** Slopes in the matrix are renewed when they lag by more than this share of their node's own entry. */
-  readonly lagLimit: number;
+  /** How much a wrong slope of each link, or emission slope of each member, weighs at its nodes. */
+  readonly linkWeight: Float64Array;
+  readonly memberWeight: Float64Array;
+  /** Whether nothing depends on the state but the plants. */
+  readonly isLinear: boolean;
+  /** Rows from `firstState` on that are nodes. */
+  readonly stateRows: Int32Array;
   /** Right-hand side before the iteration, and in it; by slot. */
   readonly before: Float64Array;
   readonly b: Float64Array;
   /** State at which the laws are evaluated. */
   readonly at: Float64Array;
-  /** First row to factor again; `rows` when the factors are up to date. */
-  stale: number;
-  /** Whether slopes were put into the matrix yet. */
+  /** Whether any row is dirty. */
+  stale: boolean;
+  /** Whether the laws were evaluated yet. */
   loaded: boolean;
-}
-
-/** Lag of the slopes at which a small core is factored again: two iterations a stage, one factorisation. */
-const leastLag = 0.003;
-/** Ratio of factor to solve work up to which that pays, and the lag never passed. */
-const cheapRatio = 3;
-const mostLag = 0.03;
-
-/** The dearer a factorisation against a solve (many rooms, much fill), the longer slopes are kept. */
-function lagLimitFor(lu: SparseLu, firstState: number): number {
-  let factorWork = 0;
-  for (let i = firstState; i < lu.size; i++) {
-    for (let p = lu.rowStart[i]; p < lu.diagonal[i]; p++) {
-      const k = lu.column[p];
-      factorWork += lu.rowStart[k + 1] - lu.diagonal[k];
-    }
-  }
-  const solveWork = lu.rowStart[lu.size] - lu.rowStart[firstState];
-  const ratio = solveWork > 0 ? factorWork / solveWork : 1;
-  return Math.min(mostLag, leastLag * Math.max(1, ratio / cheapRatio));
+  /** Stages solved, and rebuilds of factors, for the record. */
+  solves: number;
 }
 
 /** Everything that one stage length needs. `stageS` Infinity gives the steady state. */
-export function createStage(layout: Layout, stageS: number): Stage {
+export function createStage(layout: Layout, series: readonly Series[], stageS: number): Stage {
   const { network, rows, slotOfNode, slotCount, firstFixed, chains, units } = layout;
-  const lu = createLu(layout.order);
+  const lu = createLu(layout.order, slotCount);
   const spare = lu.column.length;
   const constant = new Float64Array(spare + 1);
   const storage = new Float64Array(rows);
@@ -91,7 +79,7 @@ export function createStage(layout: Layout, stageS: number): Stage {
     storage[row] = network.capacityJPerK[node] / stageS;
     constant[lu.diagonal[row]] += storage[row];
   }
-  const ties: [number, number, number][] = [];
+  const ties: Tie[] = [];
   const tie = (a: number, b: number, ownA: number, ownB: number, exchange: number) => {
     if (a < rows) constant[lu.diagonal[a]] += ownA;
     if (b < rows) constant[lu.diagonal[b]] += ownB;
@@ -114,7 +102,12 @@ export function createStage(layout: Layout, stageS: number): Stage {
   for (let c = 0; c < chains.count; c++) {
     const a = layout.chainSlotA[c];
     const b = layout.chainSlotB[c];
-    tie(a, b, chain.ownA[c], chain.ownB[c], chain.exchange[c]);
+    const exchange = chain.exchange[c];
+    if (layout.faint[c] === 0) tie(a, b, chain.ownA[c], chain.ownB[c], exchange);
+    else {
+      constant[lu.diagonal[a]] += chain.ownA[c] - exchange;
+      constant[lu.diagonal[b]] += chain.ownB[c] - exchange;
+    }
   }
   units.forEach((unit, u) => {
     unit.deliveryNodes.forEach((v, i) => {
@@ -130,37 +123,52 @@ export function createStage(layout: Layout, stageS: number): Stage {
     const own = constant[lu.diagonal[row]];
     lightness[row] = own > 0 ? 1 / own : 1e3;
   }
+  const faint = compileFaint(layout, chain);
+  for (let k = 0; k < faint.count; k++) {
+    const weight = Math.max(lightness[faint.a[k]], lightness[faint.b[k]]);
+    faint.share = Math.max(faint.share, 2 * faint.wPerK[k] * weight);
+  }
+  const enclosures = compileEnclosures(layout, lu, spare);
+  const stateRows: number[] = [];
+  for (let row = layout.firstState; row < rows; row++) {
+    if (layout.nodeOfSlot[row] >= 0) stateRows.push(row);
+  }
   return {
     layout,
     lu,
     chain,
+    faint,
     driven: compileDriven(layout, lu, spare, constant),
+    loads: compileLoads(layout, series, ties),
     laws,
-    enclosures: compileEnclosures(layout, lu, spare),
+    enclosures,
+    blocks: compileBlocks(laws, enclosures, rows),
     units: compileUnits(layout, lu, spare),
     storage,
     constant,
-    withDrivers: Float64Array.from(constant),
     matrix: Float64Array.from(constant),
-    tieRow: Int32Array.from(ties, (t) => t[0]),
-    tieSlot: Int32Array.from(ties, (t) => t[1]),
-    tieWPerK: Float64Array.from(ties, (t) => t[2]),
-    sourceSlot: network.sources.node.map((v) => slotOfNode[v]),
     slopeFrom: new Float64Array(laws.count),
     slopeTo: new Float64Array(laws.count),
     rest: new Float64Array(laws.count),
+    restSum: new Float64Array(slotCount),
     lawEntry: {
       ownFrom: from.map((a) => entry(a, a)),
       ownTo: to.map((b) => entry(b, b)),
       atFrom: from.map((a, l) => entry(a, to[l])),
       atTo: to.map((b, l) => entry(b, from[l])),
     },
-    lightness,
-    lagLimit: lagLimitFor(lu, layout.firstState),
+    linkWeight: Float64Array.from(from, (a, l) => Math.max(lightness[a], lightness[to[l]])),
+    memberWeight: Float64Array.from(
+      enclosures.slot,
+      (slot, m) => lightness[slot] * enclosures.rowSumM2[m],
+    ),
+    isLinear: laws.count === 0 && enclosures.slot.length === 0 && faint.count === 0,
+    stateRows: Int32Array.from(stateRows),
     before: new Float64Array(slotCount),
     b: new Float64Array(slotCount),
     at: new Float64Array(slotCount),
-    stale: 0,
+    stale: true,
     loaded: false,
+    solves: 0,
   };
 }

@@ -1,10 +1,12 @@
 // Steady state of a network: the stage equation without storage, plants and nonlinear laws included.
 
+import { steadyInside } from './chain-sweeps.ts';
+import { holdLoads } from './driver-loads.ts';
 import { type Layout, layOut, toNodes } from './layout.ts';
 import type { Method, Problem } from './problem.ts';
 import { readSeries, seriesMeans } from './series.ts';
 import { createStage } from './stage.ts';
-import { type Solved, solveStage } from './stage-solve.ts';
+import { loadStage, type Solved, solveStage } from './stage-solve.ts';
 import { setUnitBounds } from './units-state.ts';
 
 /** Drivers held for ever: those in the middle of one step, or the means of `steps` steps from step `from` (0). */
@@ -31,19 +33,23 @@ export function steadyState(problem: Problem, held: Held, method: Method): Stead
       ? seriesMeans(problem, held.from ?? 0, held.steps)
       : new Float64Array(problem.series.length);
   if (held.kind === 'step') readSeries(problem.series, held.step, 0.5, series);
-  const stage = createStage(layout, Infinity);
+  const stage = createStage(layout, problem.series, Infinity);
   const x = new Float64Array(layout.slotCount);
   x.fill(meanBoundaryC(layout, series));
   setUnitBounds(stage.units, series, x, 1);
   const solved: Solved = { iterations: 0, converged: false, singularRow: -1 };
   const most = Math.max(leastIterations, method.maxIterations);
   const step = held.kind === 'step' ? held.step : 0;
-  solveStage(stage, x, x, 0, 0, x, series, step, method.toleranceK, most, solved);
+  holdLoads(stage.loads, series);
+  loadStage(stage, x, x, 0, 0, x, series);
+  solveStage(stage, x, series, step, method.toleranceK, most, solved);
   if (solved.singularRow >= 0) {
     const node = layout.nodeOfSlot[solved.singularRow];
     const name = node >= 0 ? problem.network.nodeNames[node] : 'a plant';
     throw new Error(`no steady state: ${name} is not tied to any boundary`);
   }
+  const { chains, chainSlotA, chainSlotB, firstChain } = layout;
+  steadyInside(chains, stage.chain, chainSlotA, chainSlotB, firstChain, x);
   const tempC = new Float64Array(layout.slotOfNode.length);
   toNodes(layout, x, tempC);
   const plantW = new Float64Array(problem.network.plants.length);

@@ -8,13 +8,25 @@
 // Source: R. Alexander, "Diagonally implicit Runge-Kutta methods for stiff O.D.E.'s", SIAM J. Numer.
 // Anal. 14 (1977) 1006-1021, doi:10.1137/0714068.
 
-import { addStageFlows, type Balance, closeStep, compileBalance } from './balance.ts';
-import { type Layout, layOut } from './layout.ts';
+import { addStageFlows, type Balance, closeStep, compileBalance, openBalance } from './balance.ts';
+import {
+  addFirstHistory,
+  addSecondHistory,
+  advanceModes,
+  type ChainModes,
+  compileModes,
+  insideC,
+  placeModes,
+} from './chain-modes.ts';
+import { factorChains } from './chain-sweeps.ts';
+import { holdLoads } from './driver-loads.ts';
+import { faintChains } from './faint.ts';
+import { type Layout, layOut, toNodes, toSlots } from './layout.ts';
 import type { Method, Problem } from './problem.ts';
 import { addStage, endStep, type Recorder } from './recorder.ts';
-import { readSeries } from './series.ts';
+import { compileReadings, type Readings, readHeld, readMoving } from './series.ts';
 import { createStage, type Stage } from './stage.ts';
-import { type Solved, solveStage } from './stage-solve.ts';
+import { loadStage, type Solved, solveStage } from './stage-solve.ts';
 import { setUnitBounds } from './units-state.ts';
 
 export const gamma = 1 - Math.SQRT1_2;
@@ -27,11 +39,11 @@ export interface Stepper {
   readonly method: Method;
   readonly layout: Layout;
   readonly stage: Stage;
+  readonly modes: ChainModes;
   readonly balance: Balance;
+  readonly readings: Readings;
   readonly series: Float64Array;
-  /** Whether any driver differs between the stages of a step. */
-  readonly hasLinear: boolean;
-  /** States at the step's start, its first stage and its end; by slot. */
+  /** States at the step's start, its first stage and its end; by slot, without what is inside chains. */
   x0: Float64Array;
   x1: Float64Array;
   x2: Float64Array;
@@ -45,17 +57,24 @@ export interface Stepper {
 }
 
 export function createStepper(problem: Problem, method: Method): Stepper {
-  const layout = layOut(problem.network);
-  const stage = createStage(layout, gamma * problem.stepS);
+  const { network, stepS } = problem;
+  const tauS = gamma * stepS;
+  const layout = layOut(network, (chains) => {
+    const factors = factorChains(chains, network.capacityJPerK, tauS);
+    return faintChains(network, chains, factors, tauS);
+  });
+  const stage = createStage(layout, problem.series, tauS);
+  const modes = compileModes(layout.chains, network.capacityJPerK, tauS, carry);
   const state = () => new Float64Array(layout.slotCount);
   return {
     problem,
     method,
     layout,
     stage,
-    balance: compileBalance(stage),
-    series: new Float64Array(problem.series.length),
-    hasLinear: problem.series.some((one) => one.hold === 'linear'),
+    modes,
+    balance: compileBalance(stage, modes),
+    readings: compileReadings(problem.series),
+    series: new Float64Array(problem.series.length).fill(NaN),
     x0: state(),
     x1: state(),
     x2: state(),
@@ -68,62 +87,83 @@ export function createStepper(problem: Problem, method: Method): Stepper {
   };
 }
 
+/** Sets the state, by node. */
+export function placeState(s: Stepper, tempC: Float64Array): void {
+  const { layout } = s;
+  toSlots(layout, tempC, s.x2);
+  s.x1.set(s.x2);
+  placeModes(layout.chains, s.modes, s.x2, layout.firstChain);
+  openBalance(s.balance, s.modes);
+}
+
+/** Copies the state, by node. */
+export function readState(s: Stepper, tempC: Float64Array): void {
+  const { layout, modes, x2 } = s;
+  const { chains, chainSlotA, chainSlotB, firstChain } = layout;
+  for (let c = 0; c < chains.count; c++) {
+    for (let i = chains.start[c]; i < chains.start[c + 1]; i++) {
+      x2[firstChain + i] = insideC(modes, c, i, x2[chainSlotA[c]], x2[chainSlotB[c]], false);
+    }
+  }
+  toNodes(layout, x2, tempC);
+}
+
 /**
  * Advances step `k` from the state in `x2` to the new one in `x2`.
  * @returns −1, or the slot of the first node that came out without a value
  */
 export function advance(s: Stepper, k: number, recorder: Recorder | null): number {
-  const { problem, method, stage, solved, series, balance } = s;
-  const { units } = stage;
+  const { problem, method, stage, solved, series, balance, modes, readings } = s;
+  const { units, before } = stage;
+  const { chainSlotA, chainSlotB } = s.layout;
+  const { toleranceK, maxIterations } = method;
   const spent = s.x0;
   s.x0 = s.x2;
   s.x2 = spent;
   const { x0, x1, x2 } = s;
-  const { rows } = s.layout;
 
-  // First guesses go on along the last slope; exact wherever nothing bends.
-  readSeries(problem.series, k, gamma, series);
+  if (readHeld(readings, k, series)) holdLoads(stage.loads, series);
+  readMoving(readings, k, gamma, series);
   setUnitBounds(units, series, x0, 1);
-  for (let i = s.layout.firstState; i < rows; i++) {
-    x1[i] = x0[i] + (gamma / (1 - gamma)) * (x0[i] - x1[i]);
-  }
   units.mode.set(s.modes1);
-  const { toleranceK, maxIterations } = method;
-  solveStage(stage, x0, x0, 1, 0, x1, series, k, toleranceK, maxIterations, solved);
+  loadStage(stage, x0, x0, 1, 0, x1, series);
+  addFirstHistory(modes, chainSlotA, chainSlotB, before);
+  solveStage(stage, x1, series, k, toleranceK, maxIterations, solved);
   if (solved.singularRow >= 0) return solved.singularRow;
   s.modes1.set(units.mode);
   s.iterations += solved.iterations;
   let converged = solved.converged;
-  addStageFlows(balance, stage, x1, series, 1 - gamma);
-  if (recorder) addStage(recorder, stage, x1, 1 - gamma);
+  addStageFlows(balance, stage, modes, x1, series, 1 - gamma);
+  if (recorder) addStage(recorder, stage, modes, x1, series, 1 - gamma, true);
 
-  if (s.hasLinear) readSeries(problem.series, k, 1, series);
+  readMoving(readings, k, 1, series);
   setUnitBounds(units, series, x1, gamma);
-  for (let i = s.layout.firstState; i < rows; i++) x2[i] = x1[i] + carry * (x1[i] - x0[i]);
   units.mode.set(s.modes2);
-  solveStage(stage, x0, x1, 1 - carry, carry, x2, series, k, toleranceK, maxIterations, solved);
+  loadStage(stage, x0, x1, 1 - carry, carry, x2, series);
+  addSecondHistory(modes, chainSlotA, chainSlotB, x1, before);
+  solveStage(stage, x2, series, k, toleranceK, maxIterations, solved);
   if (solved.singularRow >= 0) return solved.singularRow;
   s.modes2.set(units.mode);
   s.iterations += solved.iterations;
   converged = converged && solved.converged;
-  addStageFlows(balance, stage, x2, series, gamma);
+  addStageFlows(balance, stage, modes, x2, series, gamma);
   if (!converged) s.unconvergedSteps++;
-  const residual = closeStep(balance, x0, x2, problem.stepS);
+  advanceModes(modes, chainSlotA, chainSlotB, x1, x2);
+  const residual = closeStep(balance, x0, x2, modes, problem.stepS);
   if (!(residual <= s.worstBalance)) {
     if (Number.isNaN(residual)) return firstWithout(s, x2);
     s.worstBalance = residual;
   }
   if (recorder) {
-    addStage(recorder, stage, x2, gamma);
-    endStep(recorder, stage, x2, k);
+    addStage(recorder, stage, modes, x2, series, gamma, false);
+    endStep(recorder, stage, modes, x2);
   }
   return -1;
 }
 
-/** First slot without a number. */
+/** First row without a number. */
 function firstWithout(s: Stepper, x: Float64Array): number {
-  for (let i = 0; i < s.layout.slotCount; i++) {
-    if (!Number.isFinite(x[i]) && s.layout.nodeOfSlot[i] >= 0) return i;
-  }
+  const { rows, nodeOfSlot } = s.layout;
+  for (let i = 0; i < rows; i++) if (!Number.isFinite(x[i]) && nodeOfSlot[i] >= 0) return i;
   return 0;
 }

@@ -192,10 +192,10 @@ export function settleModes(units: UnitsState): void {
   }
 }
 
-/** Writes the rows whose branch changed into the matrix; gives the first such row, or `none`. */
-export function assembleUnits(units: UnitsState, a: Float64Array, none: number): number {
+/** Writes the rows whose branch changed into the matrix and marks them; true where there is any. */
+export function assembleUnits(units: UnitsState, a: Float64Array, dirty: Uint8Array): boolean {
   const { mode, inMatrix, lineInMatrix, sensorStart, sensorEntry, sensorWeight, own, row } = units;
-  let first = none;
+  let any = false;
   for (let u = 0; u < units.count; u++) {
     const m = mode[u];
     const slope = m === line ? lineSlopeW(units, u) : 0;
@@ -209,9 +209,10 @@ export function assembleUnits(units: UnitsState, a: Float64Array, none: number):
     a[own[u]] = holds ? 0 : 1;
     inMatrix[u] = m;
     lineInMatrix[u] = slope;
-    first = Math.min(first, row[u]);
+    dirty[row[u]] = 1;
+    any = true;
   }
-  return first;
+  return any;
 }
 
 /** Right-hand side of the units' rows; `x` holds the boundaries' temperatures, `firstFixed` onward. */
