@@ -2,7 +2,8 @@ import react from '@vitejs/plugin-react';
 import { defineConfig } from 'vitest/config';
 
 // Three kinds of test: plain ones in Node, components in a stand-in for the browser's page, and the
-// built app in a real browser. The last runs after the others, one file at a time.
+// built app in a real browser, which runs after the others, one file at a time. Last of all comes the
+// table of checks, which reads what the others recorded.
 export default defineConfig({
   test: {
     projects: [
@@ -10,7 +11,7 @@ export default defineConfig({
         test: {
           name: 'unit',
           include: ['test/**/*.test.ts'],
-          exclude: ['test/**/*.e2e.test.ts'],
+          exclude: ['test/**/*.e2e.test.ts', 'test/**/*.last.test.ts'],
           environment: 'node',
           testTimeout: 30_000,
           benchmark: { include: [] },
@@ -33,6 +34,15 @@ export default defineConfig({
           sequence: { groupOrder: 1 },
           testTimeout: 60_000,
           hookTimeout: 60_000,
+          benchmark: { include: [] },
+        },
+      },
+      {
+        test: {
+          name: 'checks',
+          include: ['test/**/*.last.test.ts'],
+          environment: 'node',
+          sequence: { groupOrder: 2 },
           benchmark: { include: [] },
         },
       },

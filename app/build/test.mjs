@@ -27,7 +27,7 @@ const vitest = spawnSync(
     '--reporter=default',
     '--reporter=json',
     `--outputFile.json=${report}`,
-    ...(browser ? [] : ['--project=unit', '--project=ui']),
+    ...(browser ? [] : ['--project=unit', '--project=ui', '--project=checks']),
     ...process.argv.slice(2),
   ],
   {
