@@ -44,8 +44,11 @@ export interface AirFlow {
 }
 
 export function airSite(steps: WeatherSteps, clock: StepClock, properties: AirProperties): AirSite {
-  const middle = (ends: Float64Array) =>
-    Float64Array.from({ length: steps.count }, (_, k) => (ends[k] + ends[k + 1]) / 2);
+  const middle = (ends: Float64Array) => {
+    const values = new Float64Array(steps.count);
+    for (let k = 0; k < values.length; k++) values[k] = (ends[k] + ends[k + 1]) / 2;
+    return values;
+  };
   const outdoorC = middle(steps.dryBulbC);
   return {
     properties,

@@ -2,7 +2,8 @@
 //
 // Flows given as volumes are taken at the density of dry air of 20 °C at the site's height. Flows that
 // pressure drives (leaks, openings) take the density of the air that passes, at its own temperature.
-import type { Building, Room } from '../building/index.ts';
+import type { Building, Leakage, Room } from '../building/index.ts';
+import { leakageCoefficient } from '../physics/index.ts';
 import { feelsRoom, openShare } from './air-control.ts';
 import { roomLeaks } from './air-leaks.ts';
 import { openingFlow, openingMethods } from './air-openings.ts';
@@ -30,6 +31,9 @@ export interface OutdoorAirTask {
   readonly builder: NetworkBuilder;
   /** Streams for the vapour balance, added to. */
   readonly flows: AirFlow[];
+  /** Sentences for the report, added to. */
+  readonly assumptions: string[];
+  readonly cautions: string[];
 }
 
 const volumeMethod = 'air flow times volumetric heat capacity of dry air at the site';
@@ -49,6 +53,11 @@ export function addOutdoorAir(task: OutdoorAirTask): void {
     addLaw(task, 'ventilation', name, openingMethods[opening.kind], flow, { kind: opening.kind });
   }
   addLeaks(task);
+  const controls = [...room.airOpenings, ...room.ventilation].map((one) => one.control);
+  if (controls.some((control) => control?.outdoorHumidityBelow !== undefined))
+    task.assumptions.push(
+      `Air of ${room.name}: the limit by outdoor humidity stands in for rain, which the weather table does not hold.`,
+    );
 }
 
 type Meter = 'infiltration' | 'ventilation';
@@ -191,6 +200,24 @@ function addVentilation(task: OutdoorAirTask, one: Room['ventilation'][number]):
   );
 }
 
+/** Under-pressure at which open flues may spill; limits of 4 Pa are common practice, no source. */
+const spillagePa = 4;
+
+/** Pressure that fans and paths alone hold in the room, without wind and stack, at its lowest [Pa]. */
+function fanPressurePa(
+  room: Room,
+  leakage: Leakage,
+  site: AirSite,
+  paths: Float64Array,
+  own: Float64Array,
+): number {
+  let least = 0; // kg/s
+  for (let k = 0; k < paths.length; k++) least = Math.min(least, paths[k] + own[k]);
+  const coefficient = leakageCoefficient(leakage.n50PerH, room.volumeM3, leakage.exponent);
+  const flowM3PerS = -least / site.properties.densityKgPerM3;
+  return flowM3PerS === 0 ? 0 : -((flowM3PerS / coefficient) ** (1 / leakage.exponent));
+}
+
 /**
  * Leaks take up whatever fans and paths leave over. What paths bring in too much leaves by a directed
  * link; what they take out is made up by one, and that air is taken off the leaks' own.
@@ -208,6 +235,14 @@ function addLeaks(task: OutdoorAirTask): void {
     site,
     paths.map((path, k) => path + own[k]),
   );
+  task.assumptions.push(
+    `Leaks of ${room.name}: ${leakage.n50PerH} air changes at 50 Pa, shared out over its outdoor surfaces by area; wind pressure as on a low building standing free.`,
+  );
+  const fans = fanPressurePa(room, leakage, site, paths, own);
+  if (fans < -spillagePa)
+    task.cautions.push(
+      `Combustion air: fans draw ${(-fans).toFixed(0)} Pa below outdoors in ${room.name}. An open-flued or open fire there can spill its fumes into the room; have the air supply designed by a licensed practitioner.`,
+    );
   const heat = site.properties.specificHeatJPerKgK;
   const link = (values: Float64Array, inward: boolean) => {
     if (values.every((value) => value === 0)) return;

@@ -60,7 +60,16 @@ export function coldestMonthOf(monthC: readonly number[]): number {
   return month < 0.5 ? month + 12 : month;
 }
 
-export function groundClimate(steps: WeatherSteps, clock: StepClock): GroundClimate {
+/** The same, computed when first asked for: most projects never ask. */
+export function groundClimateOnce(steps: WeatherSteps, clock: StepClock): () => GroundClimate {
+  let known: GroundClimate | null = null;
+  return () => {
+    known ??= groundClimate(steps, clock);
+    return known;
+  };
+}
+
+function groundClimate(steps: WeatherSteps, clock: StepClock): GroundClimate {
   const middles = Float64Array.from(
     { length: clock.count },
     (_, k) => (steps.dryBulbC[k] + steps.dryBulbC[k + 1]) / 2,

@@ -29,12 +29,13 @@ import type { NetworkBuilder, Provenance } from './network-builder.ts';
 import { scheduledValues } from './schedule-values.ts';
 import type { StepClock } from './step-clock.ts';
 
-interface GroundTask {
+/** What a surface on the ground is built from and into. */
+export interface GroundTask {
   readonly building: Building;
   readonly room: Room;
   readonly fineness: Fineness;
   readonly clock: StepClock;
-  readonly climate: GroundClimate;
+  readonly climate: () => GroundClimate;
   readonly builder: NetworkBuilder;
   /** Sentences for the report, added to. */
   readonly assumptions: string[];
@@ -61,8 +62,8 @@ function addColumn(
   contact: Extract<GroundContact, { kind: 'soil-column' }>,
   outerNode: number,
 ): void {
-  const { clock, climate, builder } = task;
-  const deepC = contact.deepTemperatureC ?? climate.outside.meanC;
+  const { clock, builder } = task;
+  const deepC = contact.deepTemperatureC ?? task.climate().outside.meanC;
   addSoil(task, surface, outerNode, {
     layers: [soilLayer(contact, contact.depthM)],
     beyond: builder.series(
@@ -85,7 +86,8 @@ function addStandard(
   contact: StandardContact,
   outerNode: number,
 ): void {
-  const { building, room, clock, climate, builder } = task;
+  const { building, room, clock, builder } = task;
+  const climate = task.climate();
   const areaM2 = netAreaM2(surface);
   const resistance = constructionResistance(building, surface);
   const part = groundPart(
@@ -152,7 +154,8 @@ export function virtualMonths(
 
 /** Inside temperature that the monthly flow rests on, with a sentence where it had to be assumed. */
 function insideMonths(task: GroundTask, contact: StandardContact): number[] {
-  const { building, room, clock, climate, assumptions } = task;
+  const { building, room, clock, assumptions } = task;
+  const climate = task.climate();
   const given = contact.insideC;
   if (given !== undefined)
     return typeof given === 'number' ? new Array<number>(12).fill(given) : [...given];

@@ -189,6 +189,8 @@ describe('leaks in the run', () => {
     );
     const { infiltration } = findings.rooms[0].balanceKWh;
     expect(lossW(infiltration) / (strong * density * heat * 20)).toBeCloseTo(1, 6);
+    // Power law: 0.3 m³/s through 1/h at 50 Pa of 200 m³ needs 50·(0.3·3600/200)^(1/0.65) = 669 Pa.
+    expect(findings.cautions.join(' ')).toContain('fans draw 669 Pa below outdoors in room');
   });
 
   test('a path into a leaky room leaves through its leaks, one out of it is made up there', () => {
@@ -242,6 +244,11 @@ describe('open windows', () => {
         ventilationW(single()),
         3,
       );
+  });
+
+  test('a limit by humidity says that it stands in for rain', () => {
+    const { findings } = runYear(plainProject([single({ outdoorHumidityBelow: 0.8 })]), cool);
+    expect(findings.assumptions.join(' ')).toContain('stands in for rain');
   });
 
   test('cross openings take wind by the difference of pressure on their sides', () => {
