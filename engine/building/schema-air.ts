@@ -37,7 +37,7 @@ const place = {
 /** Leaks of a room by the power law of a pressure test, driven by wind and stack. */
 export const leakageSchema = z.strictObject({
   /** Air changes at 50 Pa, shared out over the room's outdoor surfaces by area. */
-  n50PerH: between(0, 100),
+  n50PerH: positive(100),
   exponent: between(0.5, 1).default(0.65),
   /** Multiplies the wind at the building: 1 free, less behind trees and houses. */
   windShare: share.default(1),
