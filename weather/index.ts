@@ -6,6 +6,12 @@ export * from './calendar.ts';
 export * from './climate/design-conditions.ts';
 export * from './climate/summary.ts';
 export * from './fault.ts';
+export * from './map/detect.ts';
+export { type ColumnGuess, limitsOf } from './map/detect-columns.ts';
+export * from './map/mapping.ts';
+export * from './map/parse-mapping.ts';
+export * from './map/read-mapped.ts';
+export { type Unit, unitsOf } from './map/units.ts';
 export {
   plainWeatherForm,
   writePlainWeather,

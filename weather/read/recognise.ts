@@ -1,6 +1,6 @@
 // Which form a file has, told by its first lines: never by its name.
 import Papa from 'papaparse';
-import type { FaultList } from './fault-list.ts';
+import { FaultList } from './fault-list.ts';
 import { type Form, type Head, headingKey } from './form.ts';
 import { plain } from './form-plain.ts';
 import { psm } from './form-psm.ts';
@@ -51,6 +51,11 @@ export function recognise(
       'Choose a weather table of one of these forms, or write a plain table as the manual describes.',
     );
   return null;
+}
+
+/** Name of the form whose headings stand in these first lines, or null. */
+export function knownForm(lines: readonly string[]): string | null {
+  return recognise('', lines.slice(0, linesSearched), new FaultList(''))?.form.name ?? null;
 }
 
 /** Why these first characters are not a text, or `null`. */
