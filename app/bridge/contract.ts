@@ -36,6 +36,9 @@ const weatherFile = z.strictObject({
 });
 
 const nothing = z.strictObject({});
+/** Names a window or a draft; becomes part of a file's name. */
+const mark = z.string().regex(/^[a-z0-9-]{8,64}$/);
+const sha256 = z.string().regex(/^[0-9a-f]{64}$/);
 
 export const contract = {
   /** Who answers, and what it can do. */
@@ -81,7 +84,7 @@ export const contract = {
       path: path.nullable(),
       name: z.string().max(255),
       text,
-      replaces: z.union([z.literal('anything'), z.string().regex(/^[0-9a-f]{64}$/)]).nullable(),
+      replaces: z.union([z.literal('anything'), sha256]).nullable(),
     }),
     out: z.strictObject({ path, name: z.string(), sha256: z.string() }).nullable(),
   },
@@ -89,6 +92,61 @@ export const contract = {
   recentFiles: {
     in: nothing,
     out: z.array(z.strictObject({ path, name: z.string(), usedAt: z.number() })),
+  },
+  /**
+   * To be called every few seconds: this window is there, with this file open. Answers what the file
+   * holds now (null when it is gone or there is none) and how many other windows have it open.
+   */
+  watchProject: {
+    in: z.strictObject({ window: mark, path: path.nullable() }),
+    out: z.strictObject({ sha256: z.string().nullable(), others: z.number().int() }),
+  },
+  /** What stood in a file before each of the last saves, latest first. */
+  listVersions: {
+    in: z.strictObject({ path }),
+    out: z.array(z.strictObject({ id: z.string(), savedAt: z.number(), bytes: z.number().int() })),
+  },
+  readVersion: {
+    in: z.strictObject({ path, id: z.string() }),
+    out: z.strictObject({ text }),
+  },
+  /** Writes unsaved work aside, whole; `replaces` as for a save. */
+  keepDraft: {
+    in: z.strictObject({
+      id: mark,
+      window: mark,
+      path: path.nullable(),
+      name: z.string().max(255),
+      weatherPath: path.nullable(),
+      replaces: sha256.nullable(),
+      text,
+    }),
+    out: nothing,
+  },
+  dropDraft: { in: z.strictObject({ id: mark }), out: nothing },
+  /** Unsaved work of this window and of windows that are gone, latest first. */
+  listDrafts: {
+    in: z.strictObject({ window: mark }),
+    out: z.array(
+      z.strictObject({
+        id: z.string(),
+        path: path.nullable(),
+        name: z.string(),
+        changedAt: z.number(),
+      }),
+    ),
+  },
+  readDraft: {
+    in: z.strictObject({ id: mark }),
+    out: z
+      .strictObject({
+        path: path.nullable(),
+        name: z.string(),
+        weatherPath: path.nullable(),
+        replaces: sha256.nullable(),
+        text,
+      })
+      .nullable(),
   },
 } as const;
 

@@ -6,10 +6,12 @@ import { type Fault, faultText, type Parsed } from '../../weather/index.ts';
 import { BridgeError, type Handlers } from '../bridge/index.ts';
 import { readText, type TextFile, writeFileWhole } from '../disk/index.ts';
 import { allowed } from './allowed.ts';
+import { keepingHandlers } from './keeping.ts';
 import { listFiles } from './list-files.ts';
 import { recentList } from './recent.ts';
 import { sha256Of } from './sha256.ts';
 import type { Dialogs, Shell } from './shell.ts';
+import { fileVersions } from './versions.ts';
 
 const projectEnding = '.inglenook.json';
 const projectRead = { expected: 'a project file', limitBytes: 32_000_000 };
@@ -36,6 +38,7 @@ export function makeHandlers(shell: Shell, now: () => number = Date.now): Handle
   const { folders, demoFolder, dialogs } = shell;
   const paths = allowed(folders, [demoFolder]);
   const recent = recentList(shell.dataFolder, now);
+  const versions = fileVersions(shell.dataFolder, now);
   const named = shell.startWith ? paths.picked(shell.startWith) : Promise.resolve();
 
   const outside = (path: string) =>
@@ -69,6 +72,19 @@ export function makeHandlers(shell: Shell, now: () => number = Date.now): Handle
   }
 
   return {
+    ...keepingHandlers({
+      dataFolder: shell.dataFolder,
+      versions,
+      now,
+      mayRead: async (path) => {
+        await named;
+        if (!(await paths.mayRead(path))) throw outside(path);
+      },
+      pickedBefore: async (path) => {
+        if (dialogs) await paths.picked(path); // the browser's window keeps to its folders
+      },
+    }),
+
     appInfo: async () => ({
       version: shell.version,
       shell: shell.kind,
@@ -133,6 +149,7 @@ export function makeHandlers(shell: Shell, now: () => number = Date.now): Handle
           );
         }
       }
+      await versions.keep(path);
       need(await writeFileWhole(path, text));
       await recent.used(path);
       return { path, name: basename(path), sha256: sha256Of(text) };

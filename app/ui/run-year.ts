@@ -9,13 +9,17 @@ export function workerRun(): RunYear {
     worker ??= new Worker(new URL('../run/worker.browser.ts', import.meta.url), { type: 'module' });
     return worker;
   };
-  return async ({ projectText, projectFile, weather, site }, { onProgress, signal }) => {
+  return async (
+    { projectText, projectFile, weather, site, stepMinutes },
+    { onProgress, signal },
+  ) => {
     const request = {
       projectText,
       projectFile,
       weatherText: weather.text,
       weatherFile: weather.file,
       site,
+      ...(stepMinutes === undefined ? {} : { stepMinutes }),
     };
     try {
       const simulation = await runSimulation(start(), request, {

@@ -3,7 +3,7 @@
 import { StrictMode } from 'react';
 import { createRoot } from 'react-dom/client';
 import type { Desk } from './desk/index.ts';
-import { createApp, type RunYear } from './state/index.ts';
+import { type App, createApp, isDirty, type RunYear } from './state/index.ts';
 import { Window } from './window.tsx';
 import './look/index.css';
 
@@ -27,8 +27,9 @@ export function startWindow(desk: Desk, runYear: RunYear) {
       () => app.set({ notice: 'The list of recent projects could not be read.' }),
     );
   readRecent();
+  keepWatch(app);
   app.store.subscribe((now, before) => {
-    if (now.project !== before.project) readRecent();
+    if (now.project?.file !== before.project?.file) readRecent();
   });
   createRoot(place).render(
     <StrictMode>
@@ -36,4 +37,39 @@ export function startWindow(desk: Desk, runYear: RunYear) {
     </StrictMode>,
   );
   return app;
+}
+
+const everyMs = 4000;
+
+/** Tells the host what is open here, and hears of other windows and programs on the same file. */
+function keepWatch(app: App) {
+  const { files, store } = app;
+  window.addEventListener('beforeunload', (event) => {
+    if (isDirty(store.getState())) event.preventDefault();
+  });
+  if (!files) return;
+  const look = async () => {
+    const { document } = store.getState();
+    try {
+      const seen = await files.watch(document?.path ?? null);
+      const now = store.getState().document;
+      if (now?.path !== (document?.path ?? null) && now) return;
+      const isChanged =
+        now !== null && now.path !== null && now.sha256 !== null && seen.sha256 !== now.sha256;
+      if (store.getState().others !== seen.others) app.set({ others: seen.others });
+      if (store.getState().isChangedOnDisk !== isChanged) app.set({ isChangedOnDisk: isChanged });
+    } catch {
+      // the host is gone: saving will say so
+    }
+  };
+  const readDrafts = () =>
+    void files.drafts().then(
+      (drafts) => app.set({ drafts }),
+      () => {},
+    );
+  void look().then(readDrafts);
+  setInterval(() => void look(), everyMs);
+  store.subscribe((now, before) => {
+    if (now.document?.path !== before.document?.path) void look();
+  });
 }

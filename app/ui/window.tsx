@@ -3,13 +3,18 @@
 import { useEffect } from 'react';
 import { commands, isPressed, mayActWhileTyping } from './commands/index.ts';
 import { sortFiles } from './desk/index.ts';
+import { AboutDialog } from './parts/about-dialog.tsx';
 import { CommandField } from './parts/command-field.tsx';
 import { AnswerStrip, FindingsColumn } from './parts/findings-column.tsx';
+import { GuardDialog } from './parts/guard-dialog.tsx';
+import { SaveAsDialog } from './parts/save-as-dialog.tsx';
 import { ShortcutList } from './parts/shortcut-list.tsx';
 import { SideBar } from './parts/side-bar.tsx';
 import { SiteDialog } from './parts/site-dialog.tsx';
 import { StatusBar } from './parts/status-bar.tsx';
+import { StepsDialog } from './parts/steps-dialog.tsx';
 import { TitleBar } from './parts/title-bar.tsx';
+import { VersionsDialog } from './parts/versions-dialog.tsx';
 import { Sheet } from './screens/sheet.tsx';
 import { type App, AppContext, type Scheme, useAppState } from './state/index.ts';
 
@@ -56,7 +61,7 @@ function useKeys(app: App) {
         return moveToRegion(event.shiftKey ? -1 : 1);
       }
       if (event.key === 'Escape' && state.isDrawerOpen) return app.set({ isDrawerOpen: false });
-      if (state.dialog) return;
+      if (state.dialog || state.guarded) return;
       const command = commands.find(
         ({ keys, isEnabled }) => isPressed(keys, event) && isEnabled(state),
       );
@@ -92,6 +97,7 @@ function Frame({ app }: { app: App }) {
   const dialog = useAppState((state) => state.dialog);
   const simulation = useAppState((state) => state.simulation);
   const screen = useAppState((state) => state.screen);
+  const isGuarded = useAppState((state) => state.guarded !== null);
   useScheme(scheme);
   useKeys(app);
   useDrops(app);
@@ -110,6 +116,11 @@ function Frame({ app }: { app: App }) {
       {dialog === 'commands' && <CommandField />}
       {dialog === 'shortcuts' && <ShortcutList />}
       {dialog === 'site' && <SiteDialog />}
+      {dialog === 'save-as' && <SaveAsDialog />}
+      {dialog === 'steps' && <StepsDialog />}
+      {dialog === 'versions' && <VersionsDialog />}
+      {dialog === 'about' && <AboutDialog />}
+      {isGuarded && <GuardDialog />}
     </div>
   );
 }

@@ -87,6 +87,18 @@ async function start(): Promise<void> {
     },
   });
   answerCalls(window);
+  // The page holds its closing up while there is unsaved work.
+  window.webContents.on('will-prevent-unload', (event) => {
+    const choice = dialog.showMessageBoxSync(window, {
+      type: 'warning',
+      message: 'There are changes that no file holds.',
+      detail: 'They stay among the unsaved work that is offered at the next start.',
+      buttons: ['Stay here', 'Close all the same'],
+      defaultId: 0,
+      cancelId: 0,
+    });
+    if (choice === 1) event.preventDefault(); // in Electron this lets the window go
+  });
   window.once('ready-to-show', () => window.show());
   await window.loadURL(`${pageOrigin}/`);
 }

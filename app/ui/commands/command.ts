@@ -2,11 +2,13 @@
 
 import type { App, AppState } from '../state/index.ts';
 
-export type MenuName = 'File' | 'View' | 'Run' | 'Help';
+export type MenuName = 'File' | 'Edit' | 'View' | 'Run' | 'Help';
 
 export interface Command {
   readonly id: string;
   readonly label: string;
+  /** The label with what it acts on, where that changes: `Undo Brick 103 to 215 mm`. */
+  readonly labelNow?: (state: AppState) => string;
   readonly menu: MenuName;
   /** As written beside the label, for example `Ctrl+O`; empty where there is none. */
   readonly keys: string;

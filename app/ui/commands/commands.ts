@@ -1,5 +1,6 @@
-import { type AppState, asksForSite, type Scheme } from '../state/index.ts';
+import { type AppState, asksForSite, type Scheme, type Screen } from '../state/index.ts';
 import type { Command } from './command.ts';
+import { documentCommands, editCommands } from './document-commands.ts';
 
 const always = () => true;
 const hasProject = (state: AppState) => state.project !== null;
@@ -16,7 +17,18 @@ const scheme = (name: Scheme, label: string): Command => ({
   run: (app) => app.set({ scheme: name }),
 });
 
+const show = (screen: Screen, label: string, keys: string): Command => ({
+  id: `show-${screen}`,
+  label,
+  menu: 'View',
+  keys,
+  isOn: (state) => state.screen === screen,
+  isEnabled: hasProject,
+  run: (app) => app.go(screen),
+});
+
 export const commands: readonly Command[] = [
+  ...documentCommands,
   {
     id: 'open-demo',
     label: 'Open the example house',
@@ -57,6 +69,7 @@ export const commands: readonly Command[] = [
     isEnabled: hasProject,
     run: (app) => app.closeProject(),
   },
+  ...editCommands,
   {
     id: 'show-site',
     label: 'Site and weather',
@@ -84,6 +97,12 @@ export const commands: readonly Command[] = [
     isEnabled: hasResult,
     run: (app) => app.go('room'),
   },
+  show('plan', 'Plan', 'Alt+4'),
+  show('rooms', 'Rooms', 'Alt+5'),
+  show('fabric', 'Fabric', 'Alt+6'),
+  show('use', 'Use', 'Alt+7'),
+  show('plant', 'Plant', 'Alt+8'),
+  show('methods', 'Methods', 'Alt+9'),
   {
     id: 'show-findings',
     label: 'Findings beside the sheet',
@@ -113,6 +132,14 @@ export const commands: readonly Command[] = [
     run: (app) => app.cancel(),
   },
   {
+    id: 'take-as-base',
+    label: 'Set the findings against the house as it is now',
+    menu: 'Run',
+    keys: '',
+    isEnabled: hasResult,
+    run: (app) => app.takeAsBase(),
+  },
+  {
     id: 'find',
     label: 'Find or do…',
     menu: 'Help',
@@ -127,5 +154,13 @@ export const commands: readonly Command[] = [
     keys: '?',
     isEnabled: always,
     run: (app) => app.set({ dialog: 'shortcuts' }),
+  },
+  {
+    id: 'about',
+    label: 'About and cautions',
+    menu: 'Help',
+    keys: '',
+    isEnabled: always,
+    run: (app) => app.set({ dialog: 'about' }),
   },
 ];

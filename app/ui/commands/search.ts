@@ -30,7 +30,7 @@ export function allHits(state: AppState): Hit[] {
       (command): Hit => ({
         id: command.id,
         kind: command.id.startsWith('show-') ? 'Screen' : 'Do',
-        label: command.label,
+        label: command.labelNow?.(state) ?? command.label,
         keys: command.keys,
         command,
         roomId: null,

@@ -96,3 +96,13 @@ export function stampText(stamp: string): string {
   const name = monthNames[Number(month) - 1];
   return name ? `${Number(day)} ${name}, ${time}` : stamp;
 }
+
+/** A moment of this machine's clock: `3 Dec, 10:42`. */
+export function clockText(milliseconds: number): string {
+  return new Date(milliseconds).toLocaleString('en-GB', {
+    day: 'numeric',
+    month: 'short',
+    hour: '2-digit',
+    minute: '2-digit',
+  });
+}

@@ -2,6 +2,7 @@ export {
   axisDay,
   type Calendar,
   clock,
+  clockText,
   dayText,
   hourSpan,
   hourText,

@@ -4,7 +4,7 @@ import { type KeyboardEvent, useEffect, useRef, useState } from 'react';
 import { commands, type MenuName } from '../commands/index.ts';
 import { useApp, useAppState } from '../state/index.ts';
 
-const menus: readonly MenuName[] = ['File', 'View', 'Run', 'Help'];
+const menus: readonly MenuName[] = ['File', 'Edit', 'View', 'Run', 'Help'];
 
 export function MenuBar() {
   const [open, setOpen] = useState<MenuName | null>(null);
@@ -142,7 +142,7 @@ function MenuList({ name, onDone, onLeave }: MenuListProps) {
               <span className="tick" aria-hidden="true">
                 {isOn && <Tick />}
               </span>
-              <span>{command.label}</span>
+              <span>{command.labelNow?.(state) ?? command.label}</span>
               {command.keys && <kbd>{command.keys}</kbd>}
             </button>
           );

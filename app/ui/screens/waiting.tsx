@@ -10,6 +10,12 @@ import { type Screen, useAppState } from '../state/index.ts';
 const titles: Readonly<Record<Screen, string>> = {
   welcome: 'Welcome',
   site: 'Site and weather',
+  plan: 'Plan',
+  rooms: 'Rooms',
+  fabric: 'Fabric',
+  use: 'Use',
+  plant: 'Plant',
+  methods: 'Methods',
   house: 'Whole house',
   room: 'Room by room',
 };

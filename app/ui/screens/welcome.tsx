@@ -1,7 +1,8 @@
 // The first sheet: what the tool answers, four ways to begin, and a section of a house that names
 // the ways heat comes and goes in the words used everywhere else.
 
-import { useApp } from '../state/index.ts';
+import { clockText } from '../format/index.ts';
+import { useApp, useAppState } from '../state/index.ts';
 import { HouseSection } from './house-section.tsx';
 
 const steps = [
@@ -14,7 +15,14 @@ const steps = [
 
 export function Welcome() {
   const app = useApp();
+  const drafts = useAppState((state) => state.drafts);
   const ways = [
+    {
+      title: 'Draw a new house',
+      text: 'Starts with one room, ready to run with any weather table.',
+      keys: 'Alt N',
+      act: () => app.newProject(),
+    },
     {
       title: 'Open a project',
       text: 'Any file that ends in .inglenook.json, with its weather table.',
@@ -30,6 +38,20 @@ export function Welcome() {
   ];
   return (
     <div className="welcome">
+      {drafts.map(({ id, name, path, changedAt }) => (
+        <section key={id} className="quiet-note" aria-label="Unsaved work">
+          <span>
+            <b>Unsaved work.</b> {name}
+            {path === null ? ', never saved' : ''}, last changed {clockText(changedAt)}.
+          </span>
+          <button type="button" className="button" onClick={() => void app.openDraft(id)}>
+            Open it
+          </button>
+          <button type="button" className="button" onClick={() => void app.dropDraft(id)}>
+            Drop it
+          </button>
+        </section>
+      ))}
       <div className="welcome-top">
         <div className="welcome-words">
           <h1>

@@ -2,36 +2,27 @@
 // store and call these; nothing else changes the store.
 
 import { createStore, type StoreApi } from 'zustand/vanilla';
-import type { Fault, Site } from '../../../weather/index.ts';
-import type { Desk, OpenedFile, OpenedProject, RecentProject } from '../desk/index.ts';
-import type { Simulation } from '../simulation.ts';
+import type { Site } from '../../../weather/index.ts';
+import { emptyProject, projectText } from '../../project/index.ts';
+import type { Desk, DeskFiles, OpenedFile, OpenedProject, RecentProject } from '../desk/index.ts';
 import { type AppState, firstState, type Screen } from './app-state.ts';
+import { adoptDraft, type Documents, fileName, makeDocuments, openDocument } from './documents.ts';
+import { makeRuns, type RunYear, unnamed } from './runs.ts';
 
-export interface RunInput {
-  readonly projectText: string;
-  readonly projectFile: string;
-  readonly weather: OpenedFile;
-  /** Stands in for the site where the table has none. */
-  readonly site: Site | null;
-}
-
-export interface Watch {
-  readonly onProgress: (share: number, stage: string) => void;
-  readonly signal: AbortSignal;
-}
-
-export type RunOutcome =
-  | { readonly ok: true; readonly simulation: Simulation }
-  | { readonly ok: false; readonly faults: readonly Fault[] };
-
-/** Runs the year off the window's thread; rejects when the signal is aborted or something broke. */
-export type RunYear = (input: RunInput, watch: Watch) => Promise<RunOutcome>;
-
-export interface App {
+export interface App extends Documents {
+  /** Absent in a plain page. */
+  readonly files: DeskFiles | undefined;
   readonly store: StoreApi<AppState>;
   set(change: Partial<AppState>): void;
   go(screen: Screen, roomId?: string): void;
+  /** Shows a screen with one of its things chosen. */
+  choose(screen: Screen, id: string): void;
+  newProject(): void;
   openDemo(): Promise<void>;
+  openDraft(id: string): Promise<void>;
+  dropDraft(id: string): Promise<void>;
+  /** Sets the findings against the document as it is now. */
+  takeAsBase(): void;
   openProject(): Promise<void>;
   openRecent(project: RecentProject): Promise<void>;
   openWeather(): Promise<void>;
@@ -42,55 +33,35 @@ export interface App {
   cancel(): void;
 }
 
-const unnamed = 'The machine gave no reason.';
-
-export function createApp(desk: Desk, runYear: RunYear, start: Partial<AppState> = {}): App {
+export function createApp(
+  desk: Desk,
+  runYear: RunYear,
+  start: Partial<AppState> = {},
+  now: () => number = Date.now,
+): App {
   const store = createStore<AppState>(() => ({ ...firstState, ...start }));
   const { getState: get, setState: set } = store;
-  let running: AbortController | null = null;
+  const runs = makeRuns(store, runYear);
+  const documents = makeDocuments(store, runs, desk.files, now);
+  const { guard } = documents;
 
-  async function run() {
-    const { project, weather, site } = get();
-    if (!project || !weather) return;
-    running?.abort();
-    const mine = new AbortController();
-    running = mine;
-    set({ run: { kind: 'running', share: 0, stage: 'reading' } });
-    const isCurrent = () => running === mine;
-    try {
-      const outcome = await runYear(
-        { projectText: project.text, projectFile: project.file, weather, site },
-        {
-          signal: mine.signal,
-          onProgress: (share, stage) => {
-            if (isCurrent()) set({ run: { kind: 'running', share, stage } });
-          },
-        },
-      );
-      if (!isCurrent()) return;
-      if (!outcome.ok) return set({ run: { kind: 'refused', faults: outcome.faults } });
-      const rooms = outcome.simulation.rooms;
-      const { roomId, screen } = get();
-      const isKnown = rooms.some((room) => room.id === roomId);
-      set({
-        simulation: outcome.simulation,
-        isStale: false,
-        run: { kind: 'idle' },
-        notice: null,
-        roomId: isKnown ? roomId : (rooms[0]?.id ?? null),
-        screen: screen === 'welcome' ? 'house' : screen,
-      });
-    } catch (error) {
-      if (!isCurrent()) return;
-      if (mine.signal.aborted) return set({ run: { kind: 'cancelled' } });
-      const reason = error instanceof Error ? error.message : unnamed;
-      set({ run: { kind: 'broken', reason } });
-    }
-  }
-
-  function show(opened: OpenedProject) {
+  function show(opened: OpenedProject, screen: Screen = 'house') {
+    runs.forget();
+    const document = openDocument(opened.text, opened);
     set({
       project: { file: opened.file, text: opened.text },
+      document,
+      base: document && {
+        name: 'as opened',
+        document: document.story.now.document,
+        coarse: null,
+        full: null,
+      },
+      answered: { coarse: null, full: null },
+      others: 0,
+      isChangedOnDisk: false,
+      guarded: null,
+      chosen: {},
       weather: opened.weather,
       site: null,
       simulation: null,
@@ -98,12 +69,14 @@ export function createApp(desk: Desk, runYear: RunYear, start: Partial<AppState>
       mark: null,
       weeks: {},
       roomId: null,
-      screen: 'house',
+      screen,
       run: { kind: 'idle' },
       notice: opened.trouble ?? null,
     });
-    void run();
+    void runs.run();
   }
+
+  const guarded = (opened: OpenedProject) => guard(`opening ${opened.file}`, () => show(opened));
 
   /** Opening can fail on the machine's side; the open document is kept. */
   async function ask<T>(question: () => Promise<T | null>, use: (answer: T) => void, none = '') {
@@ -119,13 +92,66 @@ export function createApp(desk: Desk, runYear: RunYear, start: Partial<AppState>
   function holdWeather(weather: OpenedFile) {
     const { project, simulation } = get();
     set({ weather, site: null, isStale: simulation !== null, mark: null });
-    if (project) void run();
-    else set({ notice: `${weather.file} is held ready. Open a project to use it.` });
+    if (project) {
+      if (!nameWeather(weather)) void runs.run();
+    } else set({ notice: `${weather.file} is held ready. Open a project to use it.` });
+  }
+
+  /** The project names the table it is run with. */
+  function nameWeather({ relativePath, file, sha256 }: OpenedFile): boolean {
+    const before = get().document?.story;
+    documents.edit({
+      name: `Weather table ${file}`,
+      changes: [
+        { path: 'weather.file', value: relativePath ?? file },
+        { path: 'weather.sha256', value: sha256 },
+      ],
+    });
+    return get().document?.story !== before;
   }
 
   return {
+    ...documents,
+    files: desk.files,
     store,
     set,
+    choose(screen, id) {
+      set({ screen, isDrawerOpen: false, chosen: { ...get().chosen, [screen]: id } });
+    },
+    newProject() {
+      guard('starting a new project', () => {
+        const name = 'New house';
+        const text = projectText(emptyProject(name));
+        show({ file: fileName(name), text, weather: get().weather }, 'plan');
+        const { document } = get();
+        if (document) set({ document: { ...document, saved: null } });
+      });
+    },
+    takeAsBase() {
+      const { document, answered } = get();
+      if (!document) return;
+      set({
+        base: { name: document.story.now.name, document: document.story.now.document, ...answered },
+      });
+    },
+    async openDraft(id) {
+      const draft = await desk.files?.openDraft(id).catch(() => null);
+      if (!draft) return set({ notice: 'That draft is no longer there.' });
+      show({ ...draft, ...(draft.replaces === null ? {} : { sha256: draft.replaces }) });
+      const { document } = get();
+      if (document) {
+        adoptDraft(document, id);
+        set({ document: { ...document, saved: null } });
+      }
+      set({
+        drafts: get().drafts.filter((one) => one.id !== id),
+        notice: 'Opened as it was before it was lost. Save it to keep it.',
+      });
+    },
+    async dropDraft(id) {
+      await desk.files?.dropDraft(id);
+      set({ drafts: get().drafts.filter((draft) => draft.id !== id) });
+    },
     go(screen, roomId) {
       set({
         screen,
@@ -135,28 +161,29 @@ export function createApp(desk: Desk, runYear: RunYear, start: Partial<AppState>
       });
     },
     openDemo: () =>
-      ask(desk.demo, show, 'The example did not come with this copy. Open a project.'),
+      ask(desk.demo, guarded, 'The example did not come with this copy. Open a project.'),
     openProject: () =>
       ask(desk.openProject, (opened) =>
-        show({ ...opened, weather: opened.weather ?? get().weather }),
+        guarded({ ...opened, weather: opened.weather ?? get().weather }),
       ),
-    openRecent: (project) => ask(() => desk.openRecent(project), show),
+    openRecent: (project) => ask(() => desk.openRecent(project), guarded),
     openWeather: () => ask(desk.openWeather, holdWeather),
     take({ project, weather }) {
-      if (project) show({ ...project, weather: weather ?? get().weather });
+      if (project) guarded({ ...project, weather: weather ?? get().weather });
       else if (weather) holdWeather(weather);
     },
     giveSite(site) {
       set({ site, dialog: null, isStale: get().simulation !== null });
-      void run();
+      void runs.run();
     },
     closeProject() {
-      running?.abort();
-      running = null;
-      const { scheme, recent } = get();
-      set({ ...firstState, scheme, recent });
+      guard('closing the project', () => {
+        runs.forget();
+        const { scheme, recent, drafts } = get();
+        set({ ...firstState, scheme, recent, drafts });
+      });
     },
-    runYear: run,
-    cancel: () => running?.abort(),
+    runYear: runs.run,
+    cancel: runs.cancel,
   };
 }

@@ -1,21 +1,19 @@
-export {
-  type App,
-  createApp,
-  type RunInput,
-  type RunOutcome,
-  type RunYear,
-  type Watch,
-} from './app.ts';
+export { type App, createApp } from './app.ts';
 export type {
+  Answered,
   AppState,
+  Base,
   Dialog,
   FigureKey,
+  Guarded,
   HourMark,
+  OpenDocument,
   RunState,
   Scheme,
   Screen,
 } from './app-state.ts';
-export { asksForSite } from './app-state.ts';
+export { asksForSite, isDirty } from './app-state.ts';
+export type { RunInput, RunOutcome, RunYear, Watch } from './runs.ts';
 export {
   AppContext,
   type RoomResult,

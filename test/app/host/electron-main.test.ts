@@ -14,6 +14,8 @@ const seen = vi.hoisted(() => ({
   loaded: [] as string[],
   call: null as ((event: unknown, name: unknown, input: unknown) => Promise<unknown>) | null,
   onApp: new Map<string, (...args: never[]) => unknown>(),
+  onWindow: new Map<string, (...args: never[]) => unknown>(),
+  choice: 0,
   permission: null as ((...args: never[]) => unknown) | null,
   permissionCheck: null as ((...args: never[]) => unknown) | null,
   ready: null as (() => void) | null,
@@ -54,12 +56,17 @@ vi.mock('electron', () => ({
       seen.call = answer;
     },
   },
-  dialog: {},
+  dialog: { showMessageBoxSync: () => seen.choice },
   BrowserWindow: class {
     constructor(options: { webPreferences: Record<string, unknown> }) {
       seen.order.push('window');
       seen.windows.push(options);
     }
+    readonly webContents = {
+      on: (name: string, hear: Listener) => {
+        seen.onWindow.set(name, hear);
+      },
+    };
     once() {}
     show() {}
     async loadURL(url: string) {
@@ -134,6 +141,17 @@ describe('navigation', () => {
     handlers.get(name)?.({ preventDefault });
     expect(preventDefault).toHaveBeenCalledOnce();
   });
+});
+
+test('a window with unsaved work closes only when the user says so', () => {
+  const preventDefault = vi.fn();
+  const ask = () =>
+    seen.onWindow.get('will-prevent-unload')?.(...([{ preventDefault }] as never[]));
+  ask(); // stay here
+  expect(preventDefault).not.toHaveBeenCalled();
+  seen.choice = 1;
+  ask(); // Electron lets the window go when the event is prevented
+  expect(preventDefault).toHaveBeenCalledOnce();
 });
 
 describe('calls', () => {

@@ -51,7 +51,10 @@ test('a project without a weather table waits for one and is not run', async () 
   await app.openProject();
   expect(run).not.toHaveBeenCalled();
   await app.openWeather();
-  expect(run).toHaveBeenCalledOnce();
+  // A coarse answer comes first, then the one at the engine's own step.
+  await vi.waitFor(() =>
+    expect(run.mock.calls.map(([{ stepMinutes }]) => stepMinutes)).toEqual([60, undefined]),
+  );
 });
 
 test('a weather table that was read first is used by the project opened after it', async () => {
@@ -104,6 +107,8 @@ test('a newer run takes the place of the older one, whose answer is not used', a
   calls[0]?.watch.onProgress(0.9, 'late');
   expect(app.store.getState().run).toMatchObject({ share: 0 });
   calls[1]?.end({ ok: true, simulation });
+  await vi.waitFor(() => expect(calls).toHaveLength(3)); // the full step follows the coarse one
+  calls[2]?.end({ ok: true, simulation });
   await vi.waitFor(() => expect(app.store.getState().run.kind).toBe('idle'));
 });
 
