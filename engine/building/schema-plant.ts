@@ -19,7 +19,10 @@ const radiatorSchema = z.strictObject({
   radiantShare: share.default(0.3),
 });
 
-/** Pipes or wires in the middle of a layer of one of the room's surfaces. */
+/**
+ * Pipes or wires in the middle of a layer of one of the room's surfaces. Ideal control through so slow a
+ * layer jumps between nothing and full power; a `bandK` of about 1 K runs it as real controls do.
+ */
 const embeddedSchema = z.strictObject({
   kind: z.literal('embedded'),
   surface: id,

@@ -1,11 +1,15 @@
 // Where a result could hurt someone, the words that go with it.
+import type { SupplyFindings } from './final-energy.ts';
 import type { RoomFindings } from './simulation.ts';
 
 const frostC = 5; // pipes in the coldest corner are colder than the air; common practice, no source
 const heatStressC = 32; // operative; common practice, no source
 
 /** One sentence a danger, naming the rooms; screens and reports show all of them. */
-export function cautions(rooms: readonly RoomFindings[]): string[] {
+export function cautions(
+  rooms: readonly RoomFindings[],
+  supplies: readonly SupplyFindings[] = [],
+): string[] {
   const named = (list: readonly RoomFindings[]) => list.map((room) => room.name).join(', ');
   const list: string[] = [];
   const cold = rooms.filter((room) => room.airTemperatureC.min < frostC);
@@ -22,6 +26,11 @@ export function cautions(rooms: readonly RoomFindings[]): string[] {
   if (short.length > 0)
     list.push(
       `Heating too small: at full power the set-point is missed in ${named(short)}. Sizes follow local codes and a licensed practitioner's design, most of all for vulnerable people.`,
+    );
+  const small = supplies.filter((one) => one.hoursShort > 0);
+  if (small.length > 0)
+    list.push(
+      `Supply too small: the rooms together take more than ${small.map((one) => `"${one.id}" can give in ${one.hoursShort} h`).join(', ')}. The temperatures shown assume that it could; size it by local codes and a licensed practitioner's design.`,
     );
   const damp = rooms.filter(isDamp);
   if (damp.length > 0)

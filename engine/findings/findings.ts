@@ -103,7 +103,7 @@ export function simulationOf(
       ...(energy?.assumptions ?? []),
       ...(moisture ? [moistureAssumption] : []),
     ],
-    cautions: [...assembly.cautions, ...cautions(figures)],
+    cautions: [...assembly.cautions, ...cautions(figures, energy?.supplies)],
     quality: {
       relativeBalanceResidual: Math.max(quality.relativeBalanceResidual, worstRoom),
       unconvergedSteps: quality.unconvergedSteps,

@@ -84,8 +84,10 @@ describe('a boiler', () => {
   });
 
   test('too small is counted short every hour, and by how much', () => {
-    const [supply] = findings(served(boiler(steadyW / 2))).supplies ?? [];
+    const found = findings(served(boiler(steadyW / 2)));
+    const [supply] = found.supplies ?? [];
     expect(supply.hoursShort).toBe(8760);
+    expect(found.cautions.join()).toContain('"boiler" can give in 8760 h');
     expect(supply.shortKWh).toBeCloseTo(supply.outputKWh / 2, 1);
   });
 
