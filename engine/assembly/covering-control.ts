@@ -6,8 +6,9 @@ import { scheduleValues } from './schedule-values.ts';
 import type { FaceSun } from './shading.ts';
 import type { StepClock } from './step-clock.ts';
 
-/** Shares are kept in steps of a twentieth, so that the light of like states is followed once. */
+/** Shares are kept in steps, so that the light of like states is followed once; finer by temperature. */
 const grain = 20;
+const grainByRoom = 100;
 
 /** What one covering's control gives. */
 export interface Drawn {
@@ -39,6 +40,7 @@ export function drawnShare(
   const perHour = 3600 / clock.stepS;
   const share = new Float64Array(clock.count);
   const allowed = roomAboveC === undefined ? null : new Float64Array(clock.count / perHour);
+  const steps = allowed ? grainByRoom : grain;
   let held = false;
   for (let k = 0; k < clock.count; k++) {
     let s = planned ? Math.min(1, Math.max(0, planned[k])) : 1;
@@ -54,7 +56,7 @@ export function drawnShare(
       allowed[hour] += s / perHour;
       s *= byRoom ? byRoom[hour] : 0;
     }
-    share[k] = Math.round(s * grain) / grain;
+    share[k] = Math.round(s * steps) / steps;
   }
   return { share, allowedHours: allowed };
 }

@@ -63,8 +63,18 @@ export function standardTransmittance(glazing: PaneGlazing): GlazingTransmittanc
   });
 }
 
+/** Explains each glazing once, however many windows hold it. */
+export function explainedOnce(): (glazing: Glazing) => GlazingExplained {
+  const known = new Map<Glazing, GlazingExplained>();
+  return (glazing) => {
+    const found = known.get(glazing) ?? explainGlazing(glazing);
+    known.set(glazing, found);
+    return found;
+  };
+}
+
 /** U-value of either kind of glazing. */
-export function glazingUValueWPerM2K(glazing: Glazing): number {
+function glazingUValueWPerM2K(glazing: Glazing): number {
   return glazing.kind === 'simple'
     ? glazing.uValueWPerM2K
     : standardTransmittance(glazing).uValueWPerM2K;

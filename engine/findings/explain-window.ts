@@ -22,7 +22,12 @@ import {
   simpleGlazing,
   windowUValueWPerM2K,
 } from '../physics/index.ts';
-import { explainGlazing, glazingUValueWPerM2K, standardTransmittance } from './explain-glazing.ts';
+import {
+  explainedOnce,
+  explainGlazing,
+  type GlazingExplained,
+  standardTransmittance,
+} from './explain-glazing.ts';
 
 export interface WindowExplained {
   readonly room: string;
@@ -45,9 +50,12 @@ export interface WindowExplained {
 }
 
 export function explainWindows(building: Building): WindowExplained[] {
+  const explain = explainedOnce();
   return building.rooms.flatMap((room) =>
     room.surfaces.flatMap((surface) =>
-      surface.openings.map((opening) => explainWindow(building, room.id, surface.id, opening)),
+      surface.openings.map((opening) =>
+        explainWindow(building, room.id, surface.id, opening, explain),
+      ),
     ),
   );
 }
@@ -57,10 +65,11 @@ export function explainWindow(
   room: string,
   surface: string,
   opening: Opening,
+  explain: (glazing: Glazing) => GlazingExplained = explainGlazing,
 ): WindowExplained {
   const glazing = glazingOf(building, opening.glazing);
   const size = windowSize(opening);
-  const glassUValueWPerM2K = glazingUValueWPerM2K(glazing);
+  const { uValueWPerM2K: glassUValueWPerM2K } = explain(glazing);
   const { frame, areaM2, blind, nightInsulation } = opening;
   const uValueWPerM2K = frame
     ? windowUValueWPerM2K(
@@ -86,7 +95,7 @@ export function explainWindow(
     glassUValueWPerM2K,
     uValueWPerM2K,
     gValue:
-      (size.glassAreaM2 * explainGlazing(glazing).gValue + size.frameAreaM2 * ofFrame) / areaM2,
+      (size.glassAreaM2 * explain(glazing).gValue + size.frameAreaM2 * ofFrame) / areaM2,
     blindGValue: blind ? shadedGValue(glazing, coveringOf(building, blind.covering), blind) : null,
     insulatedUValueWPerM2K:
       shutter?.kind === 'shutter'

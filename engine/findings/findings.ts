@@ -12,6 +12,7 @@ import { personGain } from '../physics/index.ts';
 import { cautions } from './cautions.ts';
 import { runningMeanHoursC } from './comfort-adaptive.ts';
 import { bandFindings } from './comfort-band.ts';
+import { explainedOnce } from './explain-glazing.ts';
 import { finalEnergy } from './final-energy.ts';
 import { hourName, monthOfHour } from './hour-name.ts';
 import { moistureAssumption, moistureOf } from './moisture.ts';
@@ -83,6 +84,7 @@ export function simulationOf(
     ...figures.map(({ balanceKWh }) => Math.abs(balanceKWh.residual) / throughput(balanceKWh)),
   );
   const { quality } = run;
+  const explain = explainedOnce();
   const findings: Findings = {
     project: assembly.building.name,
     weather: {
@@ -95,7 +97,7 @@ export function simulationOf(
     rooms: figures,
     building,
     windows: assembly.rooms.flatMap((parts, r) =>
-      windowFindings(assembly, parts, rooms[r], outdoorC, (m) => meterHours(run, m)),
+      windowFindings(assembly, parts, rooms[r], outdoorC, (m) => meterHours(run, m), explain),
     ),
     ...(energy ? { supplies: energy.supplies, currency: assembly.building.energy.currency } : {}),
     assumptions: [

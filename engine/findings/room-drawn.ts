@@ -9,22 +9,26 @@ interface Pass {
   readonly share: Float64Array;
   /** What the room asked for, unbounded, less what was drawn. */
   readonly miss: Float64Array;
+  /** Change of the miss with the share, as far as it is known. */
+  readonly slope: Float64Array;
 }
 
 export interface DrawnPasses {
   readonly next: ReadonlyMap<string, Float64Array>;
   readonly last: ReadonlyMap<string, Pass>;
-  /** Mean distance of the share in the run from the one its temperatures ask for, 0 to 1. */
+  /** Mean distance of the shares in the run from those of the next, 0 to 1, where they may be drawn. */
   readonly gapShare: number;
 }
 
 /** Settled where the mean distance is this small; given up after so many runs. */
-export const settledShare = 0.02;
+export const settledShare = 0.01;
 export const mostPasses = 8;
 
-/** Change of the miss with the share: a first guess, and its bounds (a blind may cool by many bands). */
+/** A first guess of the slope, and its bounds: a blind may cool a glass room by many bands. */
 const firstSlope = -3;
-const [steepest, flattest] = [-30, -1];
+const [steepest, flattest] = [-40, -1];
+/** Smaller moves of the share tell nothing of the slope. */
+const leastMove = 0.03;
 
 /**
  * The rule: of what its other conditions allow, a covering is drawn over (T_air − limit)/band, 0 to 1,
@@ -43,34 +47,31 @@ export function nextDrawn(assembly: Assembly, run: Run, before: DrawnPasses | nu
       const share = before?.next.get(key) ?? new Float64Array(run.records);
       const old = before?.last.get(key);
       const miss = new Float64Array(run.records);
+      const slope = old ? old.slope.slice() : new Float64Array(run.records).fill(firstSlope);
       const moved = new Float64Array(run.records);
       for (let h = 0; h < run.records; h++) {
         const airC = run.meanC[h * recordNodes.length + column];
-        const asked = (airC - roomAboveC) / bandK;
-        miss[h] = asked - share[h];
-        const secant = old ? (miss[h] - old.miss[h]) / (share[h] - old.share[h]) : firstSlope;
-        const slope = Number.isFinite(secant)
-          ? Math.min(flattest, Math.max(steepest, secant))
-          : firstSlope;
-        moved[h] = bounded(share[h] - miss[h] / slope);
+        miss[h] = (airC - roomAboveC) / bandK - share[h];
+        const step = old ? share[h] - old.share[h] : 0;
+        if (old && Math.abs(step) >= leastMove)
+          slope[h] = Math.min(flattest, Math.max(steepest, (miss[h] - old.miss[h]) / step));
+        moved[h] = Math.min(1, Math.max(0, share[h] - miss[h] / slope[h]));
         if (allowedHours[h] === 0) continue;
-        gap += Math.abs(bounded(asked) - share[h]);
+        gap += Math.abs(moved[h] - share[h]);
         hours++;
       }
       next.set(key, moved);
-      last.set(key, { share, miss });
+      last.set(key, { share, miss, slope });
     }
   }
   return { next, last, gapShare: hours > 0 ? gap / hours : 0 };
 }
 
-const bounded = (share: number) => Math.min(1, Math.max(0, share));
-
 /** What was assumed, as a sentence. */
 export function drawnText(passes: number, gapShare: number): string {
   const state =
     gapShare <= settledShare
-      ? `agree to ${(100 * gapShare).toFixed(1)} % of the glass`
-      : `still differ by ${(100 * gapShare).toFixed(1)} % of the glass: take the shading by room temperature as approximate`;
-  return `Coverings by room temperature were found in ${passes} runs of the year; what was drawn and what the hourly temperatures ask for ${state} in the mean.`;
+      ? `another run would move them by ${(100 * gapShare).toFixed(1)} % of the glass in the mean`
+      : `another run would still move them by ${(100 * gapShare).toFixed(1)} % of the glass in the mean: take the shading by room temperature as approximate`;
+  return `Coverings by room temperature follow the mean air temperature of each hour, found in ${passes} runs of the year; ${state}.`;
 }

@@ -1,5 +1,7 @@
 // What each window did in the run, beside its values under standard conditions.
 import type { Assembly, RoomParts } from '../assembly/index.ts';
+import type { Glazing } from '../building/index.ts';
+import type { GlazingExplained } from './explain-glazing.ts';
 import { explainWindow } from './explain-window.ts';
 import type { RoomHours, WindowFindings } from './simulation.ts';
 
@@ -19,12 +21,19 @@ export function windowFindings(
   hours: RoomHours,
   outdoorC: Float64Array,
   meterW: (meter: number) => Float64Array,
+  explain: (glazing: Glazing) => GlazingExplained,
 ): WindowFindings[] {
   return parts.windows.map((window): WindowFindings => {
     const surface = parts.room.surfaces.find((one) => one.id === window.surface);
     const opening = surface?.openings.find((one) => one.id === window.opening);
     if (!opening) throw new Error(`no opening ${window.opening} in ${parts.room.id}`);
-    const standard = explainWindow(assembly.building, parts.room.id, window.surface, opening);
+    const standard = explainWindow(
+      assembly.building,
+      parts.room.id,
+      window.surface,
+      opening,
+      explain,
+    );
     const intoW = meterW(window.meter);
     let lostWh = 0;
     let kelvinHours = 0;
