@@ -2,8 +2,13 @@
 export * from './assembly/index.ts';
 export {
   type Building,
+  libraryConstructions,
+  libraryGlazings,
+  libraryMaterials,
+  libraryUsages,
   parseProject,
   parseProjectDocument,
+  projectConstruction,
   projectSchema,
 } from './building/index.ts';
 export * from './findings/index.ts';

@@ -65,7 +65,7 @@ function changeMakingParents(
     // A list where the path goes on with an entry, else an object.
     const empty: Json = path.startsWith(`${changed.at}[`) ? [] : {};
     const made = changed.found === 'nothing' && changeAt(document, changed.at, empty);
-    if (!made || !made.ok)
+    if (made === false || !made.ok)
       return `${path}: ${changed.at} holds ${changed.found}, not ${changed.expected}`;
     document = made.document;
   }

@@ -11,6 +11,13 @@ export {
   scheduleOf,
   surfaceOf,
 } from './find.ts';
+export {
+  libraryConstructions,
+  libraryGlazings,
+  libraryMaterials,
+  libraryUsages,
+  projectConstruction,
+} from './library/index.ts';
 export { parseProject, parseProjectDocument } from './parse-project.ts';
 export type {
   AirControl,

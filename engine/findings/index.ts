@@ -7,6 +7,12 @@ export type { VoteFindings } from './comfort-votes.ts';
 export { type BuildingExplained, explainBuilding, type Unlikely } from './explain-building.ts';
 export type { ConstructionExplained, ConstructionUse } from './explain-construction.ts';
 export type { GlazingAt, GlazingExplained } from './explain-glazing.ts';
+export {
+  type ConstructionSection,
+  constructionSection,
+  type SectionClimate,
+  type SectionLayer,
+} from './explain-section.ts';
 export type { WindowExplained } from './explain-window.ts';
 export type { SpaceEnergy, SupplyFindings } from './final-energy.ts';
 export { simulationOf } from './findings.ts';

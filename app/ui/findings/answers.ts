@@ -9,8 +9,23 @@ export interface Answer {
   /** At the right of the name, in small: the same per area, or where. */
   readonly aside: string;
   readonly quantity: Quantity;
+  /** The figure as a number, in the unit shown. */
+  readonly value: number;
+  readonly decimals: number;
   readonly note: string;
   readonly isMain: boolean;
+  /** A level (a temperature) has no share of its base. */
+  readonly kind: 'amount' | 'level';
+}
+
+/** A quantity with the number behind it. */
+function shown(
+  quantityOf: Quantity,
+  value: number,
+  decimals: number,
+  kind: Answer['kind'] = 'amount',
+) {
+  return { quantity: quantityOf, value, decimals, kind };
 }
 
 /** How many percent of `whole`, as words; empty where there is no whole. */
@@ -29,7 +44,13 @@ const nameWhere = (
 /** `rooms` are the rooms of a house, to say where an extreme lies; empty for a single room. */
 export function findAnswers(totals: Totals, rooms: readonly RoomTotals[]): Answer[] {
   const isHouse = rooms.length > 0;
-  const power = isHouse ? quantity.housePowerW : quantity.roomPowerW;
+  const power = (watts: number) =>
+    isHouse
+      ? shown(quantity.housePowerW(watts), watts / 1000, 1)
+      : shown(quantity.roomPowerW(watts), watts / 1000, 2);
+  const energy = (kWh: number) => shown(quantity.energyKWh(kWh), kWh, 0);
+  const hours = (count: number) => shown(quantity.hours(count), count, 0);
+  const level = (celsius: number) => shown(quantity.temperatureC(celsius), celsius, 1, 'level');
   const perArea = (kWh: number) => `${figure(kWh / totals.floorAreaM2)} kWh/m²`;
   const range = totals.operativeTemperatureC;
   const highestIn = nameWhere(rooms, (room) => room.operativeTemperatureC.max, range.max);
@@ -40,7 +61,7 @@ export function findAnswers(totals: Totals, rooms: readonly RoomTotals[]): Answe
       key: 'heating',
       name: 'Heating in a year',
       aside: perArea(totals.heatingKWh),
-      quantity: quantity.energyKWh(totals.heatingKWh),
+      ...energy(totals.heatingKWh),
       note: '',
       isMain: true,
     },
@@ -49,7 +70,7 @@ export function findAnswers(totals: Totals, rooms: readonly RoomTotals[]): Answe
       name: isHouse ? 'Peak heating, whole house' : 'Peak heating',
       aside:
         totals.peakHeatingW > 0 ? `${figure(totals.peakHeatingW / totals.floorAreaM2)} W/m²` : '',
-      quantity: power(totals.peakHeatingW),
+      ...power(totals.peakHeatingW),
       note: totals.peakHeatingW > 0 ? stampText(totals.peakHeatingAt) : 'no heat was called for',
       isMain: true,
     },
@@ -57,7 +78,7 @@ export function findAnswers(totals: Totals, rooms: readonly RoomTotals[]): Answe
       key: 'below',
       name: 'Hours below the band',
       aside: shareOf(totals.hoursBelowBand, totals.occupiedHours),
-      quantity: quantity.hours(isOccupied ? totals.hoursBelowBand : NaN),
+      ...hours(isOccupied ? totals.hoursBelowBand : NaN),
       note: isOccupied ? `${figure(totals.degreeHoursBelow)} K·h in all` : '',
       isMain: true,
     },
@@ -65,7 +86,7 @@ export function findAnswers(totals: Totals, rooms: readonly RoomTotals[]): Answe
       key: 'above',
       name: 'Hours above the band',
       aside: shareOf(totals.hoursAboveBand, totals.occupiedHours),
-      quantity: quantity.hours(isOccupied ? totals.hoursAboveBand : NaN),
+      ...hours(isOccupied ? totals.hoursAboveBand : NaN),
       note: isOccupied ? `${figure(totals.degreeHoursAbove)} K·h in all` : '',
       isMain: true,
     },
@@ -73,7 +94,7 @@ export function findAnswers(totals: Totals, rooms: readonly RoomTotals[]): Answe
       key: 'highest',
       name: `Highest${highestIn}`,
       aside: stampText(range.maxAt),
-      quantity: quantity.temperatureC(range.max),
+      ...level(range.max),
       note: '',
       isMain: false,
     },
@@ -81,7 +102,7 @@ export function findAnswers(totals: Totals, rooms: readonly RoomTotals[]): Answe
       key: 'lowest',
       name: `Lowest${lowestIn}`,
       aside: stampText(range.minAt),
-      quantity: quantity.temperatureC(range.min),
+      ...level(range.min),
       note: '',
       isMain: false,
     },
@@ -94,7 +115,7 @@ export function findAnswers(totals: Totals, rooms: readonly RoomTotals[]): Answe
         key: 'cooling',
         name: 'Cooling in a year',
         aside: perArea(totals.coolingKWh),
-        quantity: quantity.energyKWh(totals.coolingKWh),
+        ...energy(totals.coolingKWh),
         note: '',
         isMain: false,
       },
@@ -102,7 +123,7 @@ export function findAnswers(totals: Totals, rooms: readonly RoomTotals[]): Answe
         key: 'peak-cooling',
         name: 'Peak cooling',
         aside: stampText(totals.peakCoolingAt),
-        quantity: power(totals.peakCoolingW),
+        ...power(totals.peakCoolingW),
         note: '',
         isMain: false,
       },

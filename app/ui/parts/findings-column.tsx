@@ -1,9 +1,17 @@
 // The findings at the right: always the same order, of the house or of the room that is shown.
 
-import { type Answer, type Caution, findAnswers, findCautions } from '../findings/index.ts';
+import {
+  type Against,
+  type Answer,
+  type Caution,
+  findAnswers,
+  findCautions,
+  setAgainst,
+} from '../findings/index.ts';
 import { plain, quantity } from '../format/index.ts';
 import type { RoomTotals, Simulation } from '../simulation.ts';
 import { roomResult, useApp, useAppState } from '../state/index.ts';
+import { AnswerRow } from './answer-row.tsx';
 import { useAfter } from './run-progress.tsx';
 
 export function FindingsColumn({ simulation }: { simulation: Simulation }) {
@@ -16,8 +24,15 @@ export function FindingsColumn({ simulation }: { simulation: Simulation }) {
   const isWaiting = useAfter(run.kind === 'running', 150);
   const room = roomResult(simulation, roomId);
   const isRoom = screen === 'room' && room !== null;
-  const { building, rooms } = simulation.findings;
-  const answers = isRoom ? findAnswers(room.totals, []) : findAnswers(building, rooms);
+  const { rooms } = simulation.findings;
+  const answersOf = (one: Simulation) => {
+    const its = isRoom ? roomResult(one, roomId) : null;
+    return its
+      ? findAnswers(its.totals, [])
+      : findAnswers(one.findings.building, one.findings.rooms);
+  };
+  const answers = answersOf(simulation);
+  const against = useAgainst(answersOf);
   const concerned = isRoom ? [room.totals] : rooms;
   const cautions = findCautions(concerned);
 
@@ -46,9 +61,7 @@ export function FindingsColumn({ simulation }: { simulation: Simulation }) {
           Close
         </button>
       </div>
-      <p className="quiet">
-        {isStale ? 'From before the last change' : `${simulation.findings.weather.place}, one year`}
-      </p>
+      <p className="quiet">{isStale ? 'From before the last change' : <FindingsLine />}</p>
       <p className="unseen" role="status">
         {run.kind === 'running'
           ? 'Running the year'
@@ -56,7 +69,7 @@ export function FindingsColumn({ simulation }: { simulation: Simulation }) {
       </p>
       <div className={isStale ? 'is-stale' : ''}>
         {answers.map((answer) => (
-          <AnswerRow key={answer.key} answer={answer} />
+          <AnswerRow key={answer.key} answer={answer} against={against.get(answer.key)} />
         ))}
       </div>
       <Cautions cautions={cautions} onOpen={isRoom ? null : (id) => app.go('room', id)} />
@@ -65,20 +78,24 @@ export function FindingsColumn({ simulation }: { simulation: Simulation }) {
   );
 }
 
-function AnswerRow({ answer }: { answer: Answer }) {
-  return (
-    <div className={answer.isMain ? 'answer' : 'answer is-small'}>
-      <div className="answer-name">
-        <span>{answer.name}</span>
-        <span className="note">{answer.aside}</span>
-      </div>
-      <div className="answer-value">
-        <b className="figure">{answer.quantity.figure}</b>
-        <span>{answer.quantity.unit}</span>
-        {answer.note && <span className="note answer-note">{answer.note}</span>}
-      </div>
-    </div>
-  );
+/** What the figures are of, and what they are set against. */
+function FindingsLine() {
+  const place = useAppState((state) => state.simulation?.findings.weather.place ?? '');
+  const base = useAppState((state) => state.base);
+  const now = useAppState((state) => state.document?.story.now);
+  const isCoarse = useAppState((state) => state.answered.full === null);
+  const step = isCoarse ? '; hour steps, finer ones follow' : '';
+  if (!base || !now || base.document === now.document) return `${place}, one year${step}`;
+  return `${now.name}, against the house ${base.name}${step}`;
+}
+
+/** Nothing to compare with while the house is its own base. */
+function useAgainst(answersOf: (simulation: Simulation) => readonly Answer[]) {
+  const base = useAppState((state) => state.base);
+  const now = useAppState((state) => state.answered);
+  const document = useAppState((state) => state.document?.story.now.document);
+  const isSame = !base || base.document === document;
+  return isSame ? new Map<string, Against>() : setAgainst({ now, base }, answersOf);
 }
 
 interface CautionsProps {
