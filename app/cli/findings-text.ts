@@ -78,6 +78,25 @@ function balanceTable(rows: readonly Row[]): string {
   );
 }
 
+/** Windows beside their values under standard conditions. */
+function windowTable(windows: NonNullable<Findings['windows']>): string {
+  return table(
+    [
+      { head: 'Window', of: (one) => `${one.room}/${one.surface}/${one.opening}` },
+      { head: 'Area', unit: 'm²', digits: 2, of: (one) => one.areaM2 },
+      { head: 'U_w', unit: 'W/(m²·K)', digits: 2, of: (one) => one.uValueWPerM2K },
+      { head: 'U seen', unit: 'W/(m²·K)', digits: 2, of: (one) => one.seenUValueWPerM2K ?? NaN },
+      { head: 'g', unit: '–', digits: 2, of: (one) => one.gValue },
+      { head: 'Sun on glass', unit: 'kWh', of: (one) => one.incidentKWh },
+      { head: 'Let in', unit: 'kWh', of: (one) => one.transmittedKWh },
+      { head: 'Share', unit: '–', digits: 2, of: (one) => one.transmittedShare ?? NaN },
+      { head: 'Blind', unit: 'h', of: (one) => one.blindHours ?? NaN },
+      { head: 'Insulated', unit: 'h', of: (one) => one.nightInsulationHours ?? NaN },
+    ],
+    windows,
+  );
+}
+
 function list(title: string, items: readonly string[]): readonly string[] {
   if (items.length === 0) return [];
   return [[title, ...items.map((item) => wrap(`- ${item}`))].join('\n')];
@@ -98,6 +117,11 @@ Weather: ${weather.place} (${weather.form}), ${weather.hours} hours. Step: ${fin
     energyTable(rows),
     comfortTable(rows),
     `Heat into each room over the year; losses are negative\n${balanceTable(rows)}`,
+    ...(findings.windows?.length
+      ? [
+          `Windows: U and g by standard (ISO 10077-1, EN 673, EN 410), and as the run saw them: U in dark heated hours, sun over the year\n${windowTable(findings.windows)}`,
+        ]
+      : []),
     ...list('Cautions', [...findings.cautions, standingCaution]),
     ...list('Assumptions', [...findings.assumptions, ...assumed.map((note) => note.text)]),
     ...list(

@@ -94,8 +94,7 @@ export function explainWindow(
     glazing: glazing.id,
     glassUValueWPerM2K,
     uValueWPerM2K,
-    gValue:
-      (size.glassAreaM2 * explain(glazing).gValue + size.frameAreaM2 * ofFrame) / areaM2,
+    gValue: (size.glassAreaM2 * explain(glazing).gValue + size.frameAreaM2 * ofFrame) / areaM2,
     blindGValue: blind ? shadedGValue(glazing, coveringOf(building, blind.covering), blind) : null,
     insulatedUValueWPerM2K:
       shutter?.kind === 'shutter'

@@ -260,6 +260,21 @@ describe('night insulation', () => {
     }
   });
 
+  // Nothing here stores heat but the air: closed half of the time, the loss is the mean of both.
+  test('closed every other hour it loses the mean of open and closed, in weather that stands still', () => {
+    const profiles = [
+      { kind: 'hours', id: 'odd', values: Array.from({ length: 24 }, (_, h) => h % 2) },
+    ];
+    const schedules = [{ id: 'odd', profile: 'odd' }];
+    const seen = (control: Json | null) => {
+      const night = { nightInsulation: { covering: 'shutter', position: 'outside', control } };
+      const one = { glass: simple, ...(control ? { opening: night } : {}), profiles, schedules };
+      return windowOf(run(one, cold)).seenUValueWPerM2K ?? 0;
+    };
+    const [open, closed, every] = [seen(null), seen({}), seen({ schedule: 'odd' })];
+    expect(every / ((open + closed) / 2)).toBeCloseTo(1, 2);
+  });
+
   test('by default it is closed at night: half of the year’s hours', () => {
     const night = { nightInsulation: { covering: 'shutter', position: 'outside' } };
     const window = windowOf(run({ opening: night }));
