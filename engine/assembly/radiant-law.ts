@@ -40,3 +40,34 @@ export function blendedEmissivity(
   if (drawn === undefined || Math.abs(bare - covered) < 0.005) return bare;
   return drawn.map((s) => bare + s * (covered - bare));
 }
+
+/**
+ * A node at the radiosity of a face whose emissivity changes: the enclosure sees it as black, and the
+ * surface's own resistance (1 − ε)/(ε·A) lies between it and the face.
+ */
+export function addRadiantFace(
+  face: number,
+  areaM2: number,
+  emissivity: Float64Array,
+  about: { readonly name: string; readonly room: string; readonly surface: string },
+  builder: NetworkBuilder,
+): number {
+  const told = {
+    ...about,
+    name: `${about.name}/radiosity`,
+    what: 'long-wave radiation that leaves the face',
+    method: 'surface resistance (1 − ε)/(ε·A) of a grey face',
+    inputs: { areaM2 },
+  };
+  const node = builder.node(told, 0);
+  builder.functionLink(
+    face,
+    node,
+    (a, b, step) => {
+      const e = Math.min(0.999, emissivity[step]);
+      return (areaM2 * e * greyConductanceWPerM2K(a, b)) / (1 - e);
+    },
+    told,
+  );
+  return node;
+}

@@ -14,7 +14,7 @@ import { type Drawn, drawnShare } from './covering-control.ts';
 import { addOuterExchange, faceHeightM } from './fabric.ts';
 import type { FlowRef, NetworkBuilder } from './network-builder.ts';
 import type { Outdoors } from './outdoors.ts';
-import { blendedEmissivity, greyConductanceWPerM2K } from './radiant-law.ts';
+import { addRadiantFace, blendedEmissivity } from './radiant-law.ts';
 import type { Face } from './room-parts.ts';
 import { type FaceSun, shadedOpening } from './shading.ts';
 import { addSimpleWindow } from './simple-window.ts';
@@ -283,35 +283,4 @@ export function addWindow(task: WindowTask, surface: Surface, opening: Opening):
       );
     return list;
   }
-}
-
-/**
- * A node at the radiosity of a face whose emissivity changes: the enclosure sees it as black, and the
- * surface's own resistance (1 − ε)/(ε·A) lies between it and the face.
- */
-function addRadiantFace(
-  face: number,
-  areaM2: number,
-  emissivity: Float64Array,
-  about: { readonly name: string; readonly room: string; readonly surface: string },
-  builder: NetworkBuilder,
-): number {
-  const told = {
-    ...about,
-    name: `${about.name}/radiosity`,
-    what: 'long-wave radiation that leaves the face',
-    method: 'surface resistance (1 − ε)/(ε·A) of a grey face',
-    inputs: { areaM2 },
-  };
-  const node = builder.node(told, 0);
-  builder.functionLink(
-    face,
-    node,
-    (a, b, step) => {
-      const e = Math.min(0.999, emissivity[step]);
-      return (areaM2 * e * greyConductanceWPerM2K(a, b)) / (1 - e);
-    },
-    told,
-  );
-  return node;
 }
