@@ -1,6 +1,6 @@
 // A worker thread that does the runs of studies: it is given the weather once, when it starts, and one
 // run after another from then on.
-import { type Job, type JobResult, runJob } from '../../engine/index.ts';
+import { emptyMemory, type Job, type JobResult, runJob } from '../../engine/index.ts';
 import type { WeatherYear } from '../../weather/index.ts';
 import type { Work } from './serve.ts';
 
@@ -18,7 +18,8 @@ export function jobThreadData(workerData: unknown): JobThreadData | null {
 
 export function jobWork({ weathers }: JobThreadData): (job: Job) => Work<JobResult> {
   const byName = new Map(weathers);
+  const memory = emptyMemory();
   return function* work(job) {
-    return { ok: true, value: yield* runJob(job, byName) };
+    return { ok: true, value: yield* runJob(job, byName, memory) };
   };
 }

@@ -1,6 +1,6 @@
 // Heating off at an hour: how the rooms cool, how fast the network forgets, and what it takes to be
 // back in time.
-import { assemble, type RoomParts } from '../assembly/index.ts';
+import { assemble, type Memory, type RoomParts } from '../assembly/index.ts';
 import { type Problem, type Run, steadyState, timeConstantsS } from '../network/index.ts';
 import type { Progress } from '../simulate.ts';
 import { heldProblem } from './held.ts';
@@ -59,17 +59,20 @@ const mostEigenNodes = 600;
 export function* cooldownJob(
   job: CooldownJob,
   weathers: Weathers,
+  memory: Memory,
 ): Generator<Progress, CooldownResult> {
   const table = weatherOf(job, weathers);
   const weather = job.designOutdoorC === null ? table : steadyCold(table, job.designOutdoorC);
   yield { done: 0, what: 'assembling the network' };
-  const assembly = assemble(job.building, weather, job);
+  const assembly = assemble(job.building, weather, { ...job, memory });
   const { problem: year } = assembly;
   const perHour = 3600 / year.stepS;
   const off = job.offHour * perHour;
   const count = Math.min(job.hours * perHour, year.stepCount - off);
   const stateC = yield* stateAt(year, off);
-  const left = job.vacant ? assemble(withoutGains(job.building), weather, job).problem : year;
+  const left = job.vacant
+    ? assemble(withoutGains(job.building), weather, { ...job, memory }).problem
+    : year;
   const idle = withPlants(left, allOff(left));
   const free = yield* marchPart(
     { ...segmentOf(idle, off, count, { kind: 'temperatures', tempC: stateC }), stepsPerRecord: 1 },

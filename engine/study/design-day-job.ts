@@ -1,6 +1,6 @@
 // The design day of cooling: the hottest day of the table, by its mean, repeated until it follows
 // itself, with chillers without limit.
-import { assemble } from '../assembly/index.ts';
+import { assemble, type Memory } from '../assembly/index.ts';
 import type { Progress } from '../simulate.ts';
 import { type RunOf, type Weathers, weatherOf } from './job.ts';
 import { marchPart } from './march-part.ts';
@@ -29,10 +29,11 @@ export interface DesignDayResult {
 export function* designDayJob(
   job: DesignDayJob,
   weathers: Weathers,
+  memory: Memory,
 ): Generator<Progress, DesignDayResult> {
   const weather = weatherOf(job, weathers);
   yield { done: 0, what: 'assembling the design day' };
-  const assembly = assemble(job.building, weather, job);
+  const assembly = assemble(job.building, weather, { ...job, memory });
   const plants = roomPlants(assembly, 'cooling');
   const day = extremeDay(weather, 1);
   const perDay = 86_400 / assembly.problem.stepS;

@@ -6,7 +6,7 @@
 // the last block that it changes until every node is back to within `sameK` of the kept state. What
 // comes out is what a whole year would give, to that tolerance; a test holds the two side by side.
 import type { WeatherYear } from '../../weather/index.ts';
-import { assemble } from '../assembly/index.ts';
+import { assemble, type Memory } from '../assembly/index.ts';
 import type { Problem, Run } from '../network/index.ts';
 import type { Progress } from '../simulate.ts';
 import { type RunOf, type Weathers, weatherOf } from './job.ts';
@@ -66,11 +66,15 @@ interface Block {
   readonly startC: Float64Array;
 }
 
-export function* sizesJob(job: SizesJob, weathers: Weathers): Generator<Progress, SizesResult> {
+export function* sizesJob(
+  job: SizesJob,
+  weathers: Weathers,
+  memory: Memory,
+): Generator<Progress, SizesResult> {
   const { building, side, sizesW } = job;
   const weather: WeatherYear = weatherOf(job, weathers);
   yield { done: 0, what: 'assembling the network' };
-  const assembly = assemble(building, weather, job);
+  const assembly = assemble(building, weather, { ...job, memory });
   const plants = roomPlants(assembly, side);
   const problem = readsOnly(assembly.problem, plants);
   const largest = plants.map((_, r) => Math.max(...sizesW.map((size) => size[r])));
@@ -110,6 +114,7 @@ function sized(problem: Problem, plants: readonly RoomPlant[], sizeW: readonly n
 }
 
 interface ReferenceYear {
+  readonly largestW: readonly number[];
   readonly blocks: readonly Block[];
   readonly traces: Traces;
 }
@@ -131,22 +136,23 @@ function keep(run: Run, plants: readonly RoomPlant[], into: Traces, fromStep: nu
   });
 }
 
+/** The state at new year: the last week over and over until it repeats itself, as a year run starts. */
+function* lastWeek(whole: Problem, from: number, to: number): Generator<Progress, Run> {
+  const { start, stepCount } = whole;
+  if (start.kind !== 'periodic') throw new Error('an assembled year starts periodic');
+  const span = start.spanSteps;
+  const week = segmentOf(whole, stepCount - span, span, start);
+  return yield* marchPart(week, 'finding the start', from, to);
+}
+
 function* referenceYear(
   problem: Problem,
   plants: readonly RoomPlant[],
   largestW: readonly number[],
 ): Generator<Progress, ReferenceYear> {
   const whole = sized(problem, plants, largestW);
-  const { start, stepCount } = problem;
-  if (start.kind !== 'periodic') throw new Error('an assembled year starts periodic');
-  // The state at new year: the last week until it repeats itself.
-  const span = start.spanSteps;
-  const lead = yield* marchPart(
-    segmentOf(whole, stepCount - span, span, start),
-    'finding the start',
-    0.02,
-    0.05,
-  );
+  const { stepCount } = problem;
+  const lead = yield* lastWeek(whole, 0.02, 0.05);
   const blockSteps = (blockDays * 86_400) / problem.stepS;
   const blocks: Block[] = [];
   const traces = emptyTraces(plants, stepCount);
@@ -167,15 +173,21 @@ function* referenceYear(
     state = run.finalC;
     from += count;
   }
-  return { blocks, traces };
+  return { largestW, blocks, traces };
 }
 
-/** Whether some room takes more in a block than this size gives. */
+/** Where power jumps, the first stage of a step may ask for more than the step's mean by up to 1/γ. */
+const stageShare = 1 - Math.SQRT1_2;
+
+/** Whether some room may take more in a block than this size gives. */
 function exceeds(traces: Traces, sizeW: readonly number[], { from, count }: Block): boolean {
   return sizeW.some((w, r) => {
     const power = traces.powerW[r];
-    // A step's mean below the size can hide a stage above it: leave a margin.
-    for (let k = from; k < from + count; k++) if (power[k] > 0.95 * w) return true;
+    for (let k = from; k < from + count; k++) {
+      if (power[k] > 0.95 * w) return true;
+      const before = k > 0 ? power[k - 1] : power[k];
+      if (power[k] > stageShare * w && power[k] - before > 0.1 * w) return true;
+    }
     return false;
   });
 }
@@ -195,36 +207,24 @@ function* sizedYear(
   };
   const { blocks } = year;
   const touched = blocks.map((block) => exceeds(year.traces, sizeW, block));
-  if (!touched.includes(true)) return { traces, stepsRun: 0 };
+  const isReference = sizeW.every((w, r) => w === year.largestW[r]);
+  if (isReference || !touched.includes(true)) return { traces, stepsRun: 0 };
   const small = sized(problem, plants, sizeW);
-  // Go round the year from a block that this size leaves as it is, so that new year is passed warm.
-  const first = Math.max(0, touched.indexOf(false));
-  let state: Float64Array | null = null;
   let stepsRun = 0;
-  if (!touched.includes(false)) {
-    // No rest anywhere: a start of its own.
-    const span = Math.min(...blocks.map((block) => block.count));
-    const last = problem.stepCount - span;
-    const start = { kind: 'periodic', spanSteps: span, toleranceK: 0.01, maxPasses: 40 } as const;
-    const lead = yield* marchPart(
-      segmentOf(small, last, span, start),
-      'finding the start',
-      done,
-      done,
-    );
-    state = lead.finalC;
+  // The year begins as any year run does: with its own last week, where this size can change that.
+  let state: Float64Array | null = null;
+  if (touched[blocks.length - 1]) {
+    state = (yield* lastWeek(small, done, done)).finalC;
+    if (isSame(state, blocks[0].startC)) state = null;
   }
-  const rests = touched.includes(false);
-  for (let i = 0; i < blocks.length || (rests && state && i < 2 * blocks.length); i++) {
-    const at = (first + i) % blocks.length;
-    const block = blocks[at];
-    if (state && rests && isSame(state, block.startC)) state = null;
-    if (state === null && (!touched[at] || i >= blocks.length)) continue;
+  for (const [b, block] of blocks.entries()) {
+    if (state && isSame(state, block.startC)) state = null;
+    if (state === null && !touched[b]) continue;
     const part = segmentOf(small, block.from, block.count, {
       kind: 'temperatures',
       tempC: state ?? block.startC,
     });
-    const run = yield* marchPart(part, 'running the year', done, done);
+    const run: Run = yield* marchPart(part, 'running the year', done, done);
     stepsRun += block.count;
     keep(run, plants, traces, block.from);
     state = run.finalC;

@@ -2,6 +2,7 @@
 // knows nothing of who runs them. In the window's worker and in tests they run one after another
 // (`runStudy`); the command line spreads them over worker threads. Results come back in the order
 // asked for, whichever thread was first, so that a study's outcome never depends on the machine.
+import { emptyMemory } from '../assembly/index.ts';
 import type { Progress } from '../simulate.ts';
 import type { Job, JobResult, JobResultOf, Weathers } from './job.ts';
 import { runJob } from './run-job.ts';
@@ -40,12 +41,13 @@ export function* runStudy<Result>(
   study: Study<Result>,
   weathers: Weathers,
 ): Generator<Progress, Result> {
+  const memory = emptyMemory();
   let turn = study.next([]);
   while (!turn.done) {
     const { jobs, what, from, to } = turn.value;
     const results: JobResult[] = [];
     for (const [i, job] of jobs.entries()) {
-      const run = runJob(job, weathers);
+      const run = runJob(job, weathers, memory);
       let step = run.next();
       while (!step.done) {
         const share = (i + step.value.done) / jobs.length;
