@@ -2,7 +2,8 @@
 // assumption beside it.
 //
 // Time axis: index h covers the hour h:00 to h+1:00 of local standard time (a fixed offset from UTC,
-// no daylight saving), counted from 1 January 00:00. Readers shift their file's stamps to it.
+// no daylight saving), counted from 1 January 00:00. Readers shift their file's stamps to it. Tables of another interval are
+// brought to hours with their energy kept (series/to-year.ts); where theirs is shorter, `fine` holds it.
 
 /** Where the weather was taken, and the clock it is written in. */
 export interface Site {
@@ -40,6 +41,27 @@ export interface WeatherNote {
   readonly count: number;
 }
 
+/**
+ * The same weather at the shorter interval that the table holds, for steps finer than an hour. The
+ * hourly columns are its means, so that whoever knows hours only is served by them.
+ */
+export interface FineWeather {
+  /** Seconds; divides 3600. */
+  readonly intervalS: number;
+  /** `hours * 3600 / intervalS` values each; `at` of a reading counts in intervals. */
+  readonly columns: Readonly<Partial<Record<FineQuantity, WeatherColumn>>>;
+}
+
+export type FineQuantity =
+  | 'dryBulbC'
+  | 'dewPointC'
+  | 'pressurePa'
+  | 'windMPerS'
+  | 'windFromDeg'
+  | 'ghiWPerM2'
+  | 'dniWPerM2'
+  | 'dhiWPerM2';
+
 export interface WeatherYear {
   readonly site: Site;
   /** Data-set form the file was recognised as, for example "TMY3". */
@@ -70,5 +92,8 @@ export interface WeatherYear {
   readonly ceilingM?: WeatherColumn;
   /** Ground reflectance, 0 to 1. */
   readonly albedo?: WeatherColumn;
+  readonly fine?: FineWeather;
+  /** Hours that the table covers, where it is a part of the year; the rest repeats its ends. */
+  readonly covers?: { readonly fromHour: number; readonly toHour: number };
   readonly notes: readonly WeatherNote[];
 }

@@ -39,7 +39,10 @@ export function splitLine(
   let open = at;
   for (let i = at; i < end; i++) {
     const c = text.charCodeAt(i);
-    if (c === 34) return splitQuoted(cells, text.slice(start, end), delimiter);
+    if (c === 34) {
+      splitQuoted(cells, text.slice(start, end), delimiter);
+      return;
+    }
     if (c !== mark && !(isBlank && c === 9)) continue;
     if (count < mostCells) {
       from[count] = open;

@@ -1,7 +1,7 @@
 // Which columns say when: every reading that fits the cells is tried on the sampled rows, and the one
 // whose times follow evenly wins. Day and month tell themselves apart by that, too.
 import { createCells, splitLine } from './cells.ts';
-import { createDateReader } from './date-text.ts';
+import { textColumns } from './date-columns.ts';
 import type { Guess } from './detect-table.ts';
 import type { DateOrder, StampMapping, StampPart, StampReads, TableMapping } from './mapping.ts';
 import { numberOf } from './numbers.ts';
@@ -103,37 +103,6 @@ export function detectStamp(
     intervalS,
     statesOffset: states,
   };
-}
-
-const share = (cells: readonly string[], fits: (cell: string) => boolean) =>
-  cells.length === 0 ? 0 : cells.filter(fits).length / cells.length;
-
-function textColumns(rows: readonly Row[], width: number) {
-  const dateTime: { at: number; order: DateOrder }[] = [];
-  const date: { at: number; order: DateOrder }[] = [];
-  const time: number[] = [];
-  for (let at = 0; at < width; at++) {
-    const cells = rows
-      .slice(0, 400)
-      .map((row) => row[at] ?? '')
-      .filter((cell) => cell !== '');
-    if (cells.length < 2) continue;
-    for (const order of ['ymd', 'dmy', 'mdy'] as const) {
-      const readDate = createDateReader(order, 'date');
-      const readBoth = createDateReader(order, 'dateTime');
-      const isDate = share(cells, (cell) => readDate(cell, 0, cell.length) !== null);
-      if (isDate > 0.95) date.push({ at, order });
-      // A date and its midnight, all the way down, is a date: another column holds the time.
-      if (share(cells, (cell) => readBoth(cell, 0, cell.length) !== null) > 0.95)
-        dateTime.push({ at, order });
-    }
-    const readTime = createDateReader('ymd', 'time');
-    if (
-      share(cells, (cell) => /\d:\d/.test(cell) && readTime(cell, 0, cell.length) !== null) > 0.95
-    )
-      time.push(at);
-  }
-  return { dateTime, date, time };
 }
 
 function namedColumn(headings: readonly string[], reads: StampReads): number | null {

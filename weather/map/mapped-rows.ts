@@ -131,7 +131,10 @@ export class MappedRows {
 
   /** Lines without a stamp after the last row are a footer, told in a note; between rows, faults. */
   end(): void {
-    if (this.count === 0) return this.blameWaiting();
+    if (this.count === 0) {
+      this.blameWaiting();
+      return;
+    }
     for (const { row } of this.waiting) this.footerRows.push(row);
     if (this.waiting.length + this.waitingMore > 100) this.blameWaiting();
   }

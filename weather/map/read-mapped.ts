@@ -176,10 +176,10 @@ function finish(
     );
   const utcS = rows.utcS.subarray(0, count);
   const intervalS = intervalOf(utcS);
-  if (!(intervalS >= 60 && intervalS <= 10800) || 10800 % intervalS !== 0) {
+  if (!(intervalS >= 60 && intervalS <= 10800) || 86400 % intervalS !== 0) {
     faults.whole(
       intervalS > 0 ? `a row every ${intervalS / 60} minutes` : 'rows that do not follow in time',
-      'an interval from 1 minute to 3 hours that divides 3 hours',
+      'an interval from 1 minute to 3 hours that divides the day',
       intervalS > 0
         ? 'Use a table with another interval.'
         : 'Check which columns hold the stamp, and the order of day and month.',

@@ -3,7 +3,8 @@ import { humidityRatio, saturationPressurePa } from '../air/moist-air.ts';
 import { kastenYoungAirMass } from '../sky/air-mass.ts';
 import { hourlySky, type SkyMethod } from '../sky/hourly-sky.ts';
 import { perezBin, perezCircumsolar, perezClearness, perezHorizon } from '../sky/perez.ts';
-import type { Site, WeatherColumn, WeatherNote, WeatherYear } from '../weather-year.ts';
+import type { Site, WeatherNote, WeatherYear } from '../weather-year.ts';
+import { fineDirection, fineRadiation, fineStates } from './fine.ts';
 import { spreadRadiation } from './spread.ts';
 import { atStepEnds, directionInSteps, momentInHour } from './states.ts';
 import { type SunTrack, sunTrack } from './sun-track.ts';
@@ -55,15 +56,25 @@ export function weatherSteps(
   const sun = options.sun ?? sunTrack(year, stepS);
   if (sun.stepS !== stepS || sun.count !== year.hours * perHour)
     throw new Error('the sun given was computed for other steps');
-  const ends = (column: WeatherColumn) => atStepEnds(column.values, momentInHour(column), perHour);
+  const fine = stepS < 3600 ? year.fine : undefined;
+  const ends = (quantity: 'dryBulbC' | 'dewPointC' | 'pressurePa' | 'windMPerS') => {
+    const own = fine?.columns[quantity];
+    if (fine && own) return fineStates(own, fine.intervalS, stepS, sun.count);
+    return atStepEnds(year[quantity].values, momentInHour(year[quantity]), perHour);
+  };
+  const spread = (quantity: 'ghiWPerM2' | 'dniWPerM2' | 'dhiWPerM2') => {
+    const own = fine?.columns[quantity];
+    if (fine && own) return { means: fineRadiation(own, fine.intervalS, sun), guardedHours: 0 };
+    return spreadRadiation(year[quantity], sun);
+  };
 
   const sky = hourlySky(year, options.skyMethod);
-  const dewPointC = ends(year.dewPointC);
-  const pressurePa = ends(year.pressurePa);
+  const dewPointC = ends('dewPointC');
+  const pressurePa = ends('pressurePa');
   const ratio = dewPointC.map((dew, k) => humidityRatio(saturationPressurePa(dew), pressurePa[k]));
-  const ghi = spreadRadiation(year.ghiWPerM2, sun);
-  const dni = spreadRadiation(year.dniWPerM2, sun);
-  const dhi = spreadRadiation(year.dhiWPerM2, sun);
+  const ghi = spread('ghiWPerM2');
+  const dni = spread('dniWPerM2');
+  const dhi = spread('dhiWPerM2');
   const notes: WeatherNote[] = [];
   const guarded = Math.max(ghi.guardedHours, dni.guardedHours, dhi.guardedHours);
   if (guarded > 0)
@@ -77,14 +88,16 @@ export function weatherSteps(
     hours: year.hours,
     stepS,
     count: sun.count,
-    dryBulbC: ends(year.dryBulbC),
+    dryBulbC: ends('dryBulbC'),
     dewPointC,
     humidityRatio: ratio,
     pressurePa,
-    windMPerS: ends(year.windMPerS),
+    windMPerS: ends('windMPerS'),
     skyTemperatureC: atStepEnds(sky.temperatureC, momentInHour(sky.like), perHour),
     skyMethod: sky.method,
-    windFromDeg: directionInSteps(year.windFromDeg.values, momentInHour(year.windFromDeg), perHour),
+    windFromDeg: fine?.columns.windFromDeg
+      ? fineDirection(fine.columns.windFromDeg, fine.intervalS, stepS, sun.count)
+      : directionInSteps(year.windFromDeg.values, momentInHour(year.windFromDeg), perHour),
     ghiWPerM2: ghi.means,
     dniWPerM2: dni.means,
     dhiWPerM2: dhi.means,
