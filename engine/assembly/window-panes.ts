@@ -108,8 +108,8 @@ export function addPanes(
   };
 }
 
-/** Ties the blind to its pane while it is not drawn, so that it has a temperature; of no weight. */
-const looseWPerM2K = 1e-3;
+/** Holds the blind at its outer pane's temperature while it is not drawn; no heat goes this way then. */
+const idleWPerM2K = 10;
 
 /**
  * A gap with a blind: not drawn, the gap as it is; drawn over a share s, s of the glass has two gaps of
@@ -127,13 +127,8 @@ function addGapBlind(
 ): number {
   const { covering, drawn } = blind;
   const inputs = { areaM2, thicknessM: gap.thicknessM };
-  const node = builder.node(
-    {
-      ...about(covering.name, 'blind between panes', inputs),
-      name: about(covering.name, '', {}).name.concat('/blind'),
-    },
-    0,
-  );
+  const told = about(covering.name, 'blind between panes', inputs);
+  const node = builder.node({ ...told, name: `${told.name}/blind` }, 0);
   const whole = gapLaw(gap, where);
   const half = gapLaw({ ...gap, thicknessM: gap.thicknessM / 2 }, where);
   const pair = (one: number, other: number) => 1 / (1 / one + 1 / other - 1);
@@ -153,18 +148,19 @@ function addGapBlind(
     [ends[0], node, pair(emissivities[0], covering.frontEmissivity)],
     [node, ends[1], pair(covering.backEmissivity, emissivities[1])],
   ] as const;
-  for (const [outer, inner, exchange] of sides)
+  sides.forEach(([outer, inner, exchange], side) => {
+    const idle = side === 0 ? idleWPerM2K : 0;
     builder.functionLink(
       outer,
       inner,
-      (a, b, step) =>
-        areaM2 *
-        (looseWPerM2K +
-          (drawn[step] === 0
-            ? 0
-            : drawn[step] *
-              (half.conductanceWPerM2K(a, b) + exchange * greyConductanceWPerM2K(a, b)))),
+      (a, b, step) => {
+        const share = drawn[step];
+        if (share === 0) return areaM2 * idle;
+        const still = half.conductanceWPerM2K(a, b);
+        return areaM2 * share * (still + exchange * greyConductanceWPerM2K(a, b));
+      },
       about(`half of the gap beside ${covering.name}`, half.method, inputs),
     );
+  });
   return node;
 }

@@ -187,6 +187,16 @@ describe('any window in a run', () => {
   });
 });
 
+test.each(['outside', 'between', 'inside'])(
+  'a blind %s that the sun draws and lets go in quarter hours leaves no step open',
+  (position) => {
+    const blind = { covering: 'screen', position, control: { sunAboveWPerM2: 250 } };
+    const { findings } = runYear(project({ opening: { blind } }), sunny, 15);
+    expect(findings.quality.unconvergedSteps).toBe(0);
+    expect(findings.quality.relativeBalanceResidual).toBeLessThan(1e-9);
+  },
+);
+
 describe('blinds', () => {
   const tight = { cooling: { setPointC: 26 } };
   const drawn = (position: string, control: Json = {}, room: Json = tight): Case => ({
