@@ -10,7 +10,7 @@ import type { SeriesColumn, WeatherSeries } from './series.ts';
 export function seriesOfYear(year: WeatherYear, file: string): WeatherSeries {
   const columns = quantities.flatMap((quantity): SeriesColumn[] => {
     const column = year[quantity];
-    if (!column || column.origin !== 'read') return [];
+    if (column?.origin !== 'read') return [];
     const { values, stands, origin } = column;
     return [{ quantity, heading: quantityWords[quantity], values, stands, origin }];
   });

@@ -33,10 +33,6 @@ describe.each(all)('%s', (name) => {
   testTable('no check finds anything in an original, least of all its clock', name, (bytes) => {
     const year = yearOf(bytes, optionsFor(name));
     const { findings, sunTime, season } = inspectSeries(seriesOfYear(year, name));
-      name,
-      sunTime?.shiftMinutes,
-      findings.map((f) => `${f.id}:${f.count} ${f.text}`),
-    );
     expect(findings.map(({ text }) => text)).toEqual([]);
     expect(season).toBe(null);
     expect(sunTime?.isSuspect).toBe(false);
