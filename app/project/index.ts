@@ -1,6 +1,14 @@
 // The open document: its undo, its file's text, and the weather it was made with. No React, no Node.
 export { type DifferenceLine, differences } from './difference.ts';
 export {
+  constructionEdit,
+  copyEdit,
+  type FabricAt,
+  layersEdit,
+  materialEdit,
+  swapEdit,
+} from './fabric-edits.ts';
+export {
   type BoundaryForm,
   type ConstructionForm,
   freeId,
@@ -17,8 +25,22 @@ export {
   type ScheduleForm,
   type SurfaceForm,
 } from './form.ts';
+export { copyGlazingEdit, glazingEdit, swapGlazingEdit } from './glazing-edits.ts';
 export { begin, edit, type History, redo, undo } from './history.ts';
 export { projectText } from './project-text.ts';
+export {
+  addOpening,
+  addSurface,
+  boundaryEdit,
+  copyRoom,
+  nameOf,
+  openingAreaEdit,
+  openingSizeEdit,
+  removeOpening,
+  removeRoom,
+  removeSurface,
+  surfaceEdit,
+} from './room-edits.ts';
 export {
   beginStory,
   type Edit,

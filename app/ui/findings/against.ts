@@ -38,13 +38,13 @@ export function setAgainst(
   const found = new Map<string, Against>();
   const cut = now.full && base.full ? 'full' : now.coarse && base.coarse ? 'coarse' : null;
   if (cut === null) return found;
-  const valueOf = (simulation: Simulation | null) =>
+  const valuesOf = (simulation: Simulation | null) =>
     new Map(simulation ? answersOf(simulation).map((one) => [one.key, one.value]) : []);
   const isBoth = now.full && now.coarse && base.full && base.coarse;
   const [nowCoarse, baseCoarse] = isBoth
-    ? [valueOf(now.coarse), valueOf(base.coarse)]
+    ? [valuesOf(now.coarse), valuesOf(base.coarse)]
     : [null, null];
-  const baseValues = valueOf(base[cut]);
+  const baseValues = valuesOf(base[cut]);
   const simulation = now[cut];
   if (!simulation) return found;
   for (const { key, value, decimals } of answersOf(simulation)) {

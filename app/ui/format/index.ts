@@ -11,6 +11,13 @@ export {
   stampText,
 } from './calendar.ts';
 export {
+  type QuantityName,
+  shownQuantities,
+  shownUnit,
+  shownValue,
+  type UnitSystem,
+} from './display-units.ts';
+export {
   difference,
   duration,
   figure,
@@ -19,3 +26,4 @@ export {
   type Quantity,
   quantity,
 } from './number.ts';
+export { type Dimension, type Typed, typedQuantity } from './typed-quantity.ts';

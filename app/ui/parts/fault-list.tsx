@@ -8,7 +8,13 @@ export function placeText({ place }: Fault): string {
   return `row ${figure(place.row)}, column ${place.column}`;
 }
 
-export function FaultList({ faults }: { faults: readonly Fault[] }) {
+export interface FaultListProps {
+  readonly faults: readonly Fault[];
+  /** Leads to the field, where the window has one for it; null where not. */
+  readonly jumpOf?: (fault: Fault) => (() => void) | null;
+}
+
+export function FaultList({ faults, jumpOf }: FaultListProps) {
   const files = [...new Set(faults.map((fault) => fault.file))];
   return (
     <section className="faults" aria-label="Faults">
@@ -31,7 +37,9 @@ export function FaultList({ faults }: { faults: readonly Fault[] }) {
             <tbody>
               {own.map((fault) => (
                 <tr key={`${placeText(fault)} ${fault.found} ${fault.expected}`}>
-                  <th scope="row">{placeText(fault)}</th>
+                  <th scope="row">
+                    <Place fault={fault} jump={jumpOf?.(fault) ?? null} />
+                  </th>
                   <td>{fault.found}</td>
                   <td>{fault.expected}</td>
                   <td>{fault.mend}</td>
@@ -42,5 +50,14 @@ export function FaultList({ faults }: { faults: readonly Fault[] }) {
         );
       })}
     </section>
+  );
+}
+
+function Place({ fault, jump }: { fault: Fault; jump: (() => void) | null }) {
+  if (!jump) return placeText(fault);
+  return (
+    <button type="button" className="link" onClick={jump}>
+      {placeText(fault)}
+    </button>
   );
 }

@@ -1,7 +1,8 @@
 // What stands on the sheet when a run gave no result, or when there is none yet: one sentence and
 // what to do. The last result, if there is one, stays below it.
 
-import { asksForSite, useApp, useAppState } from '../state/index.ts';
+import { jumpTo } from '../problems/jump.ts';
+import { asksForSite, useApp, useAppState, useProject } from '../state/index.ts';
 import { FaultList } from './fault-list.tsx';
 
 export function RunTrouble() {
@@ -9,6 +10,8 @@ export function RunTrouble() {
   const run = useAppState((state) => state.run);
   const isSite = useAppState(asksForSite);
   const hasWeather = useAppState((state) => state.weather !== null);
+  const { form } = useProject();
+  const isEdited = form !== null;
   const again = (
     <button type="button" className="button" onClick={() => void app.runYear()}>
       Run the year
@@ -18,9 +21,10 @@ export function RunTrouble() {
     return (
       <section className="stop" aria-label="Not run" role="alert">
         <p>
-          <b>Not run.</b> Put these right in the file and open it again.
+          <b>Not run.</b> Put these right
+          {isEdited ? '; the year runs again by itself' : ' in the file and open it again'}.
         </p>
-        <FaultList faults={run.faults} />
+        <FaultList faults={run.faults} jumpOf={(fault) => jumpTo(app, form, fault)} />
         <div className="row-of-buttons">
           {!hasWeather && (
             <button type="button" className="button" onClick={() => void app.openWeather()}>

@@ -1,41 +1,7 @@
-import type { ReactNode } from 'react';
 import { figure } from '../format/index.ts';
 import { type Screen, useApp, useAppState } from '../state/index.ts';
-
-interface RowProps {
-  readonly label: string;
-  readonly aside?: string;
-  readonly isOn: boolean;
-  readonly isChild?: boolean;
-  readonly isOff?: boolean;
-  readonly onGo: () => void;
-}
-
-function Row({ label, aside, isOn, isChild, isOff, onGo }: RowProps) {
-  return (
-    <li>
-      <button
-        type="button"
-        className={isChild ? 'child' : ''}
-        aria-current={isOn ? 'page' : undefined}
-        disabled={isOff}
-        onClick={onGo}
-      >
-        <span>{label}</span>
-        {aside && <i>{aside}</i>}
-      </button>
-    </li>
-  );
-}
-
-function Group({ title, children }: { title: string; children: ReactNode }) {
-  return (
-    <>
-      <h2>{title}</h2>
-      <ul>{children}</ul>
-    </>
-  );
-}
+import { BuildingRows } from './building-rows.tsx';
+import { Group, Row } from './side-row.tsx';
 
 export function SideBar() {
   const app = useApp();
@@ -107,6 +73,7 @@ function ProjectRows() {
           isOn={screen === 'site'}
           onGo={() => app.go('site')}
         />
+        <BuildingRows />
       </Group>
       <Group title="Answers">
         <Row

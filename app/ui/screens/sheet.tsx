@@ -1,11 +1,16 @@
 import { RunProgress } from '../parts/run-progress.tsx';
 import { RunTrouble } from '../parts/run-trouble.tsx';
-import { roomResult, useApp, useAppState } from '../state/index.ts';
+import { roomResult, type Screen, useApp, useAppState, useProject } from '../state/index.ts';
+import { Fabric } from './fabric/fabric.tsx';
 import { House } from './house.tsx';
 import { Room } from './room.tsx';
 import { SiteWeather } from './site-weather.tsx';
 import { Waiting } from './waiting.tsx';
 import { Welcome } from './welcome.tsx';
+
+const editors: Partial<Record<Screen, () => React.ReactNode>> = {
+  fabric: Fabric,
+};
 
 /** The middle of the window: the screen that was chosen, or why it cannot be drawn yet. */
 export function Sheet() {
@@ -14,8 +19,18 @@ export function Sheet() {
   const simulation = useAppState((state) => state.simulation);
   const roomId = useAppState((state) => state.roomId);
   const isStale = useAppState((state) => state.isStale);
+  const hasForm = useProject().form !== null;
   if (screen === 'welcome') return <Welcome />;
   const room = simulation && roomResult(simulation, roomId);
+  const Editor = editors[screen];
+  if (Editor) {
+    return (
+      <>
+        <RunTrouble />
+        {hasForm ? <Editor /> : <Unreadable />}
+      </>
+    );
+  }
   return (
     <>
       <RunTrouble />
@@ -31,5 +46,17 @@ export function Sheet() {
         </div>
       )}
     </>
+  );
+}
+
+/** A file that does not fit the form cannot be edited here. */
+function Unreadable() {
+  const hasProject = useAppState((state) => state.project !== null);
+  return (
+    <p className="quiet">
+      {hasProject
+        ? 'The file does not have the form of a project, so that it cannot be edited here. The faults are listed above; put them right in the file and open it again.'
+        : 'No project is open.'}
+    </p>
   );
 }

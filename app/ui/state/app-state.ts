@@ -4,6 +4,7 @@ import type { Json } from '../../../engine/index.ts';
 import type { Fault, Site } from '../../../weather/index.ts';
 import type { Story } from '../../project/index.ts';
 import type { DraftNote, OpenedFile, RecentProject } from '../desk/index.ts';
+import type { UnitSystem } from '../format/index.ts';
 import type { Simulation } from '../simulation.ts';
 
 export type Screen =
@@ -111,6 +112,8 @@ export interface AppState {
   /** Index of the chosen week, by room; the worst one where nothing was chosen. */
   readonly weeks: Readonly<Record<string, number>>;
   readonly scheme: Scheme;
+  /** Of display; the document is in SI. */
+  readonly units: UnitSystem;
   readonly dialog: Dialog;
   readonly isDrawerOpen: boolean;
   /** One line to say after an action that changed nothing on the sheet. */
@@ -154,6 +157,7 @@ export const firstState: AppState = {
   mark: null,
   weeks: {},
   scheme: 'system',
+  units: 'SI',
   dialog: null,
   isDrawerOpen: false,
   notice: null,

@@ -179,8 +179,8 @@ export function createApp(
     closeProject() {
       guard('closing the project', () => {
         runs.forget();
-        const { scheme, recent, drafts } = get();
-        set({ ...firstState, scheme, recent, drafts });
+        const { scheme, units, recent, drafts } = get();
+        set({ ...firstState, scheme, units, recent, drafts });
       });
     },
     runYear: runs.run,

@@ -22,3 +22,11 @@ export {
   useAppState,
   useCalendar,
 } from './use-app.ts';
+export {
+  type EditedProject,
+  explainedOf,
+  type ReadProject,
+  readProject,
+  useEditedProject,
+  useProject,
+} from './use-project.ts';
