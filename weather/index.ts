@@ -41,6 +41,7 @@ export * from './steps/plane.ts';
 export * from './steps/spread.ts';
 export * from './steps/steps.ts';
 export * from './steps/sun-track.ts';
+export * from './store/pack.ts';
 export * from './sun/ephemeris.ts';
 export * from './sun/events.ts';
 export * from './sun/handbook.ts';

@@ -2,11 +2,12 @@
 
 import { dirname, isAbsolute, join } from 'node:path';
 import { type Building, parseProject } from '../../engine/index.ts';
-import { readWeather, type WeatherYear } from '../../weather/index.ts';
-import { readBytes, readText } from '../disk/index.ts';
+import type { WeatherYear } from '../../weather/index.ts';
+import { readText } from '../disk/index.ts';
 import { checkWeatherDigest } from '../project/index.ts';
 import { type OpenNodal, openNodal } from './nodal.ts';
 import { InputFaults, need, WrongUsage } from './stop.ts';
+import { acceptedOf, fromDate, type Reading, readTable } from './weather-reading.ts';
 
 export interface OpenProject {
   /** As the user wrote it. */
@@ -31,15 +32,31 @@ export interface OpenWeather {
   readonly notes: readonly string[];
 }
 
+/** A table as the user names it; `reading` for tables that need a mapping. */
 export async function openWeather(
   file: string,
   site: NonNullable<Building['weather']>['site'] | null = null,
+  reading: Reading = {},
 ): Promise<OpenWeather> {
-  const limits = { expected: 'a weather table', limitBytes: 64_000_000 };
-  const { data, sha256 } = need(await readBytes(file, limits));
-  const year = need(readWeather(data, site ? { file, site } : { file }));
-  return { file, year, sha256, notes: [] };
+  const { year, sha256 } = await readTable(file, site, reading);
+  const notes =
+    reading.mapping === undefined ? [] : [`Weather read by the mapping ${reading.mapping}.`];
+  return { file, year, sha256, notes };
 }
+
+/** How the project says that its weather is read; paths start where the project lies. */
+function ownReading({ file, building }: OpenProject): Reading {
+  const { mapping, accept, year, from } = building.weather ?? {};
+  return {
+    ...(mapping === undefined ? {} : { mapping: beside(file, mapping) }),
+    ...(accept === undefined ? {} : { accepted: acceptedOf(accept) }),
+    ...(year === undefined ? {} : { choice: { kind: 'year' as const, year } }),
+    ...(from === undefined ? {} : { choice: fromDate(from, `${file}: weather.from`) }),
+  };
+}
+
+const beside = (project: string, path: string) =>
+  isAbsolute(path) ? path : join(dirname(project), path);
 
 /**
  * The weather for a project: the table that the user names (from where they are), or the one that the
@@ -48,10 +65,11 @@ export async function openWeather(
 export async function weatherFor(
   { file, building }: OpenProject,
   named: string | null,
+  reading: Reading = {},
 ): Promise<OpenWeather> {
   const site = building.weather?.site ?? null;
   if (named !== null) {
-    const weather = await openWeather(named, site);
+    const weather = await openWeather(named, site, reading);
     const own = building.weather?.file;
     const instead =
       own === undefined ? 'The project names no weather.' : `The project names ${own}.`;
@@ -64,7 +82,8 @@ export async function weatherFor(
     );
   }
   const own = building.weather.file;
-  const weather = await openWeather(isAbsolute(own) ? own : join(dirname(file), own), site);
+  const how = { ...ownReading({ file, building }), ...reading };
+  const weather = await openWeather(beside(file, own), site, how);
   const digest = checkWeatherDigest(building, file, weather.sha256);
   if (digest.kind === 'different') throw new InputFaults([digest.fault]);
   return digest.kind === 'unknown'

@@ -16,6 +16,7 @@ import {
 } from './nodal.ts';
 import { need, WrongUsage } from './stop.ts';
 import type { Terminal } from './terminal.ts';
+import { readingOf, readingOptions } from './weather-reading.ts';
 
 const stepsMinutes = [1, 2, 3, 4, 5, 6, 10, 12, 15, 20, 30, 60];
 
@@ -51,7 +52,12 @@ function run(
 }
 
 async function simulateNodal(nodal: OpenNodal, given: Given, terminal: Terminal): Promise<void> {
-  refuseForNodal('simulate', given, ['weather', 'step', 'check-accuracy']);
+  refuseForNodal('simulate', given, [
+    'weather',
+    ...Object.keys(readingOptions),
+    'step',
+    'check-accuracy',
+  ]);
   const run = runNodal(nodal, terminal);
   const results = nodalResults(nodal, run);
   const json = JSON.stringify(results, null, 2);
@@ -74,6 +80,7 @@ export const simulateCommand: Command = {
     'Runs the year: energy, peaks and hours outside the comfort band; or a plain nodal model.',
   options: {
     weather: { value: 'FILE', help: "a weather table instead of the project's" },
+    ...readingOptions,
     step: { value: 'MIN', help: 'step in minutes, a divisor of 60; 15 without it' },
     json: { help: 'one JSON document on standard output' },
     out: { value: 'DIR', help: 'also write findings.json and the hours of each room (CSV) there' },
@@ -90,7 +97,11 @@ export const simulateCommand: Command = {
     const project = await openModel(operand);
     if ('model' in project) return simulateNodal(project, given, terminal);
     const stepMinutes = stepOf(textOf(given, 'step'));
-    const weather = await weatherFor(project, textOf(given, 'weather'));
+    const weather = await weatherFor(
+      project,
+      textOf(given, 'weather'),
+      readingOf('simulate', given),
+    );
     const readMs = performance.now() - started;
 
     const simulation = run(project, weather, { stepMinutes, refine: 1 }, readMs, terminal);

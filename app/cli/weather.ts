@@ -2,13 +2,16 @@ import { hourName } from '../../engine/index.ts';
 import {
   type ClimateSummary,
   climateSummary,
+  type Finding,
   type MonthClimate,
   type WeatherColumn,
   type WeatherYear,
 } from '../../weather/index.ts';
+import { textOf } from './arguments.ts';
 import type { Command } from './command.ts';
-import { openWeather } from './inputs.ts';
 import { figure, table, wrap } from './table.ts';
+import { makeMapping } from './weather-map.ts';
+import { readingOf, readingOptions, readTable, siteOf } from './weather-reading.ts';
 
 interface ColumnEntry {
   readonly column: string;
@@ -42,7 +45,12 @@ function columnsOf(year: WeatherYear): readonly ColumnEntry[] {
 
 const months = 'Jan Feb Mar Apr May Jun Jul Aug Sep Oct Nov Dec'.split(' ');
 
-function weatherDocument(file: string, sha256: string, year: WeatherYear) {
+function weatherDocument(
+  file: string,
+  sha256: string,
+  year: WeatherYear,
+  findings: readonly Finding[],
+) {
   return {
     file,
     sha256,
@@ -52,6 +60,7 @@ function weatherDocument(file: string, sha256: string, year: WeatherYear) {
     hours: year.hours,
     columns: columnsOf(year),
     climate: climateSummary(year),
+    findings,
     notes: year.notes,
   };
 }
@@ -71,6 +80,21 @@ Heating design: ${c(design.heating996C)} exceeded in 99.6 % of the hours, ${c(de
 Cooling design, dry bulb / wet bulb: ${c(design.cooling04C)} / ${c(design.wetBulbAtCooling04C)} exceeded in 0.4 % of the hours, ${c(design.cooling1C)} / ${c(design.wetBulbAtCooling1C)} in 1 %, ${c(design.cooling2C)} / ${c(design.wetBulbAtCooling2C)} in 2 %
 One year gives milder design values than a climate table of many years, which sizing for people who
 could come to harm should use.`;
+}
+
+function findingsText(findings: readonly Finding[]): string {
+  if (findings.length === 0)
+    return 'Checks of order, gaps, limits, stuck sensors, jumps, closure, clear sky and sun time found nothing.';
+  const lines = findings.map(({ id, title, text, repair, isAccepted }) => {
+    const does =
+      repair === null
+        ? ''
+        : isAccepted
+          ? ` Done: ${repair}`
+          : ` ${repair} Left as it is; --accept ${id} does it.`;
+    return wrap(`- ${title}. ${text}${does}`);
+  });
+  return `Checks:\n${lines.join('\n')}`;
 }
 
 function weatherText({ site, form, year, hours, sha256, ...rest }: WeatherDocument): string {
@@ -107,6 +131,7 @@ Form: ${form}. ${hours} hours, calendar of ${year}. SHA-256 ${sha256}`,
       ],
       rest.columns,
     ),
+    findingsText(rest.findings),
     notes.length > 0 ? notes.join('\n') : 'Nothing was repaired or assumed.',
   ].join('\n\n');
 }
@@ -116,11 +141,34 @@ export const weatherCommand: Command = {
   operand: 'FILE',
   summary:
     'Shows what was read from a weather table: place, columns, months, repairs, assumptions.',
-  options: { json: { help: 'one JSON document on standard output' } },
-  examples: ['inglenook weather year.csv', 'inglenook weather year.csv --json'],
+  options: {
+    ...readingOptions,
+    'make-mapping': {
+      value: 'OUT',
+      help: 'look at a table of no known form and write how to read it',
+    },
+    site: {
+      value: 'LAT,LON,M,UTC',
+      help: 'the place, for tables that do not say (--site=-33.9,18.4,40,2)',
+    },
+    json: { help: 'one JSON document on standard output' },
+  },
+  examples: [
+    'inglenook weather year.csv',
+    'inglenook weather year.csv --json',
+    'inglenook weather roof.txt --make-mapping roof.mapping.json --site 47.5,9,480,1',
+    'inglenook weather roof.txt --mapping roof.mapping.json --accept gap-short-dryBulbC,order',
+  ],
   async run(operand, given, terminal) {
-    const { file, sha256, year } = await openWeather(operand);
-    const document = weatherDocument(file, sha256, year);
+    const place = textOf(given, 'site');
+    const site = place === null ? null : siteOf('weather', place);
+    const out = textOf(given, 'make-mapping');
+    if (out !== null) return makeMapping(operand, out, site, given.json === true, terminal);
+    const reading = readingOf('weather', given);
+    const tell = (done: number) => terminal.progress(done, 'reading the table');
+    const { sha256, year, findings } = await readTable(operand, site, reading, true, tell);
+    terminal.endProgress();
+    const document = weatherDocument(operand, sha256, year, findings);
     terminal.print(given.json ? JSON.stringify(document, null, 2) : weatherText(document));
   },
 };

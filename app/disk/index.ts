@@ -1,2 +1,3 @@
 export { readBytes, readText, type TextFile } from './read-text.ts';
+export { readStored, writeStored } from './store.ts';
 export { writeFileWhole, writeFolderWhole } from './write-whole.ts';

@@ -53,6 +53,16 @@ const weatherSourceSchema = z.strictObject({
     .string()
     .regex(/^[0-9a-f]{64}$/, '64 hexadecimal digits')
     .optional(),
+  /** How the table is read, for tables of no known form: a mapping's file, relative to the project. */
+  mapping: z.string().min(1).optional(),
+  /** Repairs that were accepted for it, by their ids. */
+  accept: z.array(z.string().min(1)).optional(),
+  /** The year taken from a table of several; or twelve months from a day. */
+  year: z.int().min(1900).max(2200).optional(),
+  from: z
+    .string()
+    .regex(/^\d{4}-\d\d-\d\d$/, 'a day as YYYY-MM-DD')
+    .optional(),
   /** Where the weather was taken, for tables that do not say; goes before what the table says. */
   site: z
     .strictObject({

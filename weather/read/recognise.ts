@@ -48,7 +48,7 @@ export function recognise(
       'first line',
       lines.find((line) => line.trim() !== '') ?? '',
       'headings of TMY3, NSRDB PSM, PVGIS TMY or a plain table, separated by commas, semicolons or tabs',
-      'Choose a weather table of one of these forms, or write a plain table as the manual describes.',
+      'Choose a weather table of one of these forms, or have a mapping made for it (--make-mapping on the command line).',
     );
   return null;
 }
