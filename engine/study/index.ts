@@ -16,7 +16,8 @@ export {
   type Verdict,
 } from './judge.ts';
 export * from './options.ts';
-export * from './overheating.ts';
+export { overheating } from './overheating.ts';
+export * from './overheating-types.ts';
 export * from './peak-hour.ts';
 export type { Side } from './room-plants.ts';
 export { runJob } from './run-job.ts';

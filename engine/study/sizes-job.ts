@@ -1,7 +1,7 @@
 // The year with many sizes of heater or chiller, from one assembly.
 //
 // A smaller plant changes nothing until a larger one would have given more than it has. So the year is
-// run once with the largest sizes, in blocks of two weeks with the state kept at each start, and every
+// run once with the largest sizes, in blocks of a week with the state kept at each start, and every
 // other size runs only the stretches of blocks that it can change, each from the kept state, on past
 // the last block that it changes until every node is back to within `sameK` of the kept state. What
 // comes out is what a whole year would give, to that tolerance; a test holds the two side by side.
@@ -49,7 +49,7 @@ export interface SizesResult {
   readonly stepsInYear: number;
 }
 
-const blockDays = 14;
+const blockDays = 7;
 const sameK = 0.005;
 
 /** Steps of one run: sensor, operative temperature and power of each room with a plant. */
@@ -176,8 +176,8 @@ function* referenceYear(
   return { largestW, blocks, traces };
 }
 
-/** Where power jumps, the first stage of a step may ask for more than the step's mean by up to 1/γ. */
-const stageShare = 1 - Math.SQRT1_2;
+/** Where power jumps, the first stage of a step, which has this weight in its mean, may ask for all of it. */
+const stageShare = Math.SQRT1_2; // 1 − γ
 
 /** Whether some room may take more in a block than this size gives. */
 function exceeds(traces: Traces, sizeW: readonly number[], { from, count }: Block): boolean {

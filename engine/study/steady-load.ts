@@ -7,13 +7,9 @@
 import type { WeatherYear } from '../../weather/index.ts';
 import { scheduledValues, stepClock } from '../assembly/index.ts';
 import type { Building, Room, Scheduled, Surface } from '../building/index.ts';
-import {
-  designGroundWPerK,
-  designHeatLoad,
-  designInfiltrationM3PerH,
-  designVentilationWPerK,
-} from '../physics/index.ts';
+import { designGroundWPerK, designHeatLoad } from '../physics/index.ts';
 import { extremeDay } from './spell-job.ts';
+import { heightFactor, shieldFactor, ventilationWPerK } from './steady-air.ts';
 import { groundUWPerM2K, openingUWPerM2K, surfaceUWPerM2K } from './u-values.ts';
 
 export interface SteadyLoadOptions {
@@ -58,10 +54,6 @@ export interface SteadyLoad {
   readonly totalW: number;
   readonly assumptions: readonly string[];
 }
-
-/** Wind shield for more than one exposed face, moderate shelter. Source: EN 12831:2003, Table D.8 (from memory). */
-const shieldFactor = 0.03;
-const heightFactor = 1;
 
 interface Scene {
   readonly building: Building;
@@ -148,7 +140,14 @@ function steadyRoom(scene: Scene, room: Room): SteadyRoom {
   const elements = room.surfaces.flatMap((surface) => surfaceElements(scene, room, surface));
   elements.push(...bridgeElements(scene, room));
   const transmissionW = elements.reduce((sum, element) => sum + element.lossW, 0);
-  const airWPerK = ventilationWPerK(scene, room);
+  const airWPerK = ventilationWPerK(
+    {
+      building: scene.building,
+      leastAirChangesPerH: options.leastAirChangesPerH,
+      onColdestDay: scene.onColdestDay,
+    },
+    room,
+  );
   const load = designHeatLoad(
     0,
     airWPerK,
@@ -271,42 +270,6 @@ function bridgeElements(scene: Scene, room: Room): SteadyElement[] {
       lossW: wPerK * factor * whole,
     };
   });
-}
-
-/** Leaks and least air, whichever is more, and what fans bring in beside, less heat recovery. */
-function ventilationWPerK(scene: Scene, room: Room): number {
-  const { leakage, infiltration, ventilation, volumeM3 } = room;
-  const scheduleShare = (schedule: string | undefined) =>
-    schedule === undefined ? 1 : scene.onColdestDay({ schedule });
-  const leaksM3PerH =
-    infiltration.airChangesPerH * volumeM3 * scheduleShare(infiltration.schedule) +
-    (leakage ? designInfiltrationM3PerH(volumeM3, leakage.n50PerH, shieldFactor, heightFactor) : 0);
-  const fans = ventilation.filter((one) => one.control === undefined);
-  const fansM3PerH = fans.reduce(
-    (sum, one) => sum + one.flowM3PerS * 3600 * scheduleShare(one.schedule),
-    0,
-  );
-  const fansLosingM3PerH = fans.reduce(
-    (sum, one) =>
-      sum + one.flowM3PerS * 3600 * scheduleShare(one.schedule) * (1 - one.heatRecovery),
-    0,
-  );
-  const units = scene.building.airUnits.reduce(
-    (sum, unit) => {
-      const supply = unit.supply.find((one) => one.room === room.id);
-      const flow = (supply?.flowM3PerS ?? 0) * 3600 * scheduleShare(unit.schedule);
-      return { whole: sum.whole + flow, losing: sum.losing + flow * (1 - unit.heatRecovery) };
-    },
-    { whole: 0, losing: 0 },
-  );
-  const leastM3PerH = Math.max(
-    0,
-    scene.options.leastAirChangesPerH * volumeM3 - fansM3PerH - units.whole,
-  );
-  return (
-    designVentilationWPerK(leaksM3PerH, leastM3PerH) +
-    designVentilationWPerK(fansLosingM3PerH + units.losing, 0)
-  );
 }
 
 function assumptionsOf({ building, options }: Scene): string[] {
