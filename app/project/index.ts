@@ -51,4 +51,17 @@ export {
   tell,
 } from './story.ts';
 export { emptyProject } from './template.ts';
+export {
+  addGain,
+  amountOf,
+  type DayKind,
+  dayEdit,
+  type GainAmount,
+  gainAmountEdit,
+  newSchedule,
+  ownDayProfile,
+  profileEdit,
+  scheduleFieldEdit,
+  usualAmount,
+} from './use-edits.ts';
 export { checkWeatherDigest, type DigestCheck } from './weather-digest.ts';

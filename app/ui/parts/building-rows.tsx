@@ -35,11 +35,15 @@ export function BuildingRows() {
     })),
   ];
   const rooms = form.rooms.map(({ id, name }) => ({ id, label: name }));
+  const use: readonly Child[] = [
+    { id: 'gains', label: 'Gains and comfort' },
+    ...building.schedules.map(({ id, name }) => ({ id, label: name ?? id.replace(/-/g, ' ') })),
+  ];
   const parts: readonly (readonly [Screen, string, readonly Child[], string])[] = [
     ['plan', 'Plan', [], ''],
     ['rooms', 'Rooms', rooms, figure(rooms.length)],
     ['fabric', 'Fabric', fabric, figure(fabric.length)],
-    ['use', 'Use', [], figure((form.schedules ?? []).length)],
+    ['use', 'Use', use, figure(building.schedules.length)],
     ['plant', 'Plant', [], ''],
     ['methods', 'Methods', [], ''],
   ];

@@ -3,13 +3,21 @@ import { RunTrouble } from '../parts/run-trouble.tsx';
 import { roomResult, type Screen, useApp, useAppState, useProject } from '../state/index.ts';
 import { Fabric } from './fabric/fabric.tsx';
 import { House } from './house.tsx';
+import { Methods } from './methods.tsx';
+import { Plant } from './plant.tsx';
 import { Room } from './room.tsx';
+import { Rooms } from './rooms.tsx';
 import { SiteWeather } from './site-weather.tsx';
+import { Use } from './use/use.tsx';
 import { Waiting } from './waiting.tsx';
 import { Welcome } from './welcome.tsx';
 
 const editors: Partial<Record<Screen, () => React.ReactNode>> = {
+  rooms: Rooms,
   fabric: Fabric,
+  use: Use,
+  plant: Plant,
+  methods: Methods,
 };
 
 /** The middle of the window: the screen that was chosen, or why it cannot be drawn yet. */
