@@ -17,6 +17,7 @@ import {
 import { need, WrongUsage } from './stop.ts';
 import type { Terminal } from './terminal.ts';
 import { readingOf, readingOptions } from './weather-reading.ts';
+import { withOptions } from './with-options.ts';
 
 const stepsMinutes = [1, 2, 3, 4, 5, 6, 10, 12, 15, 20, 30, 60];
 
@@ -53,6 +54,7 @@ function run(
 
 async function simulateNodal(nodal: OpenNodal, given: Given, terminal: Terminal): Promise<void> {
   refuseForNodal('simulate', given, [
+    'option',
     'weather',
     ...Object.keys(readingOptions),
     'step',
@@ -81,6 +83,7 @@ export const simulateCommand: Command = {
   options: {
     weather: { value: 'FILE', help: "a weather table instead of the project's" },
     ...readingOptions,
+    option: { value: 'NAME', help: 'with options of the project, by id or name, parted by commas' },
     step: { value: 'MIN', help: 'step in minutes, a divisor of 60; 15 without it' },
     json: { help: 'one JSON document on standard output' },
     out: { value: 'DIR', help: 'also write findings.json and the hours of each room (CSV) there' },
@@ -90,12 +93,14 @@ export const simulateCommand: Command = {
   examples: [
     'inglenook simulate house.inglenook.json',
     'inglenook simulate house.inglenook.json --weather cold-year.csv --json > cold.json',
+    'inglenook simulate house.inglenook.json --option thicker-walls',
     'inglenook simulate house.inglenook.json --out results --check-accuracy',
   ],
   async run(operand, given, terminal) {
     const started = performance.now();
-    const project = await openModel(operand);
-    if ('model' in project) return simulateNodal(project, given, terminal);
+    const base = await openModel(operand);
+    if ('model' in base) return simulateNodal(base, given, terminal);
+    const { project, notes } = await withOptions(base, textOf(given, 'option'));
     const stepMinutes = stepOf(textOf(given, 'step'));
     const weather = await weatherFor(
       project,
@@ -105,7 +110,7 @@ export const simulateCommand: Command = {
     const readMs = performance.now() - started;
 
     const simulation = run(project, weather, { stepMinutes, refine: 1 }, readMs, terminal);
-    const assumptions = [...weather.notes, ...simulation.findings.assumptions];
+    const assumptions = [...notes, ...weather.notes, ...simulation.findings.assumptions];
     const findings: Findings = { ...simulation.findings, assumptions };
     let accuracy: Accuracy | null = null;
     if (given['check-accuracy']) {
