@@ -6,6 +6,9 @@ export * from './calendar.ts';
 export * from './check/finding.ts';
 export * from './check/inspect.ts';
 export * from './climate/design-conditions.ts';
+export * from './climate/design-day.ts';
+export * from './climate/design-table.ts';
+export * from './climate/spells.ts';
 export * from './climate/summary.ts';
 export * from './fault.ts';
 export * from './map/detect.ts';
@@ -14,6 +17,8 @@ export * from './map/mapping.ts';
 export * from './map/parse-mapping.ts';
 export * from './map/read-mapped.ts';
 export { type Unit, unitsOf } from './map/units.ts';
+export * from './morph/extreme-run.ts';
+export * from './morph/morph.ts';
 export {
   plainWeatherForm,
   writePlainWeather,

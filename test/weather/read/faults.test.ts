@@ -34,7 +34,7 @@ describe('what is no table', () => {
   });
   test('a text of another kind', () => {
     expect(faultsOf('Dear all,\nplease find attached\n')[0]).toBe(
-      'valley.csv, row 1, column first line: found "Dear all,", expected headings of TMY3, NSRDB PSM, PVGIS TMY or a plain table, separated by commas, semicolons or tabs. Choose a weather table of one of these forms, or write a plain table as the manual describes.',
+      'valley.csv, row 1, column first line: found "Dear all,", expected headings of TMY3, NSRDB PSM, PVGIS TMY or a plain table, separated by commas, semicolons or tabs. Choose a weather table of one of these forms, or have a mapping made for it (--make-mapping on the command line).',
     );
   });
   test('a text without line breaks', () => {
