@@ -1,6 +1,7 @@
 // The hours of a run as comma-separated text, one file a room, unit in every head.
 
 import { hourName, type RoomHours, type Simulation } from '../../engine/index.ts';
+import { csvText } from './csv-text.ts';
 
 const number = (value: number) => (Number.isNaN(value) ? '' : String(Number(value.toPrecision(9))));
 
@@ -19,7 +20,7 @@ export function roomCsv(simulation: Simulation, room: RoomHours): string {
     // The balance: heat into the room; what goes out is negative, storage is what is taken up.
     ...Object.entries(room.flowsW).map(([name, values]) => [`${name}FlowW`, values] as const),
   ];
-  const lines = [['hourBeginning', ...columns.map(([head]) => head)].join(',')];
+  const lines = [['hourBeginning', ...columns.map(([head]) => csvText(head))].join(',')];
   for (let h = 0; h < hours; h++) {
     const cells = columns.map(([, values]) => number(values[h]));
     lines.push([hourName(h, hours, year), ...cells].join(','));

@@ -15,6 +15,7 @@ import {
 import { readNumberTable } from '../../weather/index.ts';
 import { readText } from '../disk/index.ts';
 import type { Given } from './command.ts';
+import { csvText } from './csv-text.ts';
 import { need, WrongUsage } from './stop.ts';
 import { table } from './table.ts';
 import type { Terminal } from './terminal.ts';
@@ -184,13 +185,12 @@ export function nodalCsv({ model, problem }: OpenNodal, run: Run): string {
   const recordS = problem.stepS * problem.stepsPerRecord;
   const nodes = problem.recordNodes.length;
   const flows = problem.meters.length;
-  const quoted = (name: string) => (/[",\n]/.test(name) ? `"${name.replaceAll('"', '""')}"` : name);
   const heads = [
     'fromS',
     ...model.nodes.map((node) => `${node.id} (°C)`),
     ...problem.meters.map((meter) => `${meter.name} (W)`),
   ];
-  const lines = [heads.map(quoted).join(',')];
+  const lines = [heads.map(csvText).join(',')];
   const number = (value: number) => Number(value.toPrecision(9));
   for (let r = 0; r < run.records; r++) {
     const temperatures = run.meanC.subarray(r * nodes, (r + 1) * nodes);

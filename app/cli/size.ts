@@ -171,6 +171,7 @@ export const sizeCommand: Command = {
   summary: 'Heater and chiller sizes: design load, warm-up, design day, and the year against size.',
   options: {
     ...studyOptions,
+    step: { value: 'MIN', help: 'step in minutes, a divisor of 60; 30 without it' },
     outdoor: { value: 'C', help: "design temperature; without it the table's 99.6 % value" },
     'least-air': { value: 'N', help: 'least air changes an hour of every room; 0.5 without it' },
     reheat: { value: 'W', help: 'supplement for warming up, W for each m² of floor; 0 without it' },

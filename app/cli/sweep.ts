@@ -158,7 +158,10 @@ export const sweepCommand: Command = {
     const digest = sweepDigest(
       sweep,
       open.document,
-      [...weathers].map(([key, year]) => `${key} ${year.site.name} ${year.dryBulbC.values.join()}`),
+      [...weathers].map(
+        ([key, year]) =>
+          `${key} ${year.site.name} ${year.dryBulbC.values.join()} ${year.ghiWPerM2.values.join()}`,
+      ),
     );
     const known =
       file === null ? new Map<number, SweepRow>() : await openLines(file, sweep, runs, digest);

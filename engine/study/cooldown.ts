@@ -233,12 +233,22 @@ function notesOf(
       'The building has too many nodes for its eigenvalues; the simulated decay stands alone.',
     );
   if (heaters === 0) notes.push('No room has a heater, so there is no warm-up power.');
-  for (const { name, limits, endC } of rooms)
-    for (const limit of limits)
-      if (limit.airAfterH === null && !limit.everReached)
-        notes.push(
-          `${name} never falls to ${limit.limitC} °C in this weather: it would end at ${endC.toFixed(1)} °C.`,
-        );
+  for (const [l, limit] of (rooms[0]?.limits ?? []).entries()) {
+    const never = rooms.filter(
+      ({ limits }) => limits[l].airAfterH === null && !limits[l].everReached,
+    );
+    if (never.length > 0)
+      notes.push(
+        `Never down to ${limit.limitC} °C in this weather, however long: ${never.map(({ name, endC }) => `${name} (ends at ${endC.toFixed(1)} °C)`).join(', ')}.`,
+      );
+    const late = rooms.filter(
+      ({ limits }) => limits[l].airAfterH === null && limits[l].everReached,
+    );
+    if (late.length > 0)
+      notes.push(
+        `Not down to ${limit.limitC} °C in the time looked at, but in the end: ${late.map(({ name }) => name).join(', ')}. Look longer to see when.`,
+      );
+  }
   return notes;
 }
 

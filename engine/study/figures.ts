@@ -5,6 +5,8 @@ export interface FigureKind {
   readonly label: string;
   readonly unit: string;
   readonly digits: number;
+  /** Counted in whole hours: a count that moves at all is no surer than one of them. */
+  readonly counted?: boolean;
   /** NaN where the run has none. */
   readonly of: (space: SpaceFindings) => number;
 }
@@ -25,8 +27,20 @@ export const figureKinds = {
   co2Kg: { label: 'CO₂', unit: 'kg', digits: 0, of: (s) => s.co2Kg ?? Number.NaN },
   peakHeatingW: { label: 'Peak heating', unit: 'W', digits: 0, of: (s) => s.peakHeatingW },
   peakCoolingW: { label: 'Peak cooling', unit: 'W', digits: 0, of: (s) => s.peakCoolingW },
-  hoursBelowBand: { label: 'Below the band', unit: 'h', digits: 0, of: (s) => s.hoursBelowBand },
-  hoursAboveBand: { label: 'Above the band', unit: 'h', digits: 0, of: (s) => s.hoursAboveBand },
+  hoursBelowBand: {
+    label: 'Below the band',
+    unit: 'h',
+    counted: true,
+    digits: 0,
+    of: (s) => s.hoursBelowBand,
+  },
+  hoursAboveBand: {
+    label: 'Above the band',
+    unit: 'h',
+    counted: true,
+    digits: 0,
+    of: (s) => s.hoursAboveBand,
+  },
   degreeHoursBelow: {
     label: 'Below the band',
     unit: 'K·h',
@@ -80,12 +94,15 @@ export function figuresOf(
   factor: number,
 ): Figures {
   const list = figureNames.flatMap((name): [FigureName, Figure][] => {
-    const { of } = figureKinds[name];
+    const kind: FigureKind = figureKinds[name];
+    const { of } = kind;
     const value = of(ofCase);
     if (Number.isNaN(value)) return [];
     const difference = value - of(ofBase);
     const other = second && of(second.ofCase) - of(second.ofBase);
-    const uncertainty = other === null ? null : factor * Math.abs(other - difference);
+    const least = kind.counted && difference !== 0 ? 1 : 0;
+    const uncertainty =
+      other === null ? null : Math.max(least, factor * Math.abs(other - difference));
     return [[name, { value, difference, uncertainty }]];
   });
   return Object.fromEntries(list) as Figures;

@@ -1,10 +1,5 @@
 // A room's summer against the published criteria that a study was asked for.
-import {
-  type Criterion,
-  monthOfHour,
-  type RoomFindings,
-  type RoomHours,
-} from '../findings/index.ts';
+import type { Criterion, RoomFindings, RoomHours } from '../findings/index.ts';
 import { europeanAdaptiveBand, yearRunningMeansC } from '../physics/index.ts';
 
 export type MethodId = 'tm52' | 'tm59' | 'tm59-mechanical' | 'en-16798-1' | 'din-4108-2' | 'band';
@@ -164,10 +159,4 @@ export function hotNightHours(operativeC: Float64Array): number {
   for (let h = 0; h < operativeC.length; h++)
     if ((h % 24 >= 22 || h % 24 < 7) && operativeC[h] > 26) count++;
   return count;
-}
-
-/** Whether an hour lies in the warm half: May to September, November to March in the south. */
-export function isSummerHour(hour: number, hours: number, latitudeDeg: number): boolean {
-  const month = monthOfHour(hour, hours);
-  return latitudeDeg >= 0 ? month >= 4 && month <= 8 : month >= 10 || month <= 2;
 }

@@ -23,6 +23,12 @@ export function* size(
   const coolingRooms = cooled.rooms.filter((room) => room.cooling);
   const notes = [...steady.assumptions];
   if (heatingRooms.length === 0) notes.push('No room has a heater, so there is none to size.');
+  if (heatingRooms.some((room) => room.heating?.optimumStart))
+    notes.push(
+      'Sizes are found without early starts: the heaters follow their schedules as written.',
+    );
+  if (heatingRooms.some((room) => room.backupHeating))
+    notes.push('Sizes are those of the main heaters alone; backup heaters are off.');
   if (coolingRooms.length === 0)
     notes.push('No room is cooled. To size a chiller, give a temperature to cool to.');
   const to = (share: number) => share / (coolingRooms.length > 0 ? 2 : 1);

@@ -229,7 +229,7 @@ describe('the study', () => {
     const { rooms, notes } = study({ limits: [{ name: 'ice', limitC: 0 }] });
     expect(rooms[0].limits[0]).toMatchObject({ airAfterH: null, everReached: false });
     expect(notes.join(' ')).toContain(
-      'Room never falls to 0 °C in this weather: it would end at 2.0 °C.',
+      'Never down to 0 °C in this weather, however long: Room (ends at 2.0 °C).',
     );
   });
   test('heating off on 1 January starts from the turn of the year', () => {
