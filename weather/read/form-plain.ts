@@ -135,10 +135,19 @@ function preambleOf(head: Head, faults: FaultList) {
   return { site, year, stands };
 }
 
+/**
+ * The name as one cell: in quotation marks where a spreadsheet would part it, so that no part of it stands
+ * alone and is worked out as a formula; quotation marks within become single ones.
+ */
+function siteLine(name: string): string {
+  const line = `# site: ${name.replace(/[\r\n]+/g, ' ').replaceAll('"', "'")}`;
+  return /[,;\t]/.test(line) ? `"${line}"` : line;
+}
+
 /** A weather year as a plain table; `readWeather` gives back the same values to the last bit. */
 export function writePlainWeather(year: WeatherYear): string {
   const lines = [
-    `# site: ${year.site.name.replace(/[\r\n]+/g, ' ')}`,
+    siteLine(year.site.name),
     `# latitudeDeg: ${year.site.latitudeDeg}`,
     `# longitudeDeg: ${year.site.longitudeDeg}`,
     `# elevationM: ${year.site.elevationM}`,
