@@ -5,7 +5,9 @@ import { createHash } from 'node:crypto';
 import {
   type Accepted,
   createMappedReader,
+  extremeRun,
   type Finding,
+  type Inspection,
   inspectSeries,
   inspectTable,
   type MappedTable,
@@ -27,11 +29,16 @@ import { textOf } from './arguments.ts';
 import type { Given, Option } from './command.ts';
 import { need, WrongUsage } from './stop.ts';
 
+/** A year of the table; or the hottest or coldest twelve months in it. */
+export type Choice =
+  | YearChoice
+  | { readonly kind: 'extreme'; readonly which: 'hottest' | 'coldest' };
+
 export interface Reading {
   /** Path of the mapping's file. */
   readonly mapping?: string;
   readonly accepted?: Accepted;
-  readonly choice?: YearChoice;
+  readonly choice?: Choice;
 }
 
 export interface ReadTable {
@@ -49,7 +56,10 @@ export const readingOptions: Readonly<Record<string, Option>> = {
   mapping: { value: 'FILE', help: 'how the weather table is read, for tables of no known form' },
   accept: { value: 'IDS', help: 'repairs to make, as "weather" lists them: id,id … or all' },
   year: { value: 'YEAR', help: 'the year to take from a table of several' },
-  from: { value: 'DATE', help: 'twelve months from YYYY-MM-DD in place of a calendar year' },
+  from: {
+    value: 'DATE',
+    help: 'twelve months from YYYY-MM-DD, or the hottest or coldest twelve of the table',
+  },
   part: { help: 'take a table of less than a year; its first and last day are repeated outside' },
 };
 
@@ -69,7 +79,7 @@ export function acceptedOf(ids: readonly string[]): Accepted {
   return clean.includes('all') ? 'all' : new Set(clean);
 }
 
-function choiceOf(command: string, given: Given): YearChoice | null {
+function choiceOf(command: string, given: Given): Choice | null {
   const [year, from, part] = [textOf(given, 'year'), textOf(given, 'from'), given.part === true];
   if ([year !== null, from !== null, part].filter(Boolean).length > 1)
     throw new WrongUsage(`${command}: one of --year, --from and --part at a time.`);
@@ -82,9 +92,11 @@ function choiceOf(command: string, given: Given): YearChoice | null {
 }
 
 /** Twelve months from a day written YYYY-MM-DD. */
-export function fromDate(text: string, where: string): YearChoice {
+export function fromDate(text: string, where: string): Choice {
+  if (text === 'hottest' || text === 'coldest') return { kind: 'extreme', which: text };
   const found = /^(\d{4})-(\d\d)-(\d\d)$/.exec(text);
-  if (found === null) throw new WrongUsage(`${where}: found "${text}", expected YYYY-MM-DD.`);
+  if (found === null)
+    throw new WrongUsage(`${where}: found "${text}", expected YYYY-MM-DD, hottest or coldest.`);
   const [year, month, day] = found.slice(1).map(Number);
   return { kind: 'from', year, month, day };
 }
@@ -175,8 +187,19 @@ function mappedYear(
 ) {
   const table = mappedTable(data, file, site, mapping, onProgress);
   const inspection = need(inspectTable(table, reading.accepted ?? new Set()));
-  const year = need(yearOf(inspection, reading.choice ?? { kind: 'auto' }));
+  const year = need(yearOf(inspection, choiceIn(inspection, reading.choice, file)));
   return { year, findings: inspection.findings };
+}
+
+/** The hottest or coldest run is looked for in the table itself. */
+function choiceIn({ series }: Inspection, choice: Choice | undefined, file: string): YearChoice {
+  if (choice === undefined) return { kind: 'auto' };
+  if (choice.kind !== 'extreme') return choice;
+  const run = extremeRun(series, choice.which);
+  if (run) return run.choice;
+  throw new WrongUsage(
+    `--from ${choice.which}: ${file} holds no twelve months in a row with air temperature.`,
+  );
 }
 
 function mappedTable(

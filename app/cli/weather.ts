@@ -2,14 +2,20 @@ import { hourName } from '../../engine/index.ts';
 import {
   type ClimateSummary,
   climateSummary,
+  type DesignTable,
+  designTable,
   type Finding,
   type MonthClimate,
   type WeatherColumn,
   type WeatherYear,
+  writePlainWeather,
 } from '../../weather/index.ts';
+import { writeFileWhole } from '../disk/index.ts';
 import { textOf } from './arguments.ts';
 import type { Command } from './command.ts';
+import { need } from './stop.ts';
 import { figure, table, wrap } from './table.ts';
+import { changedYear } from './weather-changes.ts';
 import { makeMapping } from './weather-map.ts';
 import { readingOf, readingOptions, readTable, siteOf } from './weather-reading.ts';
 
@@ -60,6 +66,7 @@ function weatherDocument(
     hours: year.hours,
     columns: columnsOf(year),
     climate: climateSummary(year),
+    design: designTable(year),
     findings,
     notes: year.notes,
   };
@@ -80,6 +87,33 @@ Heating design: ${c(design.heating996C)} exceeded in 99.6 % of the hours, ${c(de
 Cooling design, dry bulb / wet bulb: ${c(design.cooling04C)} / ${c(design.wetBulbAtCooling04C)} exceeded in 0.4 % of the hours, ${c(design.cooling1C)} / ${c(design.wetBulbAtCooling1C)} in 1 %, ${c(design.cooling2C)} / ${c(design.wetBulbAtCooling2C)} in 2 %
 One year gives milder design values than a climate table of many years, which sizing for people who
 could come to harm should use.`;
+}
+
+function designText(
+  { coldest, hottest, winter, degreeDays }: DesignTable,
+  hours: number,
+  year: number,
+) {
+  const day = (index: number) => hourName(index * 24, hours, year).slice(5, 10);
+  const spells = (all: DesignTable['coldest']) =>
+    all
+      .map(
+        ({ days, firstDay, meanDryBulbC }) =>
+          `${days} d ${figure(meanDryBulbC, 1)} °C (from ${day(firstDay)})`,
+      )
+      .join(', ');
+  const bases = degreeDays.map(
+    ({ baseC, heatingKd, coolingKd }) =>
+      `${baseC} °C ${figure(heatingKd, 0)} / ${figure(coolingKd, 0)}`,
+  );
+  return [
+    `Coldest runs of days: ${spells(coldest)}`,
+    `Hottest runs of days: ${spells(hottest)}`,
+    `Winter design in the manner of ISO 15927-5, from this table alone: ${winter.map(({ days, spell, windMPerS }) => `${days} d ${figure(spell.meanDryBulbC, 1)} °C with ${figure(windMPerS, 1)} m/s`).join(', ')}`,
+    `Degree days below / above a base [K·d]: ${bases.join(', ')}`,
+  ]
+    .map((line) => wrap(line))
+    .join('\n');
 }
 
 function findingsText(findings: readonly Finding[]): string {
@@ -120,6 +154,7 @@ Form: ${form}. ${hours} hours, calendar of ${year}. SHA-256 ${sha256}`,
       rest.climate.months,
     ),
     climateText(rest.climate, hours, year),
+    designText(rest.design, hours, year),
     table<ColumnEntry>(
       [
         { head: 'Column', of: (row) => row.column },
@@ -151,6 +186,11 @@ export const weatherCommand: Command = {
       value: 'LAT,LON,M,UTC',
       help: 'the place, for tables that do not say (--site=-33.9,18.4,40,2)',
     },
+    changes: {
+      value: 'FILE',
+      help: 'monthly changes (JSON) by which the year is shifted and stretched',
+    },
+    plain: { value: 'OUT', help: 'also write the year as a plain weather table' },
     json: { help: 'one JSON document on standard output' },
   },
   examples: [
@@ -168,7 +208,14 @@ export const weatherCommand: Command = {
     const tell = (done: number) => terminal.progress(done, 'reading the table');
     const { sha256, year, findings } = await readTable(operand, site, reading, true, tell);
     terminal.endProgress();
-    const document = weatherDocument(operand, sha256, year, findings);
+    const changes = textOf(given, 'changes');
+    const shown = changes === null ? year : await changedYear(changes, year);
+    const plain = textOf(given, 'plain');
+    if (plain !== null) {
+      need(await writeFileWhole(plain, writePlainWeather(shown)));
+      terminal.note(`Written to ${plain}: the year as a plain weather table.`);
+    }
+    const document = weatherDocument(operand, sha256, shown, findings);
     terminal.print(given.json ? JSON.stringify(document, null, 2) : weatherText(document));
   },
 };

@@ -5,6 +5,7 @@ import { energySchema } from './schema-energy.ts';
 import { constructionSchema, glazingSchema, materialSchema } from './schema-fabric.ts';
 import { groundContactSchema } from './schema-ground.ts';
 import { economicsSchema, optionSchema } from './schema-options.ts';
+import { planSchema } from './schema-plan.ts';
 import { airExchangeSchema, airPathSchema, roomSchema } from './schema-room.ts';
 import { calendarSchema, profileSchema, scheduleSchema } from './schema-use.ts';
 import { between, share, text } from './schema-values.ts';
@@ -57,11 +58,11 @@ const weatherSourceSchema = z.strictObject({
   mapping: z.string().min(1).optional(),
   /** Repairs that were accepted for it, by their ids. */
   accept: z.array(z.string().min(1)).optional(),
-  /** The year taken from a table of several; or twelve months from a day. */
+  /** The year taken from a table of several; or twelve months from a day, or the hottest or coldest. */
   year: z.int().min(1900).max(2200).optional(),
   from: z
     .string()
-    .regex(/^\d{4}-\d\d-\d\d$/, 'a day as YYYY-MM-DD')
+    .regex(/^(\d{4}-\d\d-\d\d|hottest|coldest)$/, 'a day as YYYY-MM-DD, hottest or coldest')
     .optional(),
   /** Where the weather was taken, for tables that do not say; goes before what the table says. */
   site: z
@@ -92,6 +93,8 @@ export const projectSchema = z.strictObject({
   profiles: z.array(profileSchema).default([]),
   schedules: z.array(scheduleSchema).default([]),
   rooms: z.array(roomSchema).min(1),
+  /** The drawing the rooms were made from, where there is one. */
+  plan: planSchema.optional(),
   energy: energySchema.prefault({}),
   airPaths: z.array(airPathSchema).default([]),
   airExchanges: z.array(airExchangeSchema).default([]),

@@ -67,6 +67,7 @@ export class MappedRows {
     this.faults = faults;
     this.form = mapping.table;
     this.width = headings.length;
+    while (this.width > 0 && headings[this.width - 1] === '') this.width--;
     const place = (ref: ColumnRef) => placeOf(ref, headings, mapping.table.headingRow, faults);
     this.parts = mapping.stamp.parts.map((part) => ({ ...part, at: place(part.column) }));
     this.stamp = createStampReader(mapping.stamp, this.parts, this.form, siteUtcOffsetH);
@@ -165,11 +166,12 @@ export class MappedRows {
   private hasRightLength(cells: Cells, row: number): boolean {
     let filled = cells.count;
     while (filled > this.width && cellText(cells, filled - 1) === '') filled--;
-    if (filled <= this.width && cells.count >= this.least) return true;
+    // A cell too few may lack anywhere: what follows would slide into the wrong column.
+    if (filled <= this.width && cells.count >= Math.max(this.width, this.least)) return true;
     this.faults.row(
       row,
       'all',
-      `${filled} cells`,
+      `${Math.max(filled, Math.min(cells.count, this.width))} cells`,
       `${this.width} cells as in ${this.mapping.table.headingRow > 0 ? 'the headings' : 'the first row'}`,
       'Check the mark between cells, and the decimal mark.',
     );

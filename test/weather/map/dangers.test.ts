@@ -111,3 +111,12 @@ describe('a saved mapping', () => {
     );
   });
 });
+
+test('a row with a cell too few is refused: what follows would slide into the wrong column', () => {
+  const lines = text.split('\n');
+  lines[40] = lines[40].replace(/;[^;]*;/, ';');
+  const read = readMapped(lines.join('\n'), proposed(text), { file: 'roof.csv', site: hillside });
+  expect(read.ok ? '' : read.faults.map(faultText).join()).toBe(
+    'roof.csv, row 41, column all: found 6 cells, expected 7 cells as in the headings. Check the mark between cells, and the decimal mark.',
+  );
+});
