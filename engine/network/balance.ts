@@ -24,6 +24,8 @@ export interface Balance {
   readonly directedFrom: number;
   /** Enclosure members at boundaries: member, enclosure row, and the members it exchanges with. */
   readonly member: Int32Array;
+  /** Enclosure of every member. */
+  readonly memberEnclosure: Int32Array;
   /** Total and absolute factors of the sources into unknown nodes, by series. */
   readonly sourceSeries: Int32Array;
   readonly sourceSum: Float64Array;
@@ -108,6 +110,11 @@ export function compileBalance(stage: Stage, modes: ChainModes): Balance {
     drivenSign: Float64Array.from(scaled, (l) => (isFixed(driven.from[l]) ? 1 : -1)),
     directedFrom: driven.directedOffset,
     member: Int32Array.from(members),
+    memberEnclosure: enclosures.slot.map((_, m) => {
+      let e = 0;
+      while (enclosures.start[e + 1] <= m) e++;
+      return e;
+    }),
     sourceSeries: Int32Array.from(sums.keys()),
     sourceSum: Float64Array.from(sums.values(), (s) => s[0]),
     sourceAbs: Float64Array.from(sums.values(), (s) => s[1]),
@@ -174,7 +181,7 @@ export function addStageFlows(
     if (a >= rows && a < firstChain) through += Math.abs(q);
   }
   for (let k = 0; k < balance.member.length; k++) {
-    const q = memberGainW(stage, balance.member[k], x);
+    const q = memberGainW(stage, balance.member[k], balance.memberEnclosure[balance.member[k]], x);
     sum -= q;
     through += Math.abs(q);
   }
@@ -193,10 +200,8 @@ export function addStageFlows(
 }
 
 /** Net radiation that an enclosure member gains [W], from the linearised emissions. */
-function memberGainW(stage: Stage, m: number, x: Float64Array): number {
+function memberGainW(stage: Stage, m: number, e: number, x: Float64Array): number {
   const { start, slot, row, exchangeM2, slope, rest } = stage.enclosures;
-  let e = 0;
-  while (start[e + 1] <= m) e++;
   const own = slope[m] * x[slot[m]] + rest[m];
   let q = 0;
   for (let j = start[e]; j < start[e + 1]; j++) {

@@ -1,20 +1,21 @@
-// Blocks: unknowns that state-dependent laws tie together, such as the faces and the air of one room.
-// Slopes are judged and renewed block by block, so that a room in the sun does not cost the others.
+// Blocks: rows that the matrix couples, such as a room with its panes and plants, or an outer face by
+// itself. A stage solves and iterates block by block, each as often as it needs.
 
 import type { Enclosures } from './enclosures.ts';
-import type { StateLinks } from './laws.ts';
+import type { Layout } from './layout.ts';
+import type { StateLinks } from './links.ts';
 
 export interface Blocks {
   readonly count: number;
-  readonly ofLink: Int32Array;
-  readonly ofMember: Int32Array;
-  /** Links of block b: `links[linkStart[b]]` to `links[linkStart[b + 1] − 1]`; enclosures alike. */
+  /** Rows of block b: `rowStart[b]` to `rowStart[b + 1] − 1`; its links and units alike. */
+  readonly rowStart: Int32Array;
   readonly linkStart: Int32Array;
-  readonly links: Int32Array;
   readonly enclosureStart: Int32Array;
   readonly enclosures: Int32Array;
-  /** Lag of the slopes in the matrix at the last evaluation, largest of the block. */
-  readonly lag: Float64Array;
+  readonly unitStart: Int32Array;
+  readonly units: Int32Array;
+  /** 1 where laws or enclosures make the block depend on its state. */
+  readonly bends: Uint8Array;
 }
 
 function grouped(of: Int32Array, count: number): { start: Int32Array; list: Int32Array } {
@@ -29,56 +30,50 @@ function grouped(of: Int32Array, count: number): { start: Int32Array; list: Int3
   return { start, list };
 }
 
-/** @param rows slots below are unknowns */
-export function compileBlocks(laws: StateLinks, enclosures: Enclosures, rows: number): Blocks {
-  const parent = Int32Array.from({ length: rows + 1 }, (_, i) => i);
-  const find = (i: number): number => {
-    let r = i;
-    while (parent[r] !== r) {
-      parent[r] = parent[parent[r]];
-      r = parent[r];
-    }
-    return r;
-  };
-  const { from, to, count } = laws;
-  for (let l = 0; l < count; l++) {
-    if (from[l] < rows && to[l] < rows) parent[find(from[l])] = find(to[l]);
-  }
-  const firstRow = (e: number) => {
-    for (let m = enclosures.start[e]; m < enclosures.start[e + 1]; m++) {
-      if (enclosures.slot[m] < rows) return enclosures.slot[m];
-    }
-    return rows; // nothing but boundaries
-  };
-  for (let e = 0; e < enclosures.count; e++) {
-    const first = firstRow(e);
-    for (let m = enclosures.start[e]; m < enclosures.start[e + 1]; m++) {
-      if (enclosures.slot[m] < rows) parent[find(enclosures.slot[m])] = find(first);
-    }
-  }
-  const number = new Map<number, number>();
-  const blockOf = (slot: number) => {
-    const root = find(Math.min(slot, rows));
-    const known = number.get(root) ?? number.size;
-    number.set(root, known);
-    return known;
-  };
-  const ofLink = Int32Array.from(from, (a, l) => blockOf(a < rows ? a : to[l]));
-  const ofEnclosure = Int32Array.from({ length: enclosures.count }, (_, e) => blockOf(firstRow(e)));
-  const links = grouped(ofLink, number.size);
-  const rooms = grouped(ofEnclosure, number.size);
-  const ofMember = new Int32Array(enclosures.slot.length);
-  ofEnclosure.forEach((b, e) => {
-    ofMember.fill(b, enclosures.start[e], enclosures.start[e + 1]);
+/** Block of each row. */
+export function blockOfRow(layout: Layout): Int32Array {
+  const { blockStart } = layout.order;
+  const of = new Int32Array(layout.rows);
+  for (let b = 0; b + 1 < blockStart.length; b++) of.fill(b, blockStart[b], blockStart[b + 1]);
+  return of;
+}
+
+export function compileBlocks(layout: Layout, links: StateLinks, enclosures: Enclosures): Blocks {
+  const { rows, order, rowOfUnit } = layout;
+  const last = order.blockStart.length - 1;
+  const count = last + 1;
+  const of = blockOfRow(layout);
+  const known = (slot: number) => slot < rows;
+  // What lies between boundaries alone makes a last block without rows.
+  const linkBlock = links.from.map((a, l) => {
+    if (known(a)) return of[a];
+    return known(links.to[l]) ? of[links.to[l]] : last;
   });
+  const enclosureBlock = Int32Array.from({ length: enclosures.count }, (_, e) => {
+    const members = enclosures.slot.subarray(enclosures.start[e], enclosures.start[e + 1]);
+    const row = members.find(known);
+    return row === undefined ? last : of[row];
+  });
+  const byLink = grouped(linkBlock, count);
+  const byEnclosure = grouped(enclosureBlock, count);
+  const byUnit = grouped(
+    rowOfUnit.map((row) => of[row]),
+    count,
+  );
+  const bends = new Uint8Array(count);
+  for (let b = 0; b < count; b++) {
+    const hasLinks = byLink.start[b + 1] > byLink.start[b];
+    const hasEnclosures = byEnclosure.start[b + 1] > byEnclosure.start[b];
+    bends[b] = hasLinks || hasEnclosures ? 1 : 0;
+  }
   return {
-    count: number.size,
-    ofLink,
-    ofMember,
-    linkStart: links.start,
-    links: links.list,
-    enclosureStart: rooms.start,
-    enclosures: rooms.list,
-    lag: new Float64Array(number.size),
+    count,
+    rowStart: Int32Array.from([...order.blockStart, rows]),
+    linkStart: byLink.start,
+    enclosureStart: byEnclosure.start,
+    enclosures: byEnclosure.list,
+    unitStart: byUnit.start,
+    units: byUnit.list,
+    bends,
   };
 }

@@ -3,7 +3,7 @@
 
 import { Matrix } from 'ml-matrix';
 import { stefanBoltzmann, zeroC } from './law-radiant.ts';
-import { compileLaws, evaluateLaws } from './laws.ts';
+import { compileLinks, evaluateLinks } from './links.ts';
 import type { Network } from './problem.ts';
 
 export interface DenseNetwork {
@@ -47,8 +47,8 @@ export function denseNetwork(
     put(b, a, -byA);
   };
   const own = Int32Array.from({ length: n }, (_, i) => i);
-  const laws = compileLaws(network, own, n);
-  evaluateLaws(laws, tempC, series, step);
+  const laws = compileLinks(network, own, n, () => 0);
+  evaluateLinks(laws, 0, laws.count, tempC, series, step);
   network.links.forEach((group, g) => {
     for (let l = 0; l < group.from.length; l++) {
       const a = group.from[l];
@@ -59,7 +59,7 @@ export function denseNetwork(
         const scaled = group.conductanceWPerK[l] * series[group.series[l]];
         flow(a, b, scaled, scaled);
       } else {
-        const at = laws.offset[g] + l;
+        const at = laws.place[laws.offset[g] + l];
         flow(a, b, laws.slopeFrom[at], laws.slopeTo[at]);
       }
     }

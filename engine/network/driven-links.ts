@@ -117,17 +117,15 @@ export function compileDriven(
 
 /**
  * Sets the conductances of a stage, brings the matrix entries `a` up to them and marks the rows.
- * @returns whether any changed
  */
 export function driveLinks(
   links: DrivenLinks,
   seriesNow: Float64Array,
   a: Float64Array,
   dirty: Uint8Array,
-): boolean {
+): void {
   const { driven, rateWPerK, series, conductanceWPerK, from, to } = links;
   const { ownFrom, ownTo, atFrom, atTo } = links;
-  let any = false;
   for (let k = 0; k < driven.length; k++) {
     const l = driven[k];
     const g = rateWPerK[l] * seriesNow[series[l]];
@@ -140,9 +138,7 @@ export function driveLinks(
     a[atTo[l]] -= change;
     dirty[from[l]] = 1;
     dirty[to[l]] = 1;
-    any = true;
   }
-  return any;
 }
 
 /** Adds the conductances in use to the matrix entries `a`, those of constant rate apart. */

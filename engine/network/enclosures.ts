@@ -79,10 +79,10 @@ export function compileEnclosures(layout: Layout, lu: SparseLu, spare: number): 
   };
 }
 
-/** Emission and its slope at state `x`. */
-export function evaluateEmission(enclosures: Enclosures, x: Float64Array): void {
-  const { slot, free, slopeNow, emissionWPerM2 } = enclosures;
-  for (let m = 0; m < slot.length; m++) {
+/** Emission and its slope at state `x`, of enclosure `e`. */
+export function evaluateEmission(enclosures: Enclosures, e: number, x: Float64Array): void {
+  const { start, slot, free, slopeNow, emissionWPerM2 } = enclosures;
+  for (let m = start[e]; m < start[e + 1]; m++) {
     const t = x[slot[m]] + zeroC;
     const cube = stefanBoltzmann * t * t * t;
     emissionWPerM2[m] = cube * t;
@@ -127,18 +127,21 @@ export function renewEnclosure(
   }
 }
 
-/** Adds what the linearisation at state `x` leaves on the right-hand side. */
-export function addEnclosureRest(enclosures: Enclosures, x: Float64Array, b: Float64Array): void {
-  const { count, start, slot, row, exchangeM2, rowSumM2, slope, emissionWPerM2, rest } = enclosures;
-  for (let m = 0; m < slot.length; m++) rest[m] = emissionWPerM2[m] - slope[m] * x[slot[m]];
-  for (let e = 0; e < count; e++) {
-    const first = start[e];
-    const n = start[e + 1] - first;
-    for (let i = 0; i < n; i++) {
-      const r = row[first + i];
-      let sum = -rowSumM2[first + i] * rest[first + i];
-      for (let j = 0; j < n; j++) sum += exchangeM2[r + j] * rest[first + j];
-      b[slot[first + i]] += sum;
-    }
+/** Adds what the linearisation of enclosure `e` at state `x` leaves on the right-hand side. */
+export function addEnclosureRest(
+  enclosures: Enclosures,
+  e: number,
+  x: Float64Array,
+  b: Float64Array,
+): void {
+  const { start, slot, row, exchangeM2, rowSumM2, slope, emissionWPerM2, rest } = enclosures;
+  const first = start[e];
+  const n = start[e + 1] - first;
+  for (let m = first; m < first + n; m++) rest[m] = emissionWPerM2[m] - slope[m] * x[slot[m]];
+  for (let i = 0; i < n; i++) {
+    const r = row[first + i];
+    let sum = -rowSumM2[first + i] * rest[first + i];
+    for (let j = 0; j < n; j++) sum += exchangeM2[r + j] * rest[first + j];
+    b[slot[first + i]] += sum;
   }
 }

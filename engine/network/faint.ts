@@ -15,8 +15,10 @@ export interface FaintLinks {
   readonly a: Int32Array;
   readonly b: Int32Array;
   readonly wPerK: Float64Array;
-  /** Largest share of an exchange in its ends' own entries. */
-  share: number;
+  /** 1/own entry at the lighter end: how far 1 W moves it [K/W]. */
+  readonly weight: Float64Array;
+  /** Exchange in use, from A to B [W]. */
+  readonly flowW: Float64Array;
 }
 
 /** Chains between two unknowns that count as faint in a stage of `stageS`. */
@@ -38,7 +40,11 @@ export function faintChains(
   return faint;
 }
 
-export function compileFaint(layout: Layout, factors: ChainFactors): FaintLinks {
+export function compileFaint(
+  layout: Layout,
+  factors: ChainFactors,
+  lightness: Float64Array,
+): FaintLinks {
   const list: number[] = [];
   layout.faint.forEach((is, c) => {
     if (is === 1) list.push(c);
@@ -48,16 +54,53 @@ export function compileFaint(layout: Layout, factors: ChainFactors): FaintLinks 
     a: Int32Array.from(list, (c) => layout.chainSlotA[c]),
     b: Int32Array.from(list, (c) => layout.chainSlotB[c]),
     wPerK: Float64Array.from(list, (c) => factors.exchange[c]),
-    share: 0,
+    weight: Float64Array.from(list, (c) =>
+      Math.max(lightness[layout.chainSlotA[c]], lightness[layout.chainSlotB[c]]),
+    ),
+    flowW: new Float64Array(list.length),
   };
 }
 
-/** Adds the exchange at state `x` to the right-hand side. */
-export function addFaint(faint: FaintLinks, x: Float64Array, b: Float64Array): void {
-  const { count, a, b: other, wPerK } = faint;
+/** Sets all exchanges to those at state `x` and sums them at the rows. */
+export function setFaint(faint: FaintLinks, x: Float64Array, sumW: Float64Array): void {
+  const { count, a, b, wPerK, flowW } = faint;
   for (let k = 0; k < count; k++) {
-    const q = wPerK[k] * (x[a[k]] - x[other[k]]);
-    b[a[k]] -= q;
-    b[other[k]] += q;
+    sumW[a[k]] = 0;
+    sumW[b[k]] = 0;
   }
+  for (let k = 0; k < count; k++) {
+    const q = wPerK[k] * (x[a[k]] - x[b[k]]);
+    flowW[k] = q;
+    sumW[a[k]] -= q;
+    sumW[b[k]] += q;
+  }
+}
+
+/**
+ * Renews the exchanges that state `x` has moved by more than `limitK` at either end, and marks the blocks
+ * that have to be solved again.
+ * @returns whether there are any
+ */
+export function renewFaint(
+  faint: FaintLinks,
+  x: Float64Array,
+  sumW: Float64Array,
+  limitK: number,
+  blockOf: Int32Array,
+  again: Uint8Array,
+): boolean {
+  const { count, a, b, wPerK, flowW, weight } = faint;
+  let found = false;
+  for (let k = 0; k < count; k++) {
+    const q = wPerK[k] * (x[a[k]] - x[b[k]]);
+    const change = q - flowW[k];
+    if (Math.abs(change) * weight[k] <= limitK) continue;
+    flowW[k] = q;
+    sumW[a[k]] -= change;
+    sumW[b[k]] += change;
+    again[blockOf[a[k]]] = 1;
+    again[blockOf[b[k]]] = 1;
+    found = true;
+  }
+  return found;
 }

@@ -27,9 +27,6 @@ export interface Layout {
   readonly rowOfUnit: Int32Array;
   readonly chainSlotA: Int32Array;
   readonly chainSlotB: Int32Array;
-  /** First row that changes with the drivers, and first that changes with the state or the plants. */
-  readonly firstDriven: number;
-  readonly firstState: number;
 }
 
 /** The couplings between unknowns (nodes outside chains first, then units), and how they change. */
@@ -61,10 +58,6 @@ function couplings(
   for (let c = 0; c < chains.count; c++) {
     const [a, b] = [vertex[chains.endA[c]], vertex[chains.endB[c]]];
     if (faint[c] === 0) couple(a, b, 0);
-    else {
-      couple(a, -1, 2);
-      couple(b, -1, 2);
-    }
   }
   for (const { nodes: members } of network.enclosures) {
     for (const a of members) for (const b of members) couple(vertex[a], vertex[b], 2);
@@ -117,16 +110,11 @@ export function layOut(
   const slotOfNode = new Int32Array(nodeCount);
   const nodeOfSlot = new Int32Array(slotCount).fill(-1);
   const rowOfUnit = new Int32Array(units.length);
-  let firstDriven = rows;
-  let firstState = rows;
   order.sequence.forEach((v, row) => {
     if (v < unknownNodes.length) {
       slotOfNode[unknownNodes[v]] = row;
       nodeOfSlot[row] = unknownNodes[v];
     } else rowOfUnit[v - unknownNodes.length] = row;
-    const level = v < unknownNodes.length ? graph.level[v] : 2;
-    if (level > 0) firstDriven = Math.min(firstDriven, row);
-    if (level > 1) firstState = Math.min(firstState, row);
   });
   fixedNodes.forEach((v, i) => {
     slotOfNode[v] = rows + i;
@@ -152,8 +140,6 @@ export function layOut(
     rowOfUnit,
     chainSlotA: chains.endA.map((v) => slotOfNode[v]),
     chainSlotB: chains.endB.map((v) => slotOfNode[v]),
-    firstDriven,
-    firstState,
   };
 }
 

@@ -1,10 +1,19 @@
 // The march: a Problem through all its steps, with start-up, records, and word on how it went.
 
 import { assertSound } from './check.ts';
+import { mostSteps } from './kernel/host.ts';
 import type { Method, Outcome, Problem, Run } from './problem.ts';
-import { createRecorder, openRecorder } from './recorder.ts';
+import { createRecorder } from './recorder.ts';
 import { steadyState } from './steady.ts';
-import { advance, createStepper, placeState, readState, type Stepper } from './stepper.ts';
+import {
+  beginRecords,
+  createStepper,
+  enterKernel,
+  placeState,
+  readState,
+  type Stepper,
+  takeSteps,
+} from './stepper.ts';
 
 /** How far the march is. */
 export interface Progress {
@@ -15,9 +24,6 @@ export interface Progress {
   /** Passes of the start-up done. */
   readonly pass: number;
 }
-
-/** Steps between two reports. */
-const reportEvery = 200;
 
 interface StartUp {
   readonly passes: number;
@@ -46,17 +52,14 @@ function* startUp(stepper: Stepper): Generator<Progress, StartUp> {
   let pass = 0;
   while (pass < maxPasses && driftK > toleranceK) {
     readState(stepper, before);
-    for (let k = 0; k < spanSteps; k++) {
-      if (k % reportEvery === 0) yield { phase: 'start-up', step: k, stepCount: spanSteps, pass };
-      const failedSlot = advance(stepper, first + k, null);
-      if (failedSlot >= 0) {
-        return {
-          passes: pass,
-          steps: pass * spanSteps + k,
-          driftK,
-          failedSlot,
-          failedStep: first + k,
-        };
+    for (let k = 0; k < spanSteps; k += mostSteps) {
+      yield { phase: 'start-up', step: k, stepCount: spanSteps, pass };
+      const count = Math.min(mostSteps, spanSteps - k);
+      const done = takeSteps(stepper, first + k, count, null);
+      if (done < count) {
+        const { failedSlot } = stepper;
+        const steps = pass * spanSteps + k + done;
+        return { passes: pass, steps, driftK, failedSlot, failedStep: first + k + done };
       }
     }
     readState(stepper, after);
@@ -71,7 +74,7 @@ function* startUp(stepper: Stepper): Generator<Progress, StartUp> {
 }
 
 /**
- * The march as a generator that pauses every few hundred steps, so that a worker can report and take
+ * The march as a generator that pauses every few hundred steps (`mostSteps`), so that a worker can report and take
  * in a cancel. `next(false)` stops it: the Run then holds what was computed.
  */
 export function* marchSteps(
@@ -82,6 +85,7 @@ export function* marchSteps(
   const stepper = createStepper(problem, method);
   const { layout, stage } = stepper;
   const recorder = createRecorder(problem, stage);
+  if (method.kernel) enterKernel(stepper, recorder, method.kernel);
   const nodeName = (slot: number) => {
     const node = layout.nodeOfSlot[slot];
     return node >= 0 ? problem.network.nodeNames[node] : 'a plant';
@@ -106,29 +110,21 @@ export function* marchSteps(
   else if (begun.failedSlot >= 0) {
     outcome = { kind: 'diverged', atStep: begun.failedStep, node: nodeName(begun.failedSlot) };
   } else {
-    stepper.iterations = 0;
-    stepper.unconvergedSteps = 0;
-    stepper.worstBalance = 0;
-    openRecorder(recorder, stage, stepper.modes, stepper.x2);
-    for (let k = 0; k < problem.stepCount; k++) {
-      if (k % reportEvery === 0) {
-        const go = yield {
-          phase: 'run',
-          step: k,
-          stepCount: problem.stepCount,
-          pass: begun.passes,
-        };
-        if (go === false) {
-          outcome = { kind: 'stopped', atStep: k };
-          break;
-        }
-      }
-      const failed = advance(stepper, k, recorder);
-      if (failed >= 0) {
-        outcome = { kind: 'diverged', atStep: k, node: nodeName(failed) };
+    beginRecords(stepper, recorder);
+    const { stepCount } = problem;
+    for (let k = 0; k < stepCount; k += mostSteps) {
+      const go = yield { phase: 'run', step: k, stepCount, pass: begun.passes };
+      if (go === false) {
+        outcome = { kind: 'stopped', atStep: k };
         break;
       }
-      steps++;
+      const count = Math.min(mostSteps, stepCount - k);
+      const done = takeSteps(stepper, k, count, recorder);
+      steps += done;
+      if (done < count) {
+        outcome = { kind: 'diverged', atStep: k + done, node: nodeName(stepper.failedSlot) };
+        break;
+      }
     }
   }
   const finalC = new Float64Array(problem.network.nodeNames.length);

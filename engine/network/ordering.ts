@@ -18,6 +18,8 @@ export interface Late {
 export interface Order {
   /** Unknown at each place of the order. */
   readonly sequence: Int32Array;
+  /** Rows that hang together stand together: group b from `blockStart[b]` to `blockStart[b + 1] − 1`. */
+  readonly blockStart: Int32Array;
   /** For each place, the places after it that it is coupled to when its turn comes, ascending. */
   readonly upper: readonly Int32Array[];
 }
@@ -83,8 +85,42 @@ export function eliminationOrder(graph: Graph): Order {
   // A plant whose sensor and delivery never hang together comes last; its pivot shows as zero later.
   for (let i = 0; i < n; i++) if (gone[i] === 0) eliminate(i);
 
+  const { order, blockStart } = together(graph, sequence);
   const place = new Int32Array(n);
-  for (let p = 0; p < n; p++) place[sequence[p]] = p;
-  const upper = coupled.map((c) => Int32Array.from(c, (j) => place[j]).sort());
-  return { sequence, upper };
+  const moved = Int32Array.from(order, (p) => sequence[p]);
+  for (let p = 0; p < n; p++) place[moved[p]] = p;
+  const upper = Array.from(order, (p) => Int32Array.from(coupled[p], (j) => place[j]).sort());
+  return { sequence: moved, blockStart, upper };
+}
+
+/** Places sorted by the part of the graph that they belong to, parts in the order of their first place. */
+function together(
+  graph: Graph,
+  sequence: Int32Array,
+): { order: Int32Array; blockStart: Int32Array } {
+  const n = sequence.length;
+  const part = new Int32Array(n).fill(-1);
+  let parts = 0;
+  for (const first of sequence) {
+    if (part[first] >= 0) continue;
+    part[first] = parts;
+    const waiting = [first];
+    for (let i = waiting.pop(); i !== undefined; i = waiting.pop()) {
+      for (const j of graph.neighbours[i]) {
+        if (part[j] >= 0) continue;
+        part[j] = parts;
+        waiting.push(j);
+      }
+    }
+    parts++;
+  }
+  const blockStart = new Int32Array(parts + 1);
+  for (const p of part) blockStart[p + 1]++;
+  for (let b = 0; b < parts; b++) blockStart[b + 1] += blockStart[b];
+  const next = blockStart.slice(0, parts);
+  const order = new Int32Array(n);
+  sequence.forEach((v, p) => {
+    order[next[part[v]]++] = p;
+  });
+  return { order, blockStart };
 }

@@ -76,6 +76,22 @@ export interface RadiantLinks {
   readonly exchangeAreaM2: Float64Array;
 }
 
+/**
+ * A conductance looked up: straight in between over the mean of the ends (rows) and T_to − T_from
+ * (columns), the table's edge beyond it. G = factor · values[row · columns + column].
+ */
+export interface ConductanceTable {
+  /** W/K for 1 of `values`: an area where these are W/(m²·K). */
+  readonly factor: number;
+  readonly values: Float64Array;
+  readonly rows: number;
+  readonly columns: number;
+  readonly firstMeanC: number;
+  readonly rowStepK: number;
+  readonly firstDifferenceK: number;
+  readonly columnStepK: number;
+}
+
 /** Any other law: conductance from the end temperatures and the step; slopes are taken numerically. */
 export interface FunctionLinks {
   readonly law: 'function';
@@ -83,6 +99,8 @@ export interface FunctionLinks {
   readonly to: Int32Array;
   /** Conductance [W/K] of link k of this group, 0 or more. */
   readonly conductanceWPerK: (k: number, fromC: number, toC: number, step: number) => number;
+  /** Link k as a table, where it is one: the same law, looked up without a call. */
+  readonly tables?: readonly (ConductanceTable | null)[];
 }
 
 export type LinkGroup =
@@ -207,6 +225,8 @@ export interface Method {
   /** Largest change of any node in the last iteration of a step [K]. */
   readonly toleranceK: number;
   readonly maxIterations: number;
+  /** The WebAssembly kernel (dist/kernel.wasm), where there is one: same results, several times as fast. */
+  readonly kernel?: Uint8Array;
 }
 
 export type Outcome =

@@ -84,7 +84,7 @@ export function compileTerms(problem: Problem, stage: Stage): { watch: Watch; te
         if (group.law === 'scaled') {
           return [['driven', stage.driven.offset[of.group] + of.index, sign]];
         }
-        return [['law', stage.laws.offset[of.group] + of.index, sign]];
+        return [['law', stage.laws.place[stage.laws.offset[of.group] + of.index], sign]];
       }
       case 'directed':
         return [['driven', stage.driven.directedOffset + of.index, sign]];

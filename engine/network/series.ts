@@ -17,12 +17,16 @@ export interface Readings {
   readonly series: readonly Series[];
   readonly held: Int32Array;
   readonly moving: Int32Array;
+  /** 1 where a moving series is linear, 0 where it ramps. */
+  readonly isLinear: Int32Array;
 }
 
 export function compileReadings(series: readonly Series[]): Readings {
   const pick = (isHeld: boolean) =>
     Int32Array.from(series.keys()).filter((i) => (series[i].hold === 'step') === isHeld);
-  return { series, held: pick(true), moving: pick(false) };
+  const moving = pick(false);
+  const isLinear = moving.map((i) => (series[i].hold === 'linear' ? 1 : 0));
+  return { series, held: pick(true), moving, isLinear };
 }
 
 /** Reads the held series of a step into `out`; true where any differs from what was there. */

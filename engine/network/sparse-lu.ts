@@ -67,12 +67,12 @@ export function entryOf(lu: SparseLu, row: number, col: number): number {
 }
 
 /**
- * Factors the dirty rows of `a` (same pattern) and what depends on them. Gives the first row whose pivot
+ * Factors the dirty rows of `a` (same pattern) from `from` to `to` − 1 and what depends on them. Gives the first row whose pivot
  * vanished against the row's own size, which stays dirty, or −1.
  */
-export function factorDirty(lu: SparseLu, a: Float64Array): number {
-  const { size, rowStart, column, diagonal, values, inverse, work, parent, dirty } = lu;
-  for (let i = 0; i < size; i++) {
+export function factorDirty(lu: SparseLu, a: Float64Array, from: number, to: number): number {
+  const { rowStart, column, diagonal, values, inverse, work, parent, dirty } = lu;
+  for (let i = from; i < to; i++) {
     if (dirty[i] === 0) continue;
     const begin = rowStart[i];
     const end = rowStart[i + 1];

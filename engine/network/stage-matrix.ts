@@ -7,8 +7,7 @@ import {
   evaluateEmission,
   renewEnclosure,
 } from './enclosures.ts';
-import { addFaint } from './faint.ts';
-import { evaluateLaws } from './laws.ts';
+import { evaluateLinks } from './links.ts';
 import { factorDirty } from './sparse-lu.ts';
 import type { Stage } from './stage.ts';
 import { assembleUnits, coolSet, heatSet, off, type UnitsState } from './units-state.ts';
@@ -28,91 +27,93 @@ export function buildMatrix(stage: Stage): void {
   assembleEnclosures(enclosures, matrix);
   stage.units.inMatrix.fill(255);
   lu.dirty.fill(1);
-  stage.stale = true;
 }
 
-/** Renews the slopes of a block's links in matrix and rests. */
-function renewLinks(stage: Stage, block: number): void {
-  const { blocks, laws, slopeFrom, slopeTo, rest, restSum, at, matrix, lu } = stage;
+/** Renews the slope of link l in matrix and rest. */
+function renewLink(stage: Stage, l: number): void {
+  const { laws, slopeFrom, slopeTo, rest, restSum, at, matrix, lu } = stage;
   const { ownFrom, ownTo, atFrom, atTo } = stage.lawEntry;
-  const { from, to, flowW, freeFrom, freeTo } = laws;
-  const { dirty } = lu;
-  for (let k = blocks.linkStart[block]; k < blocks.linkStart[block + 1]; k++) {
-    const l = blocks.links[k];
-    const f = from[l];
-    const t = to[l];
-    const sf = laws.slopeFrom[l] * freeFrom[l];
-    const st = laws.slopeTo[l] * freeTo[l];
-    const byFrom = sf - slopeFrom[l];
-    const byTo = st - slopeTo[l];
-    matrix[ownFrom[l]] += byFrom;
-    matrix[atFrom[l]] -= byTo;
-    matrix[ownTo[l]] += byTo;
-    matrix[atTo[l]] -= byFrom;
-    slopeFrom[l] = sf;
-    slopeTo[l] = st;
-    const q = flowW[l] - sf * at[f] + st * at[t];
-    const change = q - rest[l];
-    rest[l] = q;
-    restSum[f] -= change;
-    restSum[t] += change;
-    dirty[f] = 1;
-    dirty[t] = 1;
-  }
+  const f = laws.from[l];
+  const t = laws.to[l];
+  const sf = laws.slopeFrom[l];
+  const st = laws.slopeTo[l];
+  const byFrom = sf - slopeFrom[l];
+  const byTo = st - slopeTo[l];
+  matrix[ownFrom[l]] += byFrom;
+  matrix[atFrom[l]] -= byTo;
+  matrix[ownTo[l]] += byTo;
+  matrix[atTo[l]] -= byFrom;
+  slopeFrom[l] = sf;
+  slopeTo[l] = st;
+  const q = laws.flowW[l] - sf * at[f] + st * at[t];
+  const change = q - rest[l];
+  rest[l] = q;
+  restSum[f] -= change;
+  restSum[t] += change;
+  lu.dirty[f] = 1;
+  lu.dirty[t] = 1;
+}
+
+/** How much of its nodes' own entries the slope of link l in the matrix is wrong by. */
+function lagOf(stage: Stage, l: number): number {
+  const { laws, slopeFrom, slopeTo, linkWeight } = stage;
+  const byFrom = Math.abs(laws.slopeFrom[l] - slopeFrom[l]);
+  const byTo = Math.abs(laws.slopeTo[l] - slopeTo[l]);
+  return Math.max(byFrom, byTo) * linkWeight[l];
 }
 
 /**
- * Evaluates all laws at `at` and sums what their linearisations leave, with the slopes in the matrix;
- * slopes of a block that lag by more than `limit` (as a share of their nodes' own entries) are renewed.
+ * Evaluates the laws of a block at `at` and sums what their linearisations leave, with the slopes in the
+ * matrix. Where one of these lags by more than `limit` (as a share of its nodes' own entries), all that
+ * lag by more than a quarter of it are renewed.
  * @returns the largest lag that stays
  */
-export function linearise(stage: Stage, series: Float64Array, step: number, limit: number): number {
-  const { laws, slopeFrom, slopeTo, rest, restSum, at, enclosures, blocks } = stage;
-  const { linkWeight, memberWeight } = stage;
-  evaluateLaws(laws, at, series, step);
-  restSum.fill(0);
-  addFaint(stage.faint, at, restSum);
-  const { from, to, flowW, count, freeFrom, freeTo } = laws;
-  const nowFrom = laws.slopeFrom;
-  const nowTo = laws.slopeTo;
-  const { lag, ofLink, ofMember } = blocks;
-  lag.fill(0);
-  for (let l = 0; l < count; l++) {
+export function linearise(
+  stage: Stage,
+  block: number,
+  series: Float64Array,
+  step: number,
+  limit: number,
+): number {
+  const { laws, slopeFrom, slopeTo, rest, restSum, at, enclosures, blocks, memberWeight } = stage;
+  const first = blocks.linkStart[block];
+  const last = blocks.linkStart[block + 1];
+  evaluateLinks(laws, first, last, at, series, step);
+  for (let i = blocks.rowStart[block]; i < blocks.rowStart[block + 1]; i++) restSum[i] = 0;
+  const { from, to, flowW } = laws;
+  let worst = 0;
+  for (let l = first; l < last; l++) {
     const f = from[l];
     const t = to[l];
-    const sf = slopeFrom[l];
-    const st = slopeTo[l];
-    const q = flowW[l] - sf * at[f] + st * at[t];
+    const q = flowW[l] - slopeFrom[l] * at[f] + slopeTo[l] * at[t];
     rest[l] = q;
     restSum[f] -= q;
     restSum[t] += q;
-    const byFrom = Math.abs(nowFrom[l] * freeFrom[l] - sf);
-    const byTo = Math.abs(nowTo[l] * freeTo[l] - st);
-    const share = Math.max(byFrom, byTo) * linkWeight[l];
-    if (!(share <= lag[ofLink[l]])) lag[ofLink[l]] = share;
+    const lag = lagOf(stage, l);
+    if (lag > worst) worst = lag;
   }
-  if (enclosures.slot.length > 0) {
-    const { slopeNow, slope } = enclosures;
-    evaluateEmission(enclosures, at);
-    for (let m = 0; m < slope.length; m++) {
-      const share = Math.abs(slopeNow[m] - slope[m]) * memberWeight[m];
-      if (share > lag[ofMember[m]]) lag[ofMember[m]] = share;
+  const { slopeNow, slope, start } = enclosures;
+  const firstEnclosure = blocks.enclosureStart[block];
+  const lastEnclosure = blocks.enclosureStart[block + 1];
+  for (let k = firstEnclosure; k < lastEnclosure; k++) {
+    const e = blocks.enclosures[k];
+    evaluateEmission(enclosures, e, at);
+    for (let m = start[e]; m < start[e + 1]; m++) {
+      const lag = Math.abs(slopeNow[m] - slope[m]) * memberWeight[m];
+      if (lag > worst) worst = lag;
     }
   }
-  let worst = 0;
-  for (let b = 0; b < blocks.count; b++) {
-    if (lag[b] <= limit) {
-      if (lag[b] > worst) worst = lag[b];
-      continue;
-    }
-    renewLinks(stage, b);
-    for (let k = blocks.enclosureStart[b]; k < blocks.enclosureStart[b + 1]; k++) {
+  if (worst > limit) {
+    const quarter = limit / 4;
+    worst = Math.max(quarter, 0);
+    for (let l = first; l < last; l++) if (lagOf(stage, l) > quarter) renewLink(stage, l);
+    for (let k = firstEnclosure; k < lastEnclosure; k++) {
       renewEnclosure(enclosures, blocks.enclosures[k], stage.matrix, stage.lu.dirty);
     }
-    stage.stale = true;
   }
-  if (enclosures.slot.length > 0) addEnclosureRest(enclosures, at, restSum);
-  stage.loaded = true;
+  for (let k = firstEnclosure; k < lastEnclosure; k++) {
+    addEnclosureRest(enclosures, blocks.enclosures[k], at, restSum);
+  }
   return worst;
 }
 
@@ -132,19 +133,18 @@ function giveWay(units: UnitsState, u: number): void {
 }
 
 /**
- * Brings plant rows and factors up to date.
+ * Brings plant rows and factors of a block up to date.
  * @returns row without a pivot, or −1 when all is well
  */
-export function refresh(stage: Stage): number {
-  const { lu, matrix, units } = stage;
+export function refresh(stage: Stage, block: number): number {
+  const { lu, matrix, units, blocks } = stage;
+  const { unitStart, rowStart } = blocks;
+  const first = unitStart[block];
+  const last = unitStart[block + 1];
   for (let tries = 0; ; tries++) {
-    if (assembleUnits(units, matrix, lu.dirty)) stage.stale = true;
-    if (!stage.stale) return -1;
-    const failed = factorDirty(lu, matrix);
-    if (failed < 0) {
-      stage.stale = false;
-      return -1;
-    }
+    if (last > first) assembleUnits(units, blocks.units, first, last, matrix, lu.dirty);
+    const failed = factorDirty(lu, matrix, rowStart[block], rowStart[block + 1]);
+    if (failed < 0) return -1;
     const u = units.row.indexOf(failed);
     const holds = u >= 0 && (units.mode[u] === heatSet || units.mode[u] === coolSet);
     if (!holds || tries > units.count) return failed;

@@ -6,14 +6,14 @@
 //   flow = law(state) + slope in matrix · (change), which balances exactly and differs from the law
 // by (slope error · last change), with the last change below the tolerance.
 
-import { type Blocks, compileBlocks } from './blocks.ts';
+import { type Blocks, blockOfRow, compileBlocks } from './blocks.ts';
 import { type ChainFactors, factorChains } from './chain-sweeps.ts';
 import { compileDriven, type DrivenLinks } from './driven-links.ts';
 import { compileLoads, type DriverLoads, type Tie } from './driver-loads.ts';
 import { compileEnclosures, type Enclosures } from './enclosures.ts';
 import { compileFaint, type FaintLinks } from './faint.ts';
-import { compileLaws, type StateLinks } from './laws.ts';
 import type { Layout } from './layout.ts';
+import { compileLinks, type StateLinks } from './links.ts';
 import type { Series } from './problem.ts';
 import { createLu, entryOf, type SparseLu } from './sparse-lu.ts';
 import { compileUnits, type UnitsState } from './units-state.ts';
@@ -49,20 +49,21 @@ export interface Stage {
   /** How much a wrong slope of each link, or emission slope of each member, weighs at its nodes. */
   readonly linkWeight: Float64Array;
   readonly memberWeight: Float64Array;
-  /** Whether nothing depends on the state but the plants. */
-  readonly isLinear: boolean;
-  /** Rows from `firstState` on that are nodes. */
-  readonly stateRows: Int32Array;
+  /** Exchanges of the faint links summed at each row [W]. */
+  readonly faintSum: Float64Array;
+  readonly blockOf: Int32Array;
+  /** 1 for a row that is a node, 0 for a plant's power. */
+  readonly isNode: Float64Array;
+  /** Scratch by block: to be solved again. */
+  readonly again: Uint8Array;
   /** Right-hand side before the iteration, and in it; by slot. */
   readonly before: Float64Array;
   readonly b: Float64Array;
   /** State at which the laws are evaluated. */
   readonly at: Float64Array;
-  /** Whether any row is dirty. */
-  stale: boolean;
   /** Whether the laws were evaluated yet. */
   loaded: boolean;
-  /** Stages solved, and rebuilds of factors, for the record. */
+  /** Stages solved. */
   solves: number;
 }
 
@@ -115,7 +116,10 @@ export function createStage(layout: Layout, series: readonly Series[], stageS: n
       if (row < rows) constant[entryOf(lu, row, layout.rowOfUnit[u])] -= unit.deliveryShares[i];
     });
   });
-  const laws = compileLaws(network, slotOfNode, firstFixed);
+  const blockOf = blockOfRow(layout);
+  const laws = compileLinks(network, slotOfNode, firstFixed, (slot) =>
+    slot < rows ? blockOf[slot] : layout.order.blockStart.length - 1,
+  );
   const { from, to } = laws;
   const entry = (a: number, b: number) => (a < rows && b < rows ? entryOf(lu, a, b) : spare);
   const lightness = new Float64Array(slotCount);
@@ -123,26 +127,17 @@ export function createStage(layout: Layout, series: readonly Series[], stageS: n
     const own = constant[lu.diagonal[row]];
     lightness[row] = own > 0 ? 1 / own : 1e3;
   }
-  const faint = compileFaint(layout, chain);
-  for (let k = 0; k < faint.count; k++) {
-    const weight = Math.max(lightness[faint.a[k]], lightness[faint.b[k]]);
-    faint.share = Math.max(faint.share, 2 * faint.wPerK[k] * weight);
-  }
   const enclosures = compileEnclosures(layout, lu, spare);
-  const stateRows: number[] = [];
-  for (let row = layout.firstState; row < rows; row++) {
-    if (layout.nodeOfSlot[row] >= 0) stateRows.push(row);
-  }
   return {
     layout,
     lu,
     chain,
-    faint,
+    faint: compileFaint(layout, chain, lightness),
     driven: compileDriven(layout, lu, spare, constant),
     loads: compileLoads(layout, series, ties),
     laws,
     enclosures,
-    blocks: compileBlocks(laws, enclosures, rows),
+    blocks: compileBlocks(layout, laws, enclosures),
     units: compileUnits(layout, lu, spare),
     storage,
     constant,
@@ -162,12 +157,13 @@ export function createStage(layout: Layout, series: readonly Series[], stageS: n
       enclosures.slot,
       (slot, m) => lightness[slot] * enclosures.rowSumM2[m],
     ),
-    isLinear: laws.count === 0 && enclosures.slot.length === 0 && faint.count === 0,
-    stateRows: Int32Array.from(stateRows),
+    faintSum: new Float64Array(rows),
+    blockOf,
+    isNode: Float64Array.from({ length: rows }, (_, row) => (layout.nodeOfSlot[row] >= 0 ? 1 : 0)),
+    again: new Uint8Array(layout.order.blockStart.length),
     before: new Float64Array(slotCount),
     b: new Float64Array(slotCount),
     at: new Float64Array(slotCount),
-    stale: true,
     loaded: false,
     solves: 0,
   };

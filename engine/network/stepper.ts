@@ -21,9 +21,10 @@ import {
 import { factorChains } from './chain-sweeps.ts';
 import { holdLoads } from './driver-loads.ts';
 import { faintChains } from './faint.ts';
+import { createHost, type KernelHost, pullState, pushState, runInKernel } from './kernel/host.ts';
 import { type Layout, layOut, toNodes, toSlots } from './layout.ts';
 import type { Method, Problem } from './problem.ts';
-import { addStage, endStep, type Recorder } from './recorder.ts';
+import { addStage, endStep, openRecorder, type Recorder } from './recorder.ts';
 import { compileReadings, type Readings, readHeld, readMoving } from './series.ts';
 import { createStage, type Stage } from './stage.ts';
 import { loadStage, type Solved, solveStage } from './stage-solve.ts';
@@ -51,6 +52,9 @@ export interface Stepper {
   readonly modes1: Uint8Array;
   readonly modes2: Uint8Array;
   readonly solved: Solved;
+  /** Slot of the first node that came out without a value in the last step taken, or −1. */
+  failedSlot: number;
+  host: KernelHost | null;
   iterations: number;
   unconvergedSteps: number;
   worstBalance: number;
@@ -81,6 +85,8 @@ export function createStepper(problem: Problem, method: Method): Stepper {
     modes1: new Uint8Array(layout.units.length),
     modes2: new Uint8Array(layout.units.length),
     solved: { iterations: 0, converged: false, singularRow: -1 },
+    failedSlot: -1,
+    host: null,
     iterations: 0,
     unconvergedSteps: 0,
     worstBalance: 0,
@@ -94,10 +100,12 @@ export function placeState(s: Stepper, tempC: Float64Array): void {
   s.x1.set(s.x2);
   placeModes(layout.chains, s.modes, s.x2, layout.firstChain);
   openBalance(s.balance, s.modes);
+  if (s.host) pushState(s.host, s);
 }
 
 /** Copies the state, by node. */
 export function readState(s: Stepper, tempC: Float64Array): void {
+  if (s.host) pullState(s.host, s);
   const { layout, modes, x2 } = s;
   const { chains, chainSlotA, chainSlotB, firstChain } = layout;
   for (let c = 0; c < chains.count; c++) {
@@ -108,11 +116,55 @@ export function readState(s: Stepper, tempC: Float64Array): void {
   toNodes(layout, x2, tempC);
 }
 
+/** Forgets what was counted so far, and where the records begin is now. */
+export function beginRecords(s: Stepper, recorder: Recorder): void {
+  s.iterations = 0;
+  s.unconvergedSteps = 0;
+  s.worstBalance = 0;
+  if (s.host) {
+    s.host.exports.clear();
+    s.host.exports.openRecords();
+  } else openRecorder(recorder, s.stage, s.modes, s.x2);
+}
+
+/** Moves the stepper into the kernel. */
+export function enterKernel(s: Stepper, recorder: Recorder, bytes: Uint8Array): void {
+  s.host = createHost(s, recorder, bytes);
+}
+
+/**
+ * Takes `count` steps (at most `mostSteps`) from step `first` on.
+ * @returns steps taken; fewer than `count` where one failed at `failedSlot`
+ */
+export function takeSteps(
+  s: Stepper,
+  first: number,
+  count: number,
+  recorder: Recorder | null,
+): number {
+  let done = 0;
+  if (s.host) done = runInKernel(s.host, s, first, count, recorder);
+  else {
+    s.failedSlot = -1;
+    while (done < count) {
+      s.failedSlot = advance(s, first + done, recorder);
+      if (s.failedSlot >= 0) break;
+      done++;
+    }
+  }
+  if (done < count && s.failedSlot < 0) {
+    // The kernel saw the balance without a value.
+    if (s.host) pullState(s.host, s);
+    s.failedSlot = firstWithout(s, s.x2);
+  }
+  return done;
+}
+
 /**
  * Advances step `k` from the state in `x2` to the new one in `x2`.
  * @returns −1, or the slot of the first node that came out without a value
  */
-export function advance(s: Stepper, k: number, recorder: Recorder | null): number {
+function advance(s: Stepper, k: number, recorder: Recorder | null): number {
   const { problem, method, stage, solved, series, balance, modes, readings } = s;
   const { units, before } = stage;
   const { chainSlotA, chainSlotB } = s.layout;
@@ -126,6 +178,9 @@ export function advance(s: Stepper, k: number, recorder: Recorder | null): numbe
   readMoving(readings, k, gamma, series);
   setUnitBounds(units, series, x0, 1);
   units.mode.set(s.modes1);
+  // First guesses, which faint couplings start from, go on along the last slope.
+  const { rows } = s.layout;
+  for (let i = 0; i < rows; i++) x1[i] = x0[i] + (gamma / (1 - gamma)) * (x0[i] - x1[i]);
   loadStage(stage, x0, x0, 1, 0, x1, series);
   addFirstHistory(modes, chainSlotA, chainSlotB, before);
   solveStage(stage, x1, series, k, toleranceK, maxIterations, solved);
@@ -139,6 +194,7 @@ export function advance(s: Stepper, k: number, recorder: Recorder | null): numbe
   readMoving(readings, k, 1, series);
   setUnitBounds(units, series, x1, gamma);
   units.mode.set(s.modes2);
+  for (let i = 0; i < rows; i++) x2[i] = x1[i] + carry * (x1[i] - x0[i]);
   loadStage(stage, x0, x1, 1 - carry, carry, x2, series);
   addSecondHistory(modes, chainSlotA, chainSlotB, x1, before);
   solveStage(stage, x2, series, k, toleranceK, maxIterations, solved);

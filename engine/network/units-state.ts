@@ -192,11 +192,18 @@ export function settleModes(units: UnitsState): void {
   }
 }
 
-/** Writes the rows whose branch changed into the matrix and marks them; true where there is any. */
-export function assembleUnits(units: UnitsState, a: Float64Array, dirty: Uint8Array): boolean {
+/** Writes the rows of units `list[first]` to `list[last − 1]` whose branch changed into the matrix and marks them. */
+export function assembleUnits(
+  units: UnitsState,
+  list: Int32Array,
+  first: number,
+  last: number,
+  a: Float64Array,
+  dirty: Uint8Array,
+): void {
   const { mode, inMatrix, lineInMatrix, sensorStart, sensorEntry, sensorWeight, own, row } = units;
-  let any = false;
-  for (let u = 0; u < units.count; u++) {
+  for (let k = first; k < last; k++) {
+    const u = list[k];
     const m = mode[u];
     const slope = m === line ? lineSlopeW(units, u) : 0;
     const holds = m === heatSet || m === coolSet;
@@ -210,20 +217,22 @@ export function assembleUnits(units: UnitsState, a: Float64Array, dirty: Uint8Ar
     inMatrix[u] = m;
     lineInMatrix[u] = slope;
     dirty[row[u]] = 1;
-    any = true;
   }
-  return any;
 }
 
-/** Right-hand side of the units' rows; `x` holds the boundaries' temperatures, `firstFixed` onward. */
+/** Right-hand side of the rows of units `list[first]` to `list[last − 1]`; `x` holds the boundaries' temperatures, `firstFixed` onward. */
 export function loadUnits(
   units: UnitsState,
+  list: Int32Array,
+  first: number,
+  last: number,
   x: Float64Array,
   b: Float64Array,
   firstFixed: number,
 ): void {
   const { mode, low, zero, high, heatC, coolC, row } = units;
-  for (let u = 0; u < units.count; u++) {
+  for (let k = first; k < last; k++) {
+    const u = list[k];
     const m = mode[u];
     let value = zero[u];
     if (m === heatFull) value = high[u];

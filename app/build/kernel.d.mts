@@ -1,0 +1,2 @@
+/** Compiles the solver’s kernel; gives its bytes. */
+export function compileKernel(): Promise<Uint8Array>;
