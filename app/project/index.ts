@@ -27,6 +27,34 @@ export {
 } from './form.ts';
 export { copyGlazingEdit, glazingEdit, swapGlazingEdit } from './glazing-edits.ts';
 export { begin, edit, type History, redo, undo } from './history.ts';
+export {
+  addPlanRoom,
+  addStorey,
+  addWindow,
+  movedSide,
+  moveWindow,
+  placeEdit,
+  planOf,
+  removePlanRoom,
+  startPlan,
+  storeyHeightEdit,
+  turnEdit,
+} from './plan-edits.ts';
+export {
+  floorLevelM,
+  overlaps,
+  type Piece,
+  type Plan,
+  type PlanRoom,
+  piecesOf,
+  type Side,
+  type Storey,
+  sideAzimuthDeg,
+  sideLengthM,
+  sides,
+  touchM,
+} from './plan-geometry.ts';
+export { compassWord, type Drawn, type PlanFabric, roomsOfPlan } from './plan-to-rooms.ts';
 export { projectText } from './project-text.ts';
 export {
   addOpening,

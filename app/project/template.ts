@@ -1,71 +1,61 @@
-// What a new project starts from: one empty room that runs as soon as a weather table is read. Its
+// What a new project starts from: one drawn room that runs as soon as a weather table is read. Its
 // fabric comes from the generic library by id, so that the file stays short.
 
-import type { ProjectForm, SurfaceForm } from './form.ts';
+import type { ProjectForm, RoomForm } from './form.ts';
+import type { Plan } from './plan-geometry.ts';
+import { type PlanFabric, roomsOfPlan } from './plan-to-rooms.ts';
 
-const lengthM = 5;
-const depthM = 4;
-const heightM = 2.6;
+/** What new surfaces are made of until the user says otherwise; ids of the generic library. */
+export const usualFabric: PlanFabric = {
+  outside: 'wall-render-eps-160',
+  partition: 'partition-block-100',
+  roof: 'roof-flat-timber',
+  between: 'between-timber',
+  ground: 'ground-slab-80',
+  exposed: 'floor-exposed-timber-200',
+};
+export const usualGlazing = 'double-warm-argon';
 
-function wall(id: string, azimuthDeg: number, widthM: number): SurfaceForm {
+/** A room that has not been drawn yet, used as most rooms are. */
+export function newRoom(id: string, name: string): RoomForm {
   return {
     id,
-    construction: 'wall-render-eps-160',
-    areaM2: widthM * heightM,
-    tiltDeg: 90,
-    azimuthDeg,
-    boundary: { kind: 'outdoors' },
+    name,
+    floorAreaM2: 1,
+    volumeM3: 1,
+    surfaces: [],
+    infiltration: { airChangesPerH: 0.5 },
+    heating: { setPointC: 20 },
+    comfort: { bandLowC: 19, bandHighC: 26 },
   };
 }
 
 /** One room of 5 m by 4 m, 2.6 m high, with a window to the south, heated to 20 °C. */
 export function emptyProject(name: string): ProjectForm {
+  const plan: Plan = {
+    topAzimuthDeg: 0,
+    storeys: [{ id: 'ground', name: 'Ground storey', heightM: 2.6 }],
+    rooms: [{ room: 'room', storey: 'ground', xM: 0, yM: 0, widthM: 5, depthM: 4 }],
+  };
+  const { rooms } = roomsOfPlan(plan, [newRoom('room', 'Room')], usualFabric);
   return {
     format: 'inglenook-project',
     version: 1,
     name,
-    rooms: [
-      {
-        id: 'room',
-        name: 'Room',
-        floorAreaM2: lengthM * depthM,
-        volumeM3: lengthM * depthM * heightM,
-        box: { lengthM, depthM, heightM, frontAzimuthDeg: 180 },
-        surfaces: [
-          {
-            ...wall('south', 180, lengthM),
-            openings: [
-              {
-                id: 'window',
-                name: 'Window',
-                glazing: 'double-warm-argon',
-                areaM2: 2.1,
-                rectangle: { leftM: 1.75, bottomM: 0.9, widthM: 1.5, heightM: 1.4 },
-              },
-            ],
-          },
-          wall('west', 270, depthM),
-          wall('north', 0, lengthM),
-          wall('east', 90, depthM),
-          {
-            id: 'roof',
-            construction: 'roof-flat-timber',
-            areaM2: lengthM * depthM,
-            tiltDeg: 0,
-            boundary: { kind: 'outdoors' },
-          },
-          {
-            id: 'floor',
-            construction: 'ground-slab-80',
-            areaM2: lengthM * depthM,
-            tiltDeg: 180,
-            boundary: { kind: 'ground', temperatureC: 10 },
-          },
-        ],
-        infiltration: { airChangesPerH: 0.5 },
-        heating: { setPointC: 20 },
-        comfort: { bandLowC: 19, bandHighC: 26 },
-      },
-    ],
+    plan: { ...plan, storeys: [...plan.storeys], rooms: [...plan.rooms] },
+    rooms: rooms.map((room) => ({
+      ...room,
+      surfaces: room.surfaces.map((surface) =>
+        surface.id === 'bottom' ? { ...surface, openings: [southWindow] } : surface,
+      ),
+    })),
   };
 }
+
+const southWindow = {
+  id: 'window',
+  name: 'Window',
+  glazing: usualGlazing,
+  areaM2: 2.1,
+  rectangle: { leftM: 1.75, bottomM: 0.9, widthM: 1.5, heightM: 1.4 },
+};
