@@ -27,7 +27,7 @@ const meetings = hours([8, 0], [9, 0.5], [12, 0.8], [13, 0], [16, 0.8], [17, 0.4
 const lessons = hours([8, 0], [10, 0.9], [11, 0.5], [13, 0.9], [14, 0.3], [16, 0.5], [24, 0]);
 const lessonLight = hours([7, 0], [8, 0.5], [16, 0.9], [17, 0.3], [24, 0]);
 const nursery = hours([7, 0], [8, 0.4], [9, 0.8], [13, 0.9], [15, 0.7], [17, 0.4], [24, 0]);
-const lecture = hours([8, 0], [12, 0.7], [13, 0.2], [18, 0.7], [24, 0]);
+const audience = hours([8, 0], [12, 0.7], [13, 0.2], [18, 0.7], [24, 0]);
 const shift = hours([6, 0], [9, 1], [10, 0.7], [12, 1], [13, 0.5], [15, 1], [24, 0]);
 const reading = hours([9, 0], [11, 0.4], [18, 0.8], [20, 0.4], [24, 0]);
 
@@ -77,10 +77,10 @@ export const workUsages: readonly UsageProfile[] = [
     emptyDay(0),
   ),
   usage(
-    'lecture-hall',
-    'Lecture hall',
+    'auditorium',
+    'Auditorium',
     { m2PerPerson: 1, activity: 'seated', lighting: 10, equipment: 4, ...offices },
-    day(lecture, lecture, lecture),
+    day(audience, audience, audience),
     emptyDay(0.05),
   ),
   usage(
