@@ -56,6 +56,12 @@ export function inspectTable(
   };
 }
 
+/** The sun-time check alone, of a table as it is mapped. */
+export function sunTimeOfTable(table: MappedTable): SunTimeCheck | null {
+  const arranged = arrange(table, new Set());
+  return arranged.ok ? settleClock(arranged.value.series, new Set()).sunTime : null;
+}
+
 /** The checks of values and sun on a series. */
 export function inspectSeries(from: WeatherSeries, accepted: Accepted = new Set()): Inspection {
   let series = from;

@@ -6,11 +6,11 @@ const share = (cells: readonly string[], fits: (cell: string) => boolean) =>
   cells.length === 0 ? 0 : cells.filter(fits).length / cells.length;
 
 /** Columns whose cells are dates, times or both, by trying to read them in every order. */
-export function textColumns(rows: readonly (readonly string[])[], width: number) {
+export function textColumns(rows: readonly (readonly string[])[], columnCount: number) {
   const dateTime: { at: number; order: DateOrder }[] = [];
   const date: { at: number; order: DateOrder }[] = [];
   const time: number[] = [];
-  for (let at = 0; at < width; at++) {
+  for (let at = 0; at < columnCount; at++) {
     const cells = rows
       .slice(0, 400)
       .map((row) => row[at] ?? '')

@@ -56,14 +56,14 @@ export function detectColumns(
   rows: readonly (readonly string[])[],
   headings: readonly string[],
   unitRow: readonly string[],
-  width: number,
+  columnCount: number,
   used: ReadonlySet<number>,
   table: TableMapping,
   intervalS: number,
 ): ColumnsGuess {
   const guesses: (ColumnGuess & { weight: number })[] = [];
   const missing = new Set<number | string>();
-  for (let at = 0; at < width; at++) {
+  for (let at = 0; at < columnCount; at++) {
     if (used.has(at)) continue;
     const facts = factsOf(rows, at, table);
     const heading = headings[at] ?? '';

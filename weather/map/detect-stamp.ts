@@ -38,7 +38,7 @@ export function detectStamp(
   table: TableMapping,
 ): StampGuess | null {
   const sample = rows.length > 1200 ? [...rows.slice(0, 800), ...rows.slice(-400)] : rows;
-  const width = Math.min(Math.max(...sample.slice(0, 50).map((row) => row.length)), 60);
+  const columnCount = Math.min(Math.max(...sample.slice(0, 50).map((row) => row.length)), 60);
   const refOf = (at: number): string | number => {
     const name = headings[at] ?? '';
     return name !== '' && headings.filter((one) => one === name).length === 1 ? name : at + 1;
@@ -47,7 +47,7 @@ export function detectStamp(
     order ? { at, column: refOf(at), reads, order } : { at, column: refOf(at), reads };
 
   const tried: Placed[][] = [];
-  const text = textColumns(sample, width);
+  const text = textColumns(sample, columnCount);
   for (const { at, order } of text.dateTime) tried.push([place(at, 'dateTime', order)]);
   for (const { at, order } of text.date) {
     for (const time of text.time) tried.push([place(at, 'date', order), place(time, 'time')]);
@@ -62,7 +62,10 @@ export function detectStamp(
       ]);
     }
   }
-  tried.push(...namedParts(headings, place), ...numberParts(sample, headings, width, table, place));
+  tried.push(
+    ...namedParts(headings, place),
+    ...numberParts(sample, headings, columnCount, table, place),
+  );
   let best: {
     parts: Placed[];
     score: number;
@@ -143,16 +146,16 @@ function namedParts(headings: readonly string[], place: Place): Placed[][] {
 function numberParts(
   rows: readonly Row[],
   headings: readonly string[],
-  width: number,
+  columnCount: number,
   table: TableMapping,
   place: Place,
 ): Placed[][] {
   const sets: Placed[][] = [];
   const column = (at: number) => rows.slice(0, 300).map((row) => numberOf(row[at] ?? '', table));
   const within = (at: number, low: number, high: number, isWhole = true) =>
-    at < width &&
+    at < columnCount &&
     column(at).every((v) => v >= low && v <= high && (!isWhole || Number.isInteger(v)));
-  for (let at = 0; at < Math.min(width, 6); at++) {
+  for (let at = 0; at < Math.min(columnCount, 6); at++) {
     if (within(at, 1900, 2200) && within(at + 1, 1, 12) && within(at + 2, 1, 31)) {
       const date = [place(at, 'year'), place(at + 1, 'month'), place(at + 2, 'day')];
       if (within(at + 3, 0, 24)) {

@@ -20,7 +20,7 @@ export interface TableGuess {
   readonly units: readonly string[];
   /** Cells of sampled rows, the last rows last. */
   readonly rows: readonly (readonly string[])[];
-  readonly width: number;
+  readonly columnCount: number;
 }
 
 const words: Readonly<Record<Delimiter, string>> = {
@@ -39,35 +39,36 @@ export function detectLayout(sample: Sample): TableGuess | null {
     ...sample.head.slice(-60),
     ...sample.runs.flatMap((run) => run.slice(0, 10)),
   ].filter((line) => line.trim() !== '' && !line.startsWith('#'));
-  let best: { delimiter: Delimiter; width: number; even: number; score: number } | null = null;
+  let best: { delimiter: Delimiter; columnCount: number; even: number; score: number } | null =
+    null;
   for (const delimiter of delimiters) {
     const counts = new Map<number, number>();
     let numbers = 0;
     let cells = 0;
     for (const line of middle) {
       const parts = cellsOf(line, delimiter);
-      let width = parts.length;
-      while (width > 0 && parts[width - 1] === '') width--;
-      counts.set(width, (counts.get(width) ?? 0) + 1);
+      let columnCount = parts.length;
+      while (columnCount > 0 && parts[columnCount - 1] === '') columnCount--;
+      counts.set(columnCount, (counts.get(columnCount) ?? 0) + 1);
       numbers += parts.filter((cell) => anyNumber.test(cell)).length;
       cells += parts.length;
     }
-    const [width, times] = [...counts].sort((a, b) => b[1] - a[1])[0] ?? [0, 0];
+    const [columnCount, times] = [...counts].sort((a, b) => b[1] - a[1])[0] ?? [0, 0];
     const even = times / Math.max(1, middle.length);
-    if (width < 2 || even < 0.6) continue;
+    if (columnCount < 2 || even < 0.6) continue;
     // Evenness first, then cells that are numbers; a decimal comma splits evenly but leaves a stamp whole.
     const score = even * 2 + numbers / Math.max(1, cells) - (delimiter === ' ' ? 0.8 : 0);
     const commaInSemicolon = delimiter === ',' && middle.every((line) => line.includes(';'));
     const commaInTab = delimiter === ',' && middle.every((line) => line.includes('\t'));
     const value = score - (commaInSemicolon || commaInTab ? 1.5 : 0);
-    if (best === null || value > best.score) best = { delimiter, width, even, score: value };
+    if (best === null || value > best.score) best = { delimiter, columnCount, even, score: value };
   }
   if (best === null) return null;
   const { delimiter, even } = best;
   const lines = sample.head;
   const first = firstValueRow(lines, delimiter);
   if (first === 0) return null;
-  const headingRow = headingRowAbove(lines, first, delimiter, best.width);
+  const headingRow = headingRowAbove(lines, first, delimiter, best.columnCount);
   const headings = headingsOf(lines, headingRow, delimiter);
   const between = lines.slice(headingRow, first - 1).map((line) => cellsOf(line, delimiter));
   const units = between.find((cells) => cells.filter(isUnitText).length >= 2) ?? [];
@@ -81,13 +82,13 @@ export function detectLayout(sample: Sample): TableGuess | null {
     table: {
       value: { delimiter, decimal: decimal.value, thousands, headingRow, firstRow: first },
       confidence: Math.min(1, even * (delimiter === ' ' ? 0.9 : 1)),
-      reason: `${words[delimiter]} parts ${Math.round(even * 100)} % of the lines into ${best.width} cells; ${headingRow === 0 ? 'no row of headings' : `headings in row ${headingRow}`}, values from row ${first}`,
+      reason: `${words[delimiter]} parts ${Math.round(even * 100)} % of the lines into ${best.columnCount} cells; ${headingRow === 0 ? 'no row of headings' : `headings in row ${headingRow}`}, values from row ${first}`,
     },
     decimal,
     headings,
     units,
     rows,
-    width: Math.max(best.width, headings.length),
+    columnCount: Math.max(best.columnCount, headings.length),
   };
 }
 
@@ -114,15 +115,15 @@ function headingRowAbove(
   lines: readonly string[],
   first: number,
   delimiter: Delimiter,
-  width: number,
+  columnCount: number,
 ): number {
   let best = 0;
   let most = 0;
   for (let row = first - 1; row >= Math.max(1, first - 8); row--) {
     const cells = headingsOf(lines, row, delimiter);
     const named = cells.filter((cell) => /\p{L}/u.test(cell) && !isUnitText(cell)).length;
-    const fits = cells.length >= width * 0.7 && cells.length <= width + 2;
-    if (!fits || named < Math.max(2, width * 0.4)) continue;
+    const fits = cells.length >= columnCount * 0.7 && cells.length <= columnCount + 2;
+    if (!fits || named < Math.max(2, columnCount * 0.4)) continue;
     // Of several rows of words that with most names is the row of headings; the upper one on a tie.
     if (named >= most) {
       most = named;

@@ -12,6 +12,7 @@ import { detectStamp } from './detect-stamp.ts';
 import { detectLayout } from './detect-table.ts';
 import { type Mapping, mappingFormat, mappingVersion, quantityWords } from './mapping.ts';
 import { type Sample, sampleOf } from './sample.ts';
+import { settleMarks } from './settle-marks.ts';
 import { tableShape } from './shape.ts';
 
 /** One thing that was found out about a table. */
@@ -87,7 +88,7 @@ export function detectTable(source: string | Uint8Array, options: DetectOptions 
       'a table, one row a line, with numbers',
       'Save the table as CSV, or write a mapping by hand.',
     );
-  const { table, decimal, headings, units, rows, width } = layout;
+  const { table, decimal, headings, units, rows, columnCount } = layout;
   const stamp = detectStamp(rows, headings, table.value);
   if (stamp === null)
     return refused(
@@ -101,7 +102,7 @@ export function detectTable(source: string | Uint8Array, options: DetectOptions 
     rows,
     headings,
     units,
-    width,
+    columnCount,
     stamp.used,
     table.value,
     stamp.intervalS,
@@ -109,13 +110,13 @@ export function detectTable(source: string | Uint8Array, options: DetectOptions 
   const site = { ...siteIn(preamble), ...(options.site ?? {}) };
   const stampHeads = [...stamp.used].map((at) => headings[at] ?? '');
   const clock = clockIn(preamble, stampHeads, stamp.statesOffset);
-  const shape = tableShape(table.value.delimiter, headings, units, width);
+  const shape = tableShape(table.value.delimiter, headings, units, columnCount);
   const named = (guess: ColumnGuess) =>
     guess.heading !== '' &&
     headings.filter((one) => headingKey(one) === headingKey(guess.heading)).length === 1
       ? guess.heading
       : guess.number;
-  const mapping: Mapping = {
+  const proposal: Mapping = {
     format: mappingFormat,
     version: mappingVersion,
     name: site.name || 'my table',
@@ -137,6 +138,10 @@ export function detectTable(source: string | Uint8Array, options: DetectOptions 
     missing: found.missing,
     site,
   };
+  const byLight =
+    stamp.marks.confidence < 0.9 ? settleMarks(source, proposal, site, stamp.intervalS) : null;
+  const marks = byLight ?? stamp.marks;
+  const mapping: Mapping = { ...proposal, stamp: { ...proposal.stamp, marks: marks.value } };
   const facts: DetectedFact[] = [
     {
       topic: 'divider',
@@ -164,9 +169,9 @@ export function detectTable(source: string | Uint8Array, options: DetectOptions 
     },
     {
       topic: 'marks',
-      value: `${stamp.marks.value} of the interval`,
-      confidence: stamp.marks.confidence,
-      reason: stamp.marks.reason,
+      value: `${marks.value} of the interval`,
+      confidence: marks.confidence,
+      reason: marks.reason,
     },
     {
       topic: 'clock',

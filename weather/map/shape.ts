@@ -7,10 +7,10 @@ export function tableShape(
   delimiter: Delimiter,
   headings: readonly string[],
   units: readonly string[],
-  width: number,
+  columnCount: number,
 ): string {
   const key = (text: string) => text.replace(/\s+/g, ' ').trim().toLowerCase();
-  const named = headings.length > 0 ? headings.map(key).join('\u001f') : `${width} columns`;
+  const named = headings.length > 0 ? headings.map(key).join('\u001f') : `${columnCount} columns`;
   const text = [delimiter, named, units.map(key).join('\u001f')].join('\u001e');
   return hash(text, 0x811c9dc5) + hash(text, 0x050c5d1f);
 }

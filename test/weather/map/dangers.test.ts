@@ -120,3 +120,25 @@ test('a row with a cell too few is refused: what follows would slide into the wr
     'roof.csv, row 41, column all: found 6 cells, expected 7 cells as in the headings. Check the mark between cells, and the decimal mark.',
   );
 });
+
+describe('the end of the interval that a stamp marks', () => {
+  const part = (movedH: number) => {
+    const [head, ...rows] = dialects[0].write(3000).trimEnd().split('\n');
+    const shifted = rows.map((row, h) => {
+      const at = new Date(Date.UTC(2023, 0, 1) + (h + movedH) * 3600000).toISOString().slice(0, 16);
+      return row.replace(/^[^,]+/, at);
+    });
+    return [head, ...shifted.slice(101, 2950)].join('\n');
+  };
+  test.each([
+    ['start', 0],
+    ['middle', 0.5],
+    ['end', 1],
+  ] as const)('is told by the light where nothing else says it: %s', (marks, movedH) => {
+    const found = detectTable(part(movedH), { site: hillside });
+    expect(found.kind === 'proposed' && found.mapping.stamp.marks).toBe(marks);
+    if (found.kind !== 'proposed') return;
+    const fact = found.facts.find(({ topic }) => topic === 'marks');
+    expect(fact?.reason).toContain(`if stamps mark the ${marks}`);
+  });
+});
