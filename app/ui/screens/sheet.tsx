@@ -4,6 +4,7 @@ import { roomResult, type Screen, useApp, useAppState, useProject } from '../sta
 import { Fabric } from './fabric/fabric.tsx';
 import { House } from './house.tsx';
 import { Methods } from './methods.tsx';
+import { Plan } from './plan/plan.tsx';
 import { Plant } from './plant.tsx';
 import { Room } from './room.tsx';
 import { Rooms } from './rooms.tsx';
@@ -13,6 +14,7 @@ import { Waiting } from './waiting.tsx';
 import { Welcome } from './welcome.tsx';
 
 const editors: Partial<Record<Screen, () => React.ReactNode>> = {
+  plan: Plan,
   rooms: Rooms,
   fabric: Fabric,
   use: Use,

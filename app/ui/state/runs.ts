@@ -3,6 +3,7 @@
 
 import type { StoreApi } from 'zustand/vanilla';
 import type { Fault, Site } from '../../../weather/index.ts';
+import { projectText as textOf } from '../../project/index.ts';
 import type { OpenedFile } from '../desk/index.ts';
 import type { Simulation } from '../simulation.ts';
 import type { AppState, Base } from './app-state.ts';
@@ -52,8 +53,11 @@ export function makeRuns(store: StoreApi<AppState>, runYear: RunYear): Runs {
     const { rooms } = simulation;
     const isKnown = rooms.some((room) => room.id === roomId);
     const now = document?.story.now.document;
-    const isBase = base !== null && base.document === now;
-    const filled: Base | null = isBase ? { ...base, [step]: base[step] ?? simulation } : base;
+    const isFirst = base !== null && base.coarse === null && base.full === null;
+    const isBase = base !== null && now !== undefined && (isFirst || base.document === now);
+    const filled: Base | null = isBase
+      ? { ...base, document: now, [step]: base[step] ?? simulation }
+      : base;
     set({
       simulation,
       answered: { ...answered, [step]: simulation },
@@ -96,11 +100,29 @@ export function makeRuns(store: StoreApi<AppState>, runYear: RunYear): Runs {
         show(outcome.simulation, step);
       }
       set({ run: { kind: 'idle' } });
+      await completeBase(mine.signal);
     } catch (error) {
       if (!isCurrent()) return;
       if (mine.signal.aborted) return set({ run: { kind: 'cancelled' } });
       const reason = error instanceof Error ? error.message : unnamed;
       set({ run: { kind: 'broken', reason } });
+    }
+  }
+
+  /** The base may have been edited away from before it was run at the full step: done when all is quiet. */
+  async function completeBase(signal: AbortSignal) {
+    const { base, project, weather, site } = get();
+    if (!base || base.full || !project || !weather) return;
+    const projectText = textOf(base.document);
+    const input = { projectText, projectFile: project.file, weather, site };
+    try {
+      const outcome = await runYear(input, { signal, onProgress: () => {} });
+      const held = get().base;
+      if (outcome.ok && held?.document === base.document) {
+        set({ base: { ...held, full: outcome.simulation } });
+      }
+    } catch {
+      // stopped by an edit: the next quiet moment tries again
     }
   }
 
