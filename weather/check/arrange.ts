@@ -195,9 +195,12 @@ function sameValues(table: MappedTable, a: number, b: number): boolean {
 function stitch(table: MappedTable) {
   const { startS, count, intervalS } = table;
   let jumps = 0;
+  const monthAt = (i: number) => dateOfDay(Math.floor(startS[i] / 86400)).month;
   for (let i = 1; i < count; i++) {
-    const apart = startS[i] - startS[i - 1];
-    if (Math.abs(apart) > 150 * 86400) jumps++;
+    if (Math.abs(startS[i] - startS[i - 1]) < 150 * 86400) continue;
+    // Years change where months do; a jump within a month is a wrong stamp.
+    if (monthAt(i) === monthAt(i - 1)) return null;
+    jumps++;
   }
   if (jumps === 0 || jumps > 24 || count * intervalS > 367 * 86400) return null;
   const yearOf = new Int16Array(count);

@@ -71,6 +71,26 @@ export function gapDrafts(
   return drafts;
 }
 
+/** Fills steps that were taken out, as gaps of their length; longer ones than are filled stay open. */
+export function fillRuns(
+  series: WeatherSeries,
+  quantity: SeriesColumn['quantity'],
+  values: Float64Array,
+  runs: readonly Run[],
+  sun: HourlySun | null,
+): void {
+  const stepH = series.intervalS / 3600;
+  const course = sun ? courseOf(quantity, sun) : null;
+  const isDirection = quantity === 'windFromDeg';
+  for (const run of runs) {
+    if (run.count * stepH > longestFilledGapH) continue;
+    if (run.count * stepH > longestShortGapH)
+      fillFromDays(values, run, Math.round(24 / stepH), course, isDirection);
+    else if (course) bridgeCourse(values, course, run);
+    else bridge(values, run, isDirection);
+  }
+}
+
 function courseOf(quantity: SeriesColumn['quantity'], sun: HourlySun): Float64Array {
   return quantity === 'dniWPerM2' ? sun.sunlitShare : sun.extraterrestrialWPerM2;
 }

@@ -21,7 +21,7 @@ import type { HourlySun } from '../steps/hourly-sun.ts';
 import type { Stands, WeatherNote } from '../weather-year.ts';
 import { arrange } from './arrange.ts';
 import { type Accepted, type Finding, isAccepted } from './finding.ts';
-import { gapDrafts } from './gap-drafts.ts';
+import { fillRuns, gapDrafts } from './gap-drafts.ts';
 import { type SunSeason, seasonOf } from './season.ts';
 import {
   closureDrafts,
@@ -67,14 +67,29 @@ export function inspectSeries(from: WeatherSeries, accepted: Accepted = new Set(
   let series = from;
   const findings: Finding[] = [];
   const repairs: WeatherNote[] = [];
+  const suns = new Map<string, HourlySun>();
+  const sunOf = (stands: Stands): HourlySun => {
+    const key = JSON.stringify(stands);
+    const known = suns.get(key) ?? seriesSun(series, stands);
+    suns.set(key, known);
+    return known;
+  };
   const settle = (draft: Draft): void => {
-    const { mend, ...finding } = draft;
+    const { mend, takesOut, ...finding } = draft;
     const ok = isAccepted(accepted, finding.id, finding.repair);
     findings.push({ ...finding, isAccepted: ok });
     const column = finding.quantity && columnOf(series, finding.quantity);
     if (!ok || !column) return;
     const values = column.values.slice();
     mend(values);
+    if (takesOut)
+      fillRuns(
+        series,
+        column.quantity,
+        values,
+        takesOut,
+        isSunColumn(column) ? sunOf(column.stands) : null,
+      );
     series = withColumns(series, [{ ...column, values }]);
     repairs.push({
       kind: 'repair',
@@ -95,13 +110,6 @@ export function inspectSeries(from: WeatherSeries, accepted: Accepted = new Set(
       if (column) for (const draft of check(series, column)) settle(draft);
     }
   }
-  const suns = new Map<string, HourlySun>();
-  const sunOf = (stands: Stands): HourlySun => {
-    const key = JSON.stringify(stands);
-    const known = suns.get(key) ?? seriesSun(series, stands);
-    suns.set(key, known);
-    return known;
-  };
   for (const column of series.columns.filter(isSunColumn))
     for (const draft of sunDrafts(series, column, sunOf(column.stands))) settle(draft);
   const ghi = columnOf(series, 'ghiWPerM2');

@@ -11,13 +11,18 @@ import { lengthText, placesOf, type Run, runsWhere, totalOf } from './runs.ts';
 /** A finding on its way: with the change that its repair makes, in place. */
 export interface Draft extends Omit<Finding, 'isAccepted'> {
   readonly mend: (values: Float64Array) => void;
+  /** Steps whose values are taken out, to be filled as gaps at once. */
+  readonly takesOut?: readonly Run[];
 }
 
-const takeOut = (runs: readonly Run[]) => (values: Float64Array) => {
-  for (const { from, count } of runs) values.fill(Number.NaN, from, from + count);
-};
+const takeOut = (runs: readonly Run[]) => ({
+  takesOut: runs,
+  mend: (values: Float64Array) => {
+    for (const { from, count } of runs) values.fill(Number.NaN, from, from + count);
+  },
+});
 
-const takenOut = 'Take the values out and fill them as gaps.';
+const takenOut = 'Take the values out and fill them from those beside, as gaps of their length.';
 
 export function rangeDrafts(series: WeatherSeries, column: SeriesColumn): Draft[] {
   const { quantity, values, heading } = column;
@@ -60,7 +65,7 @@ export function rangeDrafts(series: WeatherSeries, column: SeriesColumn): Draft[
       count: totalOf(far),
       places: placesOf(series, far),
       repair: takenOut,
-      mend: takeOut(far),
+      ...takeOut(far),
     });
   return drafts;
 }
@@ -122,7 +127,7 @@ export function stuckDrafts(series: WeatherSeries, column: SeriesColumn): Draft[
       count: totalOf(runs),
       places: placesOf(series, runs),
       repair: takenOut,
-      mend: takeOut(runs),
+      ...takeOut(runs),
     },
   ];
 }
@@ -141,11 +146,15 @@ export function jumpDrafts(series: WeatherSeries, column: SeriesColumn): Draft[]
   const apart = Math.max(1, series.intervalS / 3600) * limit;
   const isJoin = (k: number) =>
     series.isStitched && series.sourceYear[k] !== series.sourceYear[k - 1];
+  const [low, high] = limitsOf(quantity);
+  const isNatural = (value: number) => value >= low && value <= high;
   const spikes: Run[] = [];
   const jumps: Run[] = [];
   for (let k = 1; k < values.length; k++) {
     const rise = values[k] - values[k - 1];
     if (!(Math.abs(rise) > apart) || isJoin(k)) continue;
+    // What lies outside nature is another finding already.
+    if (!isNatural(values[k]) || !isNatural(values[k - 1])) continue;
     const back = k + 1 < values.length ? values[k + 1] - values[k] : 0;
     if (Math.abs(back) > apart && back * rise < 0) {
       spikes.push({ from: k, count: 1 });
@@ -164,7 +173,7 @@ export function jumpDrafts(series: WeatherSeries, column: SeriesColumn): Draft[]
       count: spikes.length,
       places: placesOf(series, spikes),
       repair: takenOut,
-      mend: takeOut(spikes),
+      ...takeOut(spikes),
     });
   if (jumps.length > 0)
     drafts.push({
@@ -239,7 +248,7 @@ export function sunDrafts(series: WeatherSeries, column: SeriesColumn, sun: Hour
       count: totalOf(above),
       places: placesOf(series, above),
       repair: takenOut,
-      mend: takeOut(above),
+      ...takeOut(above),
     });
   return drafts;
 }
