@@ -52,7 +52,6 @@ export {
   sideAzimuthDeg,
   sideLengthM,
   sides,
-  touchM,
 } from './plan-geometry.ts';
 export { compassWord, type Drawn, type PlanFabric, roomsOfPlan } from './plan-to-rooms.ts';
 export { projectText } from './project-text.ts';

@@ -26,7 +26,6 @@ export {
   type EditedProject,
   explainedOf,
   type ReadProject,
-  readProject,
   useEditedProject,
   useProject,
 } from './use-project.ts';
