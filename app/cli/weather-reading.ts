@@ -187,8 +187,14 @@ function mappedYear(
 ) {
   const table = mappedTable(data, file, site, mapping, onProgress);
   const inspection = need(inspectTable(table, reading.accepted ?? new Set()));
-  const year = need(yearOf(inspection, choiceIn(inspection, reading.choice, file)));
-  return { year, findings: inspection.findings };
+  const read = need(yearOf(inspection, choiceIn(inspection, reading.choice, file)));
+  const ids = inspection.findings.map(({ id }) => id);
+  const accepted = reading.accepted === 'all' ? [] : [...(reading.accepted ?? [])];
+  const unknown = accepted.filter((id) => !ids.includes(id));
+  if (unknown.length === 0) return { year: read, findings: inspection.findings };
+  const text = `Accepted, but not found in this table: ${unknown.join(', ')}. Nothing was done for it.`;
+  const notes = [...read.notes, { kind: 'assumption' as const, text, count: 0 }];
+  return { year: { ...read, notes }, findings: inspection.findings };
 }
 
 /** The hottest or coldest run is looked for in the table itself. */

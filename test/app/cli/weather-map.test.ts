@@ -5,6 +5,7 @@ import { join } from 'node:path';
 import { afterAll, beforeAll, expect, test } from 'vitest';
 import { runCli } from '../../../app/cli/run-cli.ts';
 import { type Dialect, dialects } from '../../weather/map/tables.ts';
+import { sampleText } from '../sample.ts';
 
 async function inglenook(...args: string[]) {
   let out = '';
@@ -82,6 +83,28 @@ test('the gap stops the reading with the repair that mends it, and accepting it 
   );
 });
 
+test('an accepted repair that the table does not call for is said', async () => {
+  const gaps = [
+    'dryBulbC',
+    'relativeHumidity',
+    'windMPerS',
+    'ghiWPerM2',
+    'dhiWPerM2',
+    'pressurePa',
+  ];
+  const ids = [...gaps.map((name) => `gap-long-${name}`), 'gap-lnog-x'].join(',');
+  const read = await inglenook(
+    'weather',
+    path('roof.txt'),
+    '--mapping',
+    path('roof.json'),
+    '--accept',
+    ids,
+  );
+  expect(read.err).toBe('');
+  expect(read.out.replace(/\s+/g, ' ')).toContain('not found in this table: gap-lnog-x.');
+});
+
 test('mistakes on the command line and in the mapping are named with their place', async () => {
   const both = await inglenook(
     'weather',
@@ -102,4 +125,44 @@ test('mistakes on the command line and in the mapping are named with their place
   expect(bad.code).toBe(1);
   expect(bad.err).toContain('version: found 2, expected one of 1');
   expect(bad.err).toContain('colums: found the field "colums"');
+});
+
+test('a project reads its weather by the mapping and the repairs that it names', async () => {
+  const project = JSON.parse(sampleText());
+  project.weather = { file: 'roof.txt', mapping: 'roof.json', accept: ['all'] };
+  await writeFile(path('house.inglenook.json'), JSON.stringify(project));
+  const { code, out, err } = await inglenook('check', path('house.inglenook.json'));
+  expect(err).toBe('');
+  expect(code).toBe(0);
+  expect(out).toContain('8760 hours');
+  expect(out).toContain('Weather read by the mapping');
+  expect(out).toContain('Fill from the same hours of the days beside it');
+  project.weather = { file: 'roof.txt', mapping: 'nowhere.json' };
+  await writeFile(path('house.inglenook.json'), JSON.stringify(project));
+  const lost = await inglenook('check', path('house.inglenook.json'));
+  expect(lost.code).toBe(1);
+  expect(lost.err).toContain('nowhere.json');
+});
+
+test('a year is changed by the month and written as a plain table that reads back', async () => {
+  const twelve = Array.from({ length: 12 }, () => 2);
+  await writeFile(path('warm.json'), JSON.stringify({ name: 'two degrees', meanDryBulbK: twelve }));
+  const args = ['weather', path('roof.txt'), '--mapping', path('roof.json'), '--accept', 'all'];
+  const plain = await inglenook(...args, '--json');
+  const warm = await inglenook(
+    ...args,
+    '--changes',
+    path('warm.json'),
+    '--plain',
+    path('warm.csv'),
+    '--json',
+  );
+  const mean = (out: string) => JSON.parse(out).climate.meanDryBulbC;
+  expect(mean(warm.out) - mean(plain.out)).toBeCloseTo(2, 9);
+  const back = await inglenook('weather', path('warm.csv'), '--json');
+  expect(mean(back.out)).toBeCloseTo(mean(warm.out), 9);
+  await writeFile(path('warm.json'), JSON.stringify({ name: 'x', meanDryBulbK: [1] }));
+  const wrong = await inglenook(...args, '--changes', path('warm.json'));
+  expect(wrong.code).toBe(1);
+  expect(wrong.err).toContain('meanDryBulbK: found 1 values, expected 12');
 });

@@ -8,7 +8,6 @@ export const invented = inventedYear();
 
 /** Lines of a plain table: 6 site lines, the headings in row 7, the rows from row 8. */
 export const plainLines = writePlainWeather(invented).trimEnd().split('\n');
-export const firstRow = 8;
 
 /** A table with time stamps in place of counted hours. Headings in row 6, rows from row 7. */
 export function stampedLines(year: WeatherYear = invented): string[] {
