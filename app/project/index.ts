@@ -27,6 +27,7 @@ export {
 } from './form.ts';
 export { copyGlazingEdit, glazingEdit, swapGlazingEdit } from './glazing-edits.ts';
 export { begin, edit, type History, redo, undo } from './history.ts';
+export { rowsOfText, textOfRows } from './pasted-rows.ts';
 export {
   addPlanRoom,
   addStorey,
@@ -77,6 +78,7 @@ export {
   type Story,
   tell,
 } from './story.ts';
+export { type SurfaceRow, surfaceRowsEdit } from './surface-rows.ts';
 export { emptyProject } from './template.ts';
 export {
   addGain,

@@ -14,12 +14,18 @@ function savedScheme() {
   return saved === 'light' || saved === 'dark' ? saved : 'system';
 }
 
+const unitsKey = 'inglenook-units';
+
 export function startWindow(desk: Desk, runYear: RunYear) {
   const place = document.getElementById('window');
   if (!place) throw new Error('The page has no place for the window.');
-  const app = createApp(desk, runYear, { scheme: savedScheme() });
+  const app = createApp(desk, runYear, {
+    scheme: savedScheme(),
+    units: localStorage.getItem(unitsKey) === 'IP' ? 'IP' : 'SI',
+  });
   app.store.subscribe((now, before) => {
     if (now.scheme !== before.scheme) localStorage.setItem(schemeKey, now.scheme);
+    if (now.units !== before.units) localStorage.setItem(unitsKey, now.units);
   });
   const readRecent = () =>
     void desk.recent().then(

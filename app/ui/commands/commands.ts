@@ -1,3 +1,4 @@
+import type { UnitSystem } from '../format/index.ts';
 import { type AppState, asksForSite, type Scheme, type Screen } from '../state/index.ts';
 import type { Command } from './command.ts';
 import { documentCommands, editCommands } from './document-commands.ts';
@@ -15,6 +16,16 @@ const scheme = (name: Scheme, label: string): Command => ({
   isOn: (state) => state.scheme === name,
   isEnabled: always,
   run: (app) => app.set({ scheme: name }),
+});
+
+const units = (system: UnitSystem, label: string): Command => ({
+  id: `units-${system}`,
+  label,
+  menu: 'View',
+  keys: '',
+  isOn: (state) => state.units === system,
+  isEnabled: always,
+  run: (app) => app.set({ units: system }),
 });
 
 const show = (screen: Screen, label: string, keys: string): Command => ({
@@ -115,6 +126,8 @@ export const commands: readonly Command[] = [
   scheme('system', 'Colours as the system'),
   scheme('light', 'Light'),
   scheme('dark', 'Dark'),
+  units('SI', 'SI units'),
+  units('IP', 'Inch-pound units in fields'),
   {
     id: 'run-year',
     label: 'Run the year',

@@ -1,16 +1,18 @@
 // The command field's search: screens, rooms and commands by any of their words.
 
-import type { AppState } from '../state/index.ts';
+import { type AppState, readProject, type Screen } from '../state/index.ts';
 import type { Command } from './command.ts';
 import { commands } from './commands.ts';
 
 export interface Hit {
   readonly id: string;
-  readonly kind: 'Do' | 'Screen' | 'Room';
+  readonly kind: 'Do' | 'Screen' | 'Room' | 'Fabric' | 'Use' | 'Surfaces';
   readonly label: string;
   readonly keys: string;
   readonly command: Command | null;
   readonly roomId: string | null;
+  /** A thing of the building and the screen that edits it. */
+  readonly place?: { readonly screen: Screen; readonly id: string };
 }
 
 export function allHits(state: AppState): Hit[] {
@@ -36,7 +38,31 @@ export function allHits(state: AppState): Hit[] {
         roomId: null,
       }),
     );
-  return [...rooms, ...acts];
+  return [...rooms, ...places(state), ...acts];
+}
+
+/** Constructions, glazings, schedules and the tables of rooms. */
+function places({ document, project }: AppState): Hit[] {
+  if (!document || !project) return [];
+  const { building } = readProject(document.story.now.document, project.file);
+  if (!building) return [];
+  const hit = (kind: Hit['kind'], screen: Screen, id: string, label: string): Hit => ({
+    id: `${screen} ${id}`,
+    kind,
+    label,
+    keys: '',
+    command: null,
+    roomId: null,
+    place: { screen, id },
+  });
+  return [
+    ...building.constructions.map(({ id, name }) =>
+      hit('Fabric', 'fabric', `construction:${id}`, name),
+    ),
+    ...building.glazings.map(({ id, name }) => hit('Fabric', 'fabric', `glazing:${id}`, name)),
+    ...building.schedules.map(({ id, name }) => hit('Use', 'use', id, name ?? id)),
+    ...building.rooms.map(({ id, name }) => hit('Surfaces', 'rooms', id, `Surfaces of ${name}`)),
+  ];
 }
 
 /** Hits that hold every word typed; those that begin with the first word come first. */

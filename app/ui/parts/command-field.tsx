@@ -37,6 +37,7 @@ export function CommandField() {
     if (!hit) return;
     close();
     if (hit.roomId !== null) app.go('room', hit.roomId);
+    if (hit.place) app.choose(hit.place.screen, hit.place.id);
     hit.command?.run(app);
   }
 

@@ -4,6 +4,7 @@ import { useAppState } from '../state/index.ts';
 export function StatusBar() {
   const findings = useAppState((state) => state.simulation?.findings);
   const notice = useAppState((state) => state.notice);
+  const units = useAppState((state) => (state.units === 'SI' ? 'SI' : 'fields in inch-pound'));
   if (!findings) {
     return (
       <footer className="status">
@@ -11,7 +12,7 @@ export function StatusBar() {
           {notice ?? 'Works without the internet. Nothing leaves this computer.'}
         </span>
         <span className="right">Estimates for design. Check against local codes.</span>
-        <span>SI</span>
+        <span>{units}</span>
       </footer>
     );
   }
@@ -49,7 +50,7 @@ export function StatusBar() {
         </>
       )}
       <span className="right">Estimates for design. Check against local codes.</span>
-      <span>SI</span>
+      <span>{units}</span>
     </footer>
   );
 }

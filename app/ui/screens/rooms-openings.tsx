@@ -9,6 +9,7 @@ import {
   type SurfaceForm,
 } from '../../project/index.ts';
 import { shownUnit } from '../format/index.ts';
+import { CopyTable } from '../parts/copy-table.tsx';
 import { FormCell, FormChoice } from '../parts/form-cell.tsx';
 import { NumberCell } from '../parts/number-cell.tsx';
 import { useApp, useAppState } from '../state/index.ts';
@@ -38,7 +39,10 @@ export function OpeningTable({ building, room, path }: OpeningTableProps) {
   const length = shownUnit('length', system).unit;
   return (
     <>
-      <h2 className="table-head">Windows and glazed doors</h2>
+      <h2 className="table-head">
+        Windows and glazed doors{' '}
+        {rows.length > 0 && <CopyTable label={`Windows of ${room.name}`} />}
+      </h2>
       {rows.length === 0 ? (
         <p className="quiet">None yet. "Add window" stands at each surface that looks outdoors.</p>
       ) : (

@@ -1,5 +1,6 @@
 // One room as plain tables: its sizes, its surfaces, its windows. No drawing is needed.
 
+import { useState } from 'react';
 import {
   addSurface,
   copyRoom,
@@ -7,17 +8,22 @@ import {
   type ProjectForm,
   type RoomForm,
   removeRoom,
+  surfaceRowsEdit,
 } from '../../project/index.ts';
 import { figure } from '../format/index.ts';
+import { CopyTable } from '../parts/copy-table.tsx';
 import { FormCell } from '../parts/form-cell.tsx';
+import { PasteDialog } from '../parts/paste-dialog.tsx';
 import { TextCell } from '../parts/text-cell.tsx';
 import { useApp, useAppState, useEditedProject } from '../state/index.ts';
 import { OpeningTable } from './rooms-openings.tsx';
+import { surfaceColumns, surfaceRow } from './rooms-paste.ts';
 import { SurfaceTable } from './rooms-surfaces.tsx';
 
 export function Rooms() {
   const app = useApp();
   const project = useEditedProject();
+  const [isPasting, setPasting] = useState(false);
   const chosen = useAppState((state) => state.chosen.rooms);
   if (!project) return null;
   const { form, building } = project;
@@ -50,6 +56,9 @@ export function Rooms() {
           <button type="button" className="button" onClick={() => app.edit(addSurface(room, wall))}>
             Add surface
           </button>
+          <button type="button" className="button" onClick={() => setPasting(true)}>
+            Paste surfaces…
+          </button>
           <button
             type="button"
             className="button"
@@ -72,8 +81,18 @@ export function Rooms() {
         </span>
       </div>
       <RoomSizes form={form} room={room} path={path} />
+      <CopyTable label={`Surfaces of ${room.name}`} />
       <SurfaceTable form={form} building={building} room={room} path={path} />
       <OpeningTable building={building} room={room} path={path} />
+      {isPasting && (
+        <PasteDialog
+          label="Paste surfaces"
+          note="One surface a row. A surface of the same name is changed, others are added, outdoors."
+          columns={surfaceColumns(building)}
+          onTake={(rows) => app.edit(surfaceRowsEdit(room, rows.map(surfaceRow)))}
+          onClose={() => setPasting(false)}
+        />
+      )}
     </div>
   );
 }

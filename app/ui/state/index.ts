@@ -26,6 +26,7 @@ export {
   type EditedProject,
   explainedOf,
   type ReadProject,
+  readProject,
   useEditedProject,
   useProject,
 } from './use-project.ts';
