@@ -20,12 +20,18 @@ export function SheetDialog({ label, className = '', onClose, children }: SheetD
     };
   }, []);
   return (
-    // biome-ignore lint/a11y/useKeyWithClickEvents: Escape closes a dialog by itself
     <dialog
       ref={ref}
       aria-label={label}
       className={className}
       onClose={onClose}
+      onKeyDown={(event) => {
+        // At once: the close event of the browser comes a moment later, when the next key may be down.
+        if (event.key !== 'Escape') return;
+        event.preventDefault();
+        event.stopPropagation();
+        onClose();
+      }}
       onClick={(event) => event.target === ref.current && onClose()}
     >
       <div className="dialog-body">{children}</div>

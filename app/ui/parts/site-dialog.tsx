@@ -61,7 +61,7 @@ export function SiteDialog() {
       <form onSubmit={submit}>
         <h2>Site of {file}</h2>
         <p className="quiet">
-          The sun is placed by these. They are used for this run; the files stay as they are.
+          The sun is placed by these. The project keeps them with the table that it names.
         </p>
         <div className="field">
           <label htmlFor={nameId}>Name</label>

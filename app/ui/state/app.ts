@@ -6,7 +6,14 @@ import type { Site } from '../../../weather/index.ts';
 import { emptyProject, projectText } from '../../project/index.ts';
 import type { Desk, DeskFiles, OpenedFile, OpenedProject, RecentProject } from '../desk/index.ts';
 import { type AppState, firstState, type Screen } from './app-state.ts';
-import { adoptDraft, type Documents, fileName, makeDocuments, openDocument } from './documents.ts';
+import {
+  adoptDraft,
+  type Documents,
+  fileName,
+  makeDocuments,
+  openDocument,
+  weatherFileOf,
+} from './documents.ts';
 import { makeRuns, type RunYear, unnamed } from './runs.ts';
 
 export interface App extends Documents {
@@ -174,7 +181,14 @@ export function createApp(
     },
     giveSite(site) {
       set({ site, dialog: null, isStale: get().simulation !== null });
-      void runs.run();
+      const { document } = get();
+      // The project keeps the site with the table it names, so that it is not asked for again.
+      const isNamed = document && weatherFileOf(document.story.now.document) !== null;
+      if (isNamed) {
+        const value = { ...site };
+        documents.edit({ name: 'Site of the table', changes: [{ path: 'weather.site', value }] });
+      }
+      if (!isNamed || get().document?.story === document.story) void runs.run();
     },
     closeProject() {
       guard('closing the project', () => {
