@@ -29,6 +29,7 @@ export function Sheet() {
   const simulation = useAppState((state) => state.simulation);
   const roomId = useAppState((state) => state.roomId);
   const isStale = useAppState((state) => state.isStale);
+  const hasWeather = useAppState((state) => state.weather !== null);
   const hasForm = useProject().form !== null;
   if (screen === 'welcome') return <Welcome />;
   const room = simulation && roomResult(simulation, roomId);
@@ -37,6 +38,14 @@ export function Sheet() {
     return (
       <>
         <RunTrouble />
+        {!hasWeather && hasForm && (
+          <section className="quiet-note" aria-label="No weather yet">
+            <span>No weather yet, so nothing is run.</span>
+            <button type="button" className="link" onClick={() => void app.openWeather()}>
+              Read a weather table
+            </button>
+          </section>
+        )}
         {hasForm ? <Editor /> : <Unreadable />}
       </>
     );

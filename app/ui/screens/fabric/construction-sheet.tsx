@@ -98,7 +98,9 @@ export function ConstructionSheet({ form, building, construction }: Construction
           onCommit={(name) => app.edit(constructionEdit(own, 'name', name, `Named ${name}`))}
         />
         <span className="quiet">
-          {areaM2 > 0 ? `${figure(areaM2)} m² in ${rooms} rooms` : 'not used yet'}
+          {areaM2 > 0
+            ? `${figure(areaM2)} m² in ${rooms === 1 ? '1 room' : `${rooms} rooms`}`
+            : 'not used yet'}
         </span>
         <span className="sheet-acts">
           <button type="button" className="button" onClick={() => setPicking('material')}>

@@ -48,7 +48,7 @@ export function GlazingSheet({ form, building, glazing }: GlazingSheetProps) {
         />
         <span className="quiet">
           {openings.length > 0
-            ? `${figure(areaM2, 1)} m² in ${openings.length} windows`
+            ? `${figure(areaM2, 1)} m² in ${openings.length === 1 ? '1 window' : `${openings.length} windows`}`
             : 'not used yet'}
         </span>
         <span className="sheet-acts">

@@ -88,7 +88,7 @@ export function PaneTable({ glazing, onChange }: PaneTableProps) {
         </>
       }
     >
-      <table className="layers">
+      <table className="layers grid-table">
         <thead>
           <tr>
             <th scope="col">Pane or gap</th>

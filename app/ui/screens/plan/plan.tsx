@@ -90,7 +90,10 @@ function PlanSheet({ form, plan }: { form: ProjectForm; plan: Drawing }) {
       <div className="sheet-head">
         <h1>Plan</h1>
         <span className="quiet">
-          inner sizes{undrawn > 0 ? `; ${figure(undrawn)} rooms are in tables only` : ''}
+          inner sizes
+          {undrawn > 0
+            ? `; ${undrawn === 1 ? '1 room is' : `${figure(undrawn)} rooms are`} in tables only`
+            : ''}
         </span>
         <span className="sheet-acts">
           <Choice label="Snap to" value={snap} options={snaps} onChoose={setSnap} />
