@@ -1,10 +1,13 @@
 // The convective conductance of a gas gap as a table, so that the march looks it up.
 import type { PaneGlazing } from '../building/index.ts';
+import type { ConductanceTable } from '../network/index.ts';
 import { cavityConvectiveWPerM2K, cavityGas } from '../physics/index.ts';
 
 export interface GapLaw {
   /** From the temperatures of the two faces, outer first [W/(m²·K)]. */
   readonly conductanceWPerM2K: (outerC: number, innerC: number) => number;
+  /** The same for a gap of this area, as the network looks it up [W/K]. */
+  readonly tableOf: (areaM2: number) => ConductanceTable;
   readonly method: string;
 }
 
@@ -43,6 +46,16 @@ export function gapLaw(
   const lastColumn = columns - 1.000001;
   return {
     method: 'natural convection in a glazing cavity (ISO 15099), at the site’s pressure',
+    tableOf: (areaM2) => ({
+      factor: areaM2,
+      values: table,
+      rows,
+      columns,
+      firstMeanC: coldestC,
+      rowStepK: meanStepK,
+      firstDifferenceK: -mostDifferenceK,
+      columnStepK: differenceStepK,
+    }),
     conductanceWPerM2K(outerC, innerC) {
       const row = Math.min(lastRow, Math.max(0, ((outerC + innerC) / 2 - coldestC) / meanStepK));
       const column = Math.min(

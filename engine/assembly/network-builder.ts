@@ -1,6 +1,7 @@
 // Collects nodes, links and sources one by one, each with its provenance, and packs them into the
 // arrays of a Network. The only place that knows both the names and the numbers of things.
 import type {
+  ConductanceTable,
   Enclosure,
   LinkGroup,
   Meter,
@@ -62,6 +63,7 @@ export class NetworkBuilder {
   private readonly laws = {
     ...rows(),
     law: [] as ((fromC: number, toC: number, step: number) => number)[],
+    table: [] as (ConductanceTable | null)[],
   };
   private readonly enclosures: Enclosure[] = [];
   private readonly directed = { ...rows(), rate: [] as number[], series: [] as number[] };
@@ -166,13 +168,16 @@ export class NetworkBuilder {
     return pushed(this.radiant, from, to, about, group.radiant);
   }
 
+  /** Any law of the two temperatures and the step; where it is a table, that serves in its place. */
   functionLink(
     from: number,
     to: number,
     law: (fromC: number, toC: number, step: number) => number,
     about: Provenance,
+    table: ConductanceTable | null = null,
   ): LinkRef {
     this.laws.law.push(law);
+    this.laws.table.push(table);
     return pushed(this.laws, from, to, about, group.function);
   }
 
@@ -262,6 +267,7 @@ export class NetworkBuilder {
         law: 'function',
         ...ends(laws),
         conductanceWPerK: (k, fromC, toC, step) => lawList[k](fromC, toC, step),
+        tables: [...laws.table],
       },
     ];
     return {

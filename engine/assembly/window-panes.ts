@@ -87,6 +87,7 @@ export function addPanes(
       ends[1],
       (a, b) => areaM2 * law.conductanceWPerM2K(a, b),
       about(`gas gap ${g + 1}, ${gap.gas}`, law.method, { areaM2, thicknessM: gap.thicknessM }),
+      law.tableOf(areaM2),
     );
     const emittance = 1 / (1 / emissivities[0] + 1 / emissivities[1] - 1);
     builder.radiantLink(

@@ -17,6 +17,8 @@ export interface SparseLu {
   readonly work: Float64Array;
   /** First later row that each row is coupled to, or −1: its parent in the elimination tree. */
   readonly parent: Int32Array;
+  /** Whether a row's columns follow one another: 1 below the diagonal, 2 above it, 3 both. */
+  readonly runs: Uint8Array;
   /** By slot; 1 for a row whose entries changed since it was factored. */
   readonly dirty: Uint8Array;
 }
@@ -40,6 +42,12 @@ export function createLu(order: Order, slots: number): SparseLu {
     column[diagonal[i]] = i;
     column.set(order.upper[i], diagonal[i] + 1);
   }
+  const isRun = (from: number, to: number) =>
+    to <= from || column[to - 1] - column[from] === to - 1 - from;
+  const runs = Uint8Array.from(diagonal, (diag, i) => {
+    const below = isRun(rowStart[i], diag) ? 1 : 0;
+    return below + (isRun(diag + 1, rowStart[i + 1]) ? 2 : 0);
+  });
   return {
     size: n,
     rowStart,
@@ -49,6 +57,7 @@ export function createLu(order: Order, slots: number): SparseLu {
     inverse: new Float64Array(n),
     work: new Float64Array(n),
     parent: Int32Array.from(order.upper, (columns) => (columns.length > 0 ? columns[0] : -1)),
+    runs,
     dirty: new Uint8Array(slots).fill(1),
   };
 }

@@ -50,6 +50,7 @@ export function arraysOf(stepper: Stepper, recorder: Recorder): Record<string, N
     work: stage.lu.work,
     parent: stage.lu.parent,
     dirty: stage.lu.dirty,
+    runs: stage.lu.runs,
     driven: stage.driven.driven,
     drivenFrom: stage.driven.from,
     drivenTo: stage.driven.to,

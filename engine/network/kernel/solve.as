@@ -1,8 +1,8 @@
 // One stage, block by block: the same method as engine/network/stage-solve.ts and stage-matrix.ts.
 
-import { again, at, atFrom, atTo, b, before, blockBends, blockCount, blockEnclosureStart, blockEnclosures, blockLinkStart, blockOf, blockRowStart, blockUnitStart, blockUnits, column, constant, converged, diagonal, dirty, driven, drivenAtFrom, drivenAtTo, drivenCount, drivenG, drivenOwnFrom, drivenOwnTo, emissionSlope, emissionSlopeNow, enclosureCount, enclosureStart, entries, exchangeEntry, exchangeM2, faintA, faintB, faintCount, faintFlowW, faintSum, faintWPerK, faintWeight, firstFixed, flowW, inverse, isNode, iterations, linkCount, linkFrom, linkTo, linkWeight, loaded, matrix, maxIterations, memberRow, memberSlot, memberWeight, nowFrom, nowTo, ownFrom, ownTo, parent, rest, restSum, rowStart, rowSumM2, sensorEntry, sensorSlot, sensorStart, sensorWeight, setConverged, setIterations, setLoaded, setSingular, setSolves, singular, slopeFrom, slopeTo, slots, solves, toleranceK, unitBandK, unitChillerW, unitCoolC, unitCount, unitHeatC, unitHeatSeries, unitHeaterW, unitHigh, unitInMatrix, unitLine, unitLow, unitMode, unitOwn, unitRow, unitZero, values, work } from "./fields";
+import { again, at, atFrom, atTo, b, before, blockBends, blockCount, blockEnclosureStart, blockEnclosures, blockLinkStart, blockOf, blockRowStart, blockUnitStart, blockUnits, column, constant, converged, diagonal, dirty, driven, drivenAtFrom, drivenAtTo, drivenCount, drivenG, drivenOwnFrom, drivenOwnTo, emissionSlope, emissionSlopeNow, enclosureCount, enclosureStart, entries, exchangeEntry, exchangeM2, faintA, faintB, faintCount, faintFlowW, faintSum, faintWPerK, faintWeight, firstFixed, flowW, inverse, isNode, iterations, linkCount, linkFrom, linkTo, linkWeight, loaded, matrix, maxIterations, memberRow, memberSlot, memberWeight, nowFrom, nowTo, ownFrom, ownTo, parent, rest, restSum, rowStart, rowSumM2, runs, sensorEntry, sensorSlot, sensorStart, sensorWeight, setConverged, setIterations, setLoaded, setSingular, setSolves, singular, slopeFrom, slopeTo, slots, solves, toleranceK, unitBandK, unitChillerW, unitCoolC, unitCount, unitHeatC, unitHeatSeries, unitHeaterW, unitHigh, unitInMatrix, unitLine, unitLow, unitMode, unitOwn, unitRow, unitZero, values, work } from "./fields";
 import { addEnclosureRest, evaluateEmission, evaluateLinks } from "./laws";
-import { add, f, i32at, mark, set, u8at } from "./memory";
+import { add, clearBytes, dot, f, i32at, mark, place, set, takeOff, u8at } from "./memory";
 
 const lagLimit: f64 = 0.003;
 const leastContraction: f64 = 0.003;
@@ -156,7 +156,10 @@ function factorDirty(from: i32, to: i32): i32 {
       set(values, p, l);
       const earlier = f(work, i);
       const kEnd = i32at(rowStart, k + 1);
-      for (let q = i32at(diagonal, k) + 1; q < kEnd; q++) add(work, i32at(column, q), -(l * f(values, q)));
+      const kFirst = i32at(diagonal, k) + 1;
+      if (u8at(runs, k) & 2) {
+        if (kFirst < kEnd) takeOff(place(work, i32at(column, kFirst)), place(values, kFirst), l, kEnd - kFirst);
+      } else for (let q = kFirst; q < kEnd; q++) add(work, i32at(column, q), -(l * f(values, q)));
       if (own == 0) scale += Math.abs(f(work, i) - earlier);
     }
     for (let p = diag; p < end; p++) set(values, p, f(work, i32at(column, p)));
@@ -213,7 +216,7 @@ function refresh(block: i32): i32 {
   const first = i32at(blockUnitStart, block);
   const last = i32at(blockUnitStart, block + 1);
   for (let tries = 0; ; tries++) {
-    assembleUnits(first, last);
+    if (last > first) assembleUnits(first, last);
     const failed = factorDirty(i32at(blockRowStart, block), i32at(blockRowStart, block + 1));
     if (failed < 0) return -1;
     let u = -1;
@@ -322,19 +325,29 @@ function solveBlock(block: i32, x: usize): void {
   if (singular >= 0) return;
   const from = i32at(blockRowStart, block);
   const to = i32at(blockRowStart, block + 1);
+  if (to == from + 1 && i32at(blockUnitStart, block) == i32at(blockUnitStart, block + 1)) {
+    set(x, from, (f(before, from) + f(restSum, from) + f(faintSum, from)) * f(inverse, from));
+    return;
+  }
   for (let i = from; i < to; i++) set(b, i, f(before, i) + f(restSum, i) + f(faintSum, i));
   loadUnits(i32at(blockUnitStart, block), i32at(blockUnitStart, block + 1), x);
   const rhs = b;
   for (let i = from; i < to; i++) {
     let sum = f(rhs, i);
     const diag = i32at(diagonal, i);
-    for (let p = i32at(rowStart, i); p < diag; p++) sum -= f(values, p) * f(rhs, i32at(column, p));
+    const begin = i32at(rowStart, i);
+    if (u8at(runs, i) & 1) {
+      if (begin < diag) sum -= dot(place(values, begin), place(rhs, i32at(column, begin)), diag - begin);
+    } else for (let p = begin; p < diag; p++) sum -= f(values, p) * f(rhs, i32at(column, p));
     set(rhs, i, sum);
   }
   for (let i = to - 1; i >= from; i--) {
     let sum = f(rhs, i);
     const end = i32at(rowStart, i + 1);
-    for (let p = i32at(diagonal, i) + 1; p < end; p++) sum -= f(values, p) * f(x, i32at(column, p));
+    const begin = i32at(diagonal, i) + 1;
+    if (u8at(runs, i) & 2) {
+      if (begin < end) sum -= dot(place(values, begin), place(x, i32at(column, begin)), end - begin);
+    } else for (let p = begin; p < end; p++) sum -= f(values, p) * f(x, i32at(column, p));
     set(x, i, sum * f(inverse, i));
   }
 }
@@ -432,7 +445,7 @@ export function solveStage(x: usize, step: i32): void {
     if (singular >= 0) return;
   }
   for (let sweep = 0; ; sweep++) {
-    memory.fill(again, 0, blockCount);
+    clearBytes(again, blockCount);
     const found = renewFaint(x, 0.1 * toleranceK);
     if (!found && sweep > 0) break;
     if (sweep >= maxIterations) {

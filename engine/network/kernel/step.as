@@ -1,7 +1,7 @@
 // One step after another: the same method as engine/network/stepper.ts, chain-modes.ts, balance.ts and recorder.ts.
 
 import { at, before, byA, byB, chainCount, chainEnd, chainEndCount, chainEndExchange, chainEndOther, chainEndOwn, chainEndSlot, chainJ, chainSlotA, chainSlotB, coefficients, converged, crossCount, crossDriven, crossDrivenCount, crossDrivenSign, crossG, crossInside, crossLaw, crossLawCount, crossLawSign, crossMember, crossMemberCount, crossOutside, decay1, directedFrom, dirty, drive1A, drive1B, driven, drivenAll, drivenAtFrom, drivenAtTo, drivenCount, drivenFrom, drivenG, drivenOwnFrom, drivenOwnTo, drivenRate, drivenSeries, drivenTo, emissionRest, emissionSlope, enclosureStart, exchangeM2, firstChain, firstFixed, fixedCount, fixedSeries, heatJ, heldCount, heldFactor, heldOf, heldRow, heldW, history, historyNow, inflowCount, inflowLink, inflowRow, inflowSlot, iterations, linkFrom, linkTo, matrix, memberEnclosure, memberRow, memberSlot, meterCount, meterEntry, meterFactor, meterStart, modeStart, modes1, modes2, movingCount, movingFactor, movingOf, movingRow, readHeldCount, readHeldIndex, readMovingCount, readMovingIndex, readMovingLinear, recordedAt, recordedChain, recordedCount, recordedSlot, rest, restSum, rows, secondAA, secondAB, secondBB, series, shape, shapeStart, singular, slopeFrom, slopeTo, sourceAbs, sourceCount, sourceSeries, sourceSum, startC, storage, storedJPerK, storing, storingCount, sum, sumCount, unitBandK, unitChillerSeries, unitChillerW, unitCoolC, unitCoolSeries, unitCount, unitHeatC, unitHeatSeries, unitHeaterSeries, unitHeaterW, unitHigh, unitLow, unitMode, unitRow, unitShare, unitW, unitZero, watchChain, watchDriven, watchDrivenCount, watchInside, watchInsideCount, watchLaw, watchLawCount, watchMember, watchMemberCount, watchSeries, watchSeriesCount, watchSlots, watchSlotsCount, watchStored, watchStoredChain, watchStoredCount, z } from "./fields";
-import { add, f, i32at, mark, set } from "./memory";
+import { add, clearNumbers, copyBytes, f, i32at, mark, set } from "./memory";
 import { solveStage } from "./solve";
 
 const gamma: f64 = 1 - Math.SQRT1_2;
@@ -319,7 +319,7 @@ function endStep(meanC: usize, endC: usize, meterW: usize): void {
   }
   recordCount++;
   stepsInRecord = 0;
-  memory.fill(sum, 0, (<usize>sumCount) << 3);
+  clearNumbers(sum, sumCount);
 }
 
 /**
@@ -346,19 +346,19 @@ export function run(first: i32, count: i32, held: usize, heldStride: i32, moving
       changed = true;
     }
     if (changed) {
-      memory.fill(heldW, 0, (<usize>rows) << 3);
+      clearNumbers(heldW, rows);
       for (let k = 0; k < heldCount; k++) add(heldW, i32at(heldRow, k), f(heldFactor, k) * f(series, i32at(heldOf, k)));
     }
     readMoving(moving, movingStride, n, gamma);
     setUnitBounds(x0, 1);
-    memory.copy(unitMode, modes1, unitCount);
+    copyBytes(unitMode, modes1, unitCount);
     const back = gamma / (1 - gamma);
     for (let i = 0; i < rows; i++) set(x1, i, f(x0, i) + back * (f(x0, i) - f(x1, i)));
     loadStage(x0, 1, 0, x1);
     addHistory(false);
     solveStage(x1, step);
     if (singular >= 0) return fail(singular, n);
-    memory.copy(modes1, unitMode, unitCount);
+    copyBytes(modes1, unitMode, unitCount);
     totalIterations += <f64>iterations;
     let good = converged;
     addStageFlows(x1, 1 - gamma);
@@ -366,13 +366,13 @@ export function run(first: i32, count: i32, held: usize, heldStride: i32, moving
 
     readMoving(moving, movingStride, n, 1);
     setUnitBounds(x1, gamma);
-    memory.copy(unitMode, modes2, unitCount);
+    copyBytes(unitMode, modes2, unitCount);
     for (let i = 0; i < rows; i++) set(x2, i, f(x1, i) + carry * (f(x1, i) - f(x0, i)));
     loadStage(x1, 1 - carry, carry, x2);
     addHistory(true);
     solveStage(x2, step);
     if (singular >= 0) return fail(singular, n);
-    memory.copy(modes2, unitMode, unitCount);
+    copyBytes(modes2, unitMode, unitCount);
     totalIterations += <f64>iterations;
     good = good && converged;
     addStageFlows(x2, gamma);
