@@ -9,7 +9,8 @@ import { roundTicks } from '../../chart/ticks.ts';
 import { useWidth } from '../../chart/use-width.ts';
 import { figure } from '../../format/index.ts';
 import { layerHatch, SectionHatches } from './section-hatches.tsx';
-import { type LayerPlace, sectionScale } from './section-scale.ts';
+import { sectionScale } from './section-scale.ts';
+import { wetPath } from './wet-path.ts';
 
 export interface SectionDrawingProps {
   readonly construction: ConstructionForm;
@@ -269,35 +270,6 @@ export function SectionDrawing(props: SectionDrawingProps) {
       </div>
     </Drawing>
   );
-}
-
-/** Where the dew point lies above the temperature. */
-function wetPath(
-  { layers }: ConstructionSection,
-  places: readonly LayerPlace[],
-  y: (celsius: number) => number,
-): string {
-  return layers
-    .flatMap(({ outerC, innerC, dewPointC }, i) => {
-      const at = places[i];
-      if (!at || !dewPointC) return [];
-      const last = dewPointC.length - 1;
-      const point = (p: number) => {
-        const share = p / last;
-        return {
-          x: at.x + at.width * share,
-          t: outerC + share * (innerC - outerC),
-          dew: dewPointC[p] ?? 0,
-        };
-      };
-      return dewPointC.slice(1).map((_, p) => {
-        const [a, b] = [point(p), point(p + 1)];
-        if (a.dew <= a.t && b.dew <= b.t) return '';
-        const up = (one: typeof a) => y(Math.max(one.dew, one.t)).toFixed(1);
-        return `M${a.x} ${y(a.t).toFixed(1)}L${a.x} ${up(a)}L${b.x} ${up(b)}L${b.x} ${y(b.t).toFixed(1)}Z`;
-      });
-    })
-    .join('');
 }
 
 const pxPerLetter = 6.2;
