@@ -62,6 +62,17 @@ function lagOf(stage: Stage, l: number): number {
   return Math.max(byFrom, byTo) * linkWeight[l];
 }
 
+/** The same of the emission slopes of enclosure e, largest of its members. */
+function enclosureLag(stage: Stage, e: number): number {
+  const { start, slopeNow, slope } = stage.enclosures;
+  let worst = 0;
+  for (let m = start[e]; m < start[e + 1]; m++) {
+    const lag = Math.abs(slopeNow[m] - slope[m]) * stage.memberWeight[m];
+    if (lag > worst) worst = lag;
+  }
+  return worst;
+}
+
 /**
  * Evaluates the laws of a block at `at` and sums what their linearisations leave, with the slopes in the
  * matrix. Where one of these lags by more than `limit` (as a share of its nodes' own entries), all that
@@ -75,7 +86,7 @@ export function linearise(
   step: number,
   limit: number,
 ): number {
-  const { laws, slopeFrom, slopeTo, rest, restSum, at, enclosures, blocks, memberWeight } = stage;
+  const { laws, slopeFrom, slopeTo, rest, restSum, at, enclosures, blocks } = stage;
   const first = blocks.linkStart[block];
   const last = blocks.linkStart[block + 1];
   evaluateLinks(laws, first, last, at, series, step);
@@ -92,23 +103,22 @@ export function linearise(
     const lag = lagOf(stage, l);
     if (lag > worst) worst = lag;
   }
-  const { slopeNow, slope, start } = enclosures;
   const firstEnclosure = blocks.enclosureStart[block];
   const lastEnclosure = blocks.enclosureStart[block + 1];
   for (let k = firstEnclosure; k < lastEnclosure; k++) {
     const e = blocks.enclosures[k];
     evaluateEmission(enclosures, e, at);
-    for (let m = start[e]; m < start[e + 1]; m++) {
-      const lag = Math.abs(slopeNow[m] - slope[m]) * memberWeight[m];
-      if (lag > worst) worst = lag;
-    }
+    const lag = enclosureLag(stage, e);
+    if (lag > worst) worst = lag;
   }
   if (worst > limit) {
     const quarter = limit / 4;
     worst = Math.max(quarter, 0);
     for (let l = first; l < last; l++) if (lagOf(stage, l) > quarter) renewLink(stage, l);
     for (let k = firstEnclosure; k < lastEnclosure; k++) {
-      renewEnclosure(enclosures, blocks.enclosures[k], stage.matrix, stage.lu.dirty);
+      const e = blocks.enclosures[k];
+      if (enclosureLag(stage, e) <= quarter) continue;
+      renewEnclosure(enclosures, e, stage.matrix, stage.lu.dirty);
     }
   }
   for (let k = firstEnclosure; k < lastEnclosure; k++) {

@@ -97,6 +97,16 @@ function renewEnclosure(e: i32): void {
   }
 }
 
+function enclosureLag(e: i32): f64 {
+  let worst: f64 = 0;
+  const end = i32at(enclosureStart, e + 1);
+  for (let m = i32at(enclosureStart, e); m < end; m++) {
+    const lag = Math.abs(f(emissionSlopeNow, m) - f(emissionSlope, m)) * f(memberWeight, m);
+    if (lag > worst) worst = lag;
+  }
+  return worst;
+}
+
 function linearise(block: i32, step: i32, limit: f64): f64 {
   const first = i32at(blockLinkStart, block);
   const last = i32at(blockLinkStart, block + 1);
@@ -119,17 +129,17 @@ function linearise(block: i32, step: i32, limit: f64): f64 {
   for (let k = firstEnclosure; k < lastEnclosure; k++) {
     const e = i32at(blockEnclosures, k);
     evaluateEmission(e);
-    const end = i32at(enclosureStart, e + 1);
-    for (let m = i32at(enclosureStart, e); m < end; m++) {
-      const lag = Math.abs(f(emissionSlopeNow, m) - f(emissionSlope, m)) * f(memberWeight, m);
-      if (lag > worst) worst = lag;
-    }
+    const lag = enclosureLag(e);
+    if (lag > worst) worst = lag;
   }
   if (worst > limit) {
     const quarter = limit / 4;
     worst = Math.max(quarter, 0);
     for (let l = first; l < last; l++) if (lagOf(l) > quarter) renewLink(l);
-    for (let k = firstEnclosure; k < lastEnclosure; k++) renewEnclosure(i32at(blockEnclosures, k));
+    for (let k = firstEnclosure; k < lastEnclosure; k++) {
+      const e = i32at(blockEnclosures, k);
+      if (!(enclosureLag(e) <= quarter)) renewEnclosure(e);
+    }
   }
   for (let k = firstEnclosure; k < lastEnclosure; k++) addEnclosureRest(i32at(blockEnclosures, k));
   return worst;
