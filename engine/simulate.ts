@@ -53,10 +53,11 @@ export function* simulate(
 ): Generator<Progress, Simulation> {
   const now = options.nowMs ?? (() => 0);
   const started = now();
+  const memory = options.memory ?? emptyMemory();
   const how: Changing<AssemblyOptions> = {
     stepMinutes: options.stepMinutes ?? 15,
     refine: options.refine ?? 1,
-    memory: options.memory ?? emptyMemory(),
+    memory,
   };
   const learns = building.rooms.some((room) => room.heating?.optimumStart !== undefined);
   yield { done: 0, what: 'assembling the network' };
@@ -64,7 +65,10 @@ export function* simulate(
   let assembleMs = now() - started;
   const notes: string[] = [];
   if (learns) {
-    const starts = learnStarts(assembly, yield* wholeMarch(assembly, 'learning when to start', 0));
+    const starts = learnStarts(
+      assembly,
+      yield* wholeMarch(assembly, memory.kernel, 'learning when to start', 0),
+    );
     const again = now();
     how.heatingRamps = new Map([...starts].map(([room, { ramp }]) => [room, ramp]));
     assembly = assemble(building, weather, how);
@@ -75,7 +79,7 @@ export function* simulate(
     }
   }
   const asks = assembly.rooms.some((room) => room.windows.some((one) => one.byRoom.length > 0));
-  let run = yield* wholeMarch(assembly, 'running the year', learns ? 0.5 : 0);
+  let run = yield* wholeMarch(assembly, memory.kernel, 'running the year', learns ? 0.5 : 0);
   let drawn = asks ? nextDrawn(assembly, run, null) : null;
   let passes = 1;
   while (drawn && drawn.gapShare > settledShare && passes < mostPasses) {
@@ -83,7 +87,7 @@ export function* simulate(
     how.drawnByRoom = drawn.next;
     assembly = assemble(building, weather, how);
     assembleMs += now() - again;
-    run = yield* wholeMarch(assembly, 'settling the blinds', 0.5);
+    run = yield* wholeMarch(assembly, memory.kernel, 'settling the blinds', 0.5);
     drawn = nextDrawn(assembly, run, drawn);
     passes++;
   }
@@ -99,8 +103,14 @@ export function* simulate(
 type Changing<T> = { -readonly [K in keyof T]: T[K] };
 
 /** One march to its end; `from` is how much of the work lies behind it already. */
-function* wholeMarch(assembly: Assembly, what: string, from: number): Generator<Progress, Run> {
-  const march = marchSteps(assembly.problem, { toleranceK: 1e-6, maxIterations: 50 });
+function* wholeMarch(
+  assembly: Assembly,
+  kernel: Uint8Array | null,
+  what: string,
+  from: number,
+): Generator<Progress, Run> {
+  const method = { toleranceK: 1e-6, maxIterations: 50, ...(kernel ? { kernel } : {}) };
+  const march = marchSteps(assembly.problem, method);
   const part = (done: number) => from + (1 - from) * done;
   let next = march.next();
   while (!next.done) {

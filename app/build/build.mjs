@@ -5,6 +5,7 @@
 import { spawnSync } from 'node:child_process';
 import { existsSync, renameSync, rmSync, writeFileSync } from 'node:fs';
 import { join } from 'node:path';
+import { compileKernel } from './kernel.mjs';
 import { dist, root, stampFile } from './paths.mjs';
 import { sourcesStamp } from './stamp.mjs';
 
@@ -99,6 +100,7 @@ export async function build() {
   if (Object.keys(cjs).length > 0) await vite.build(nodeBuild(cjs, 'cjs', 'cjs', fresh));
   if (existsSync(join(root, 'app', 'ui', 'index.html')))
     await vite.build(await rendererBuild(fresh));
+  writeFileSync(join(fresh, 'kernel.wasm'), await compileKernel());
   rmSync(dist, { recursive: true, force: true });
   renameSync(fresh, dist);
   makeDemoWeather();

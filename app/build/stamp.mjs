@@ -6,7 +6,7 @@ import { join } from 'node:path';
 import { demoWeather, root, stampFile } from './paths.mjs';
 
 const folders = ['app', 'demo', 'engine', 'weather'];
-const source = /\.(ts|tsx|mts|mjs|cjs|js|css|html|svg|json|woff2|png)$/;
+const source = /\.(as|ts|tsx|mts|mjs|cjs|js|css|html|svg|json|woff2|png)$/;
 /** Written by a run of the demo, or data that it reads: not part of a build. */
 const notSource = /^demo[\\/](out[\\/]|.*\.json$)/;
 

@@ -1,5 +1,5 @@
-import { type Findings, type Simulation, simulate } from '../../engine/index.ts';
-import { writeFolderWhole } from '../disk/index.ts';
+import { emptyMemory, type Findings, type Simulation, simulate } from '../../engine/index.ts';
+import { readKernel, writeFolderWhole } from '../disk/index.ts';
 import { type Accuracy, accuracyOf, accuracyText } from './accuracy.ts';
 import { textOf } from './arguments.ts';
 import type { Command, Given } from './command.ts';
@@ -42,7 +42,12 @@ function run(
   readMs: number,
   terminal: Terminal,
 ): Simulation {
-  const steps = simulate(building, year, { ...fineness, readMs, nowMs: () => performance.now() });
+  const steps = simulate(building, year, {
+    ...fineness,
+    readMs,
+    memory: emptyMemory(readKernel()),
+    nowMs: () => performance.now(),
+  });
   let step = steps.next();
   while (!step.done) {
     terminal.progress(step.value.done, step.value.what);

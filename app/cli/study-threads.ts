@@ -8,6 +8,7 @@ import {
   type Study,
   type Weathers,
 } from '../../engine/index.ts';
+import { readKernel } from '../disk/index.ts';
 import { ask, type JobThreadData, type RunProgress } from '../run/index.ts';
 
 export interface StudyThreads {
@@ -35,7 +36,11 @@ export async function driveStudy<Result>(
   const { worker, count } = threads;
   if (worker === null || count < 2) return driveHere(study, weathers, options);
   const pool: Worker[] = [];
-  const workerData: JobThreadData = { serves: 'jobs', weathers: [...weathers] };
+  const workerData: JobThreadData = {
+    serves: 'jobs',
+    weathers: [...weathers],
+    kernel: readKernel(),
+  };
   const start = () => {
     const thread = new Worker(worker, { workerData });
     pool.push(thread);

@@ -8,6 +8,8 @@ import type { Work } from './serve.ts';
 export interface JobThreadData {
   readonly serves: 'jobs';
   readonly weathers: readonly (readonly [string, WeatherYear])[];
+  /** The solver's kernel, where whoever starts the thread could load it. */
+  readonly kernel: Uint8Array | null;
 }
 
 /** The weather where a thread was started for the runs of studies, null otherwise. */
@@ -16,9 +18,9 @@ export function jobThreadData(workerData: unknown): JobThreadData | null {
   return Reflect.get(workerData, 'serves') === 'jobs' ? (workerData as JobThreadData) : null;
 }
 
-export function jobWork({ weathers }: JobThreadData): (job: Job) => Work<JobResult> {
+export function jobWork({ weathers, kernel }: JobThreadData): (job: Job) => Work<JobResult> {
   const byName = new Map(weathers);
-  const memory = emptyMemory();
+  const memory = emptyMemory(kernel);
   return function* work(job) {
     return { ok: true, value: yield* runJob(job, byName, memory) };
   };

@@ -34,6 +34,8 @@ export class Kept<T> {
 
 /** All that is kept, for one weather year. A worker holds one of these as long as it lives. */
 export interface Memory {
+  /** The solver's kernel as bytes, where the host could load it. */
+  readonly kernel: Uint8Array | null;
   weather: WeatherYear | null;
   steps: Kept<WeatherSteps>;
   planes: Kept<PlaneIrradiance>;
@@ -42,8 +44,10 @@ export interface Memory {
   roomLight: Kept<RoomLight>;
 }
 
-export function emptyMemory(): Memory {
+/** @param kernel of the solver, for the runs of whoever holds the memory */
+export function emptyMemory(kernel: Uint8Array | null = null): Memory {
   return {
+    kernel,
     weather: null,
     steps: new Kept(),
     planes: new Kept(),
@@ -55,7 +59,7 @@ export function emptyMemory(): Memory {
 
 /** Makes a memory ready for an assembly: what belongs to another weather year is gone. */
 export function turnMemory(memory: Memory, weather: WeatherYear): void {
-  if (memory.weather !== weather) Object.assign(memory, emptyMemory(), { weather });
+  if (memory.weather !== weather) Object.assign(memory, emptyMemory(memory.kernel), { weather });
   for (const kept of [memory.steps, memory.planes, memory.faceSuns, memory.films, memory.roomLight])
     kept.next();
 }
